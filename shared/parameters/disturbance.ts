@@ -1,0 +1,41 @@
+import { z } from 'zod';
+import { numberField, section } from './fields';
+
+/** What enters at the electrodes beside the heart. */
+export const disturbanceSchema = section({
+  baselineWanderMv: numberField(0, {
+    label: 'Baseline wander',
+    unit: 'mV',
+    min: 0,
+    max: 2,
+    usual: [0, 0.3],
+    help: 'Slow drift with breathing, peak to peak at an electrode.',
+  }),
+  mainsMv: numberField(0, {
+    label: 'Mains hum',
+    unit: 'mV',
+    min: 0,
+    max: 1,
+    usual: [0, 0.1],
+    help: 'Amplitude of mains interference at an electrode.',
+  }),
+  mainsHz: z
+    .literal([50, 60])
+    .meta({
+      field: {
+        kind: 'choice',
+        label: 'Mains frequency',
+        options: { 50: '50 Hz', 60: '60 Hz' },
+        help: 'Frequency of the local supply.',
+      },
+    })
+    .default(50),
+  muscleMv: numberField(0, {
+    label: 'Muscle noise',
+    unit: 'mV',
+    min: 0,
+    max: 1,
+    usual: [0, 0.05],
+    help: 'Root-mean-square size of muscle activity at an electrode.',
+  }),
+});

@@ -1,0 +1,26 @@
+import { defineConfig } from 'vitest/config';
+
+// `unit` is the quick part of `npm run check`; `reference` holds the checks against things outside the project.
+export default defineConfig({
+  test: {
+    projects: [
+      { test: { name: 'unit', include: ['tests/unit/**/*.test.ts'], environment: 'node' } },
+      {
+        test: {
+          name: 'reference',
+          include: ['tests/reference/**/*.test.ts'],
+          environment: 'node',
+          testTimeout: 120_000,
+        },
+      },
+      {
+        test: {
+          name: 'command-line',
+          include: ['tests/command-line/**/*.test.ts'],
+          environment: 'node',
+          testTimeout: 120_000,
+        },
+      },
+    ],
+  },
+});
