@@ -1,0 +1,42 @@
+import { spawnSync } from 'node:child_process';
+
+/** Debian packages that some checks need; `present` tells without apt whether they are there. */
+const needed = [
+  {
+    name: 'python3-scipy',
+    checks: 'the recorder against SciPy on a real ECG record',
+    present: () => succeeds('/usr/bin/python3', ['-c', 'import scipy.signal, scipy.misc']),
+  },
+];
+
+function succeeds(command, args) {
+  return spawnSync(command, args, { stdio: 'ignore' }).status === 0;
+}
+
+/** How apt-get can be run here: as root, through sudo without a password, or not at all. */
+function aptPrefix() {
+  if (!succeeds('apt-get', ['--version'])) return null;
+  if (process.getuid?.() === 0) return [];
+  return succeeds('sudo', ['-n', 'true']) ? ['sudo', '-n'] : null;
+}
+
+function runApt(prefix, args) {
+  const [command, ...rest] = [...prefix, 'apt-get', ...args];
+  return spawnSync(command, rest, {
+    stdio: ['ignore', 'ignore', 'inherit'],
+    env: { ...process.env, DEBIAN_FRONTEND: 'noninteractive' },
+  }).status;
+}
+
+/** Installs what is missing where apt allows it; returns what is still missing. */
+export function ensureSystemPackages() {
+  const missing = needed.filter((one) => !one.present());
+  const prefix = missing.length > 0 ? aptPrefix() : null;
+  if (prefix) {
+    const names = missing.map((one) => one.name);
+    console.log(`Installing Debian packages: ${names.join(', ')} …`);
+    runApt(prefix, ['update', '-qq']);
+    runApt(prefix, ['install', '-y', '-qq', '--no-install-recommends', ...names]);
+  }
+  return missing.filter((one) => !one.present());
+}

@@ -1,0 +1,14 @@
+import type { StripParametersInput } from '../parameters/strip-parameters';
+import type { CourseGroupId } from './course';
+
+/** A strip that ships with the product. */
+export interface GalleryPreset {
+  /** Kebab-case, stable: files and links use it. */
+  id: string;
+  title: string;
+  /** What a learner should see, in one or two sentences. */
+  teachingPoint: string;
+  tags: readonly string[];
+  group: CourseGroupId;
+  parameters: StripParametersInput;
+}
