@@ -1,0 +1,211 @@
+import type { LeadName } from '../parameters/sheet';
+import type { SheetParameters } from '../parameters/strip-parameters';
+import { calibrationMv, calibrationPulse, calibrationWidthMm } from './calibration';
+import { moveItem, type DrawingItem, type LineItem, type PolylineItem, type TextItem } from './drawing';
+import { gridItems, type GridArea } from './grid';
+import { leadLabels } from './lead-label';
+import { lineSpans, longestDrawnS, type TimeSpan } from './layout';
+import { mvToMm, sToMm } from './paper-scale';
+import { stripDurationS, type PaperStrip } from './paper-strip';
+import {
+  paperGapMm,
+  paperWidthMm,
+  segmentsAlongPaper,
+  type PlacedSegment,
+  type RowSegment,
+} from './placed-segment';
+import { RowProfile } from './row-profile';
+import { rowSpacing } from './row-spacing';
+import { lineWeightsMm } from './tokens';
+import { sampleRange, tracePolylines, type TracePlacement } from './trace';
+
+/** The gridded paper of a strip with everything on it. */
+export interface Panel {
+  area: GridArea;
+  segments: PlacedSegment[];
+  items: DrawingItem[];
+  /** Sentences that a reader of this paper must know. */
+  notes: string[];
+}
+
+export interface PanelOptions {
+  /** The paper is at least this wide. */
+  leastWidthMm: number;
+  /** Longest line of paper, s. */
+  lineS: number;
+}
+
+/** Extra paper between the lines of a long strip, mm; only where a line has several rows. */
+const lineGapMm = 10;
+/** The pen stops this far from the edge of the paper, mm. */
+const penStopMm = 0.5;
+/** Half the height of the stroke at a lead change, mm, and its dashes. */
+const leadChangeHalfMm = 4;
+const leadChangeDashMm = [1, 0.75] as const;
+
+/** One row of one line of paper: what lies on it and how far its ink reaches. */
+interface Row {
+  line: number;
+  segments: RowSegment[];
+  profile: RowProfile;
+  /** Set relative to the row's 0 mV line. */
+  labels: TextItem[];
+}
+
+/** How far the traces and the calibration pulse of a row reach. */
+function inkProfile(
+  strip: PaperStrip,
+  sheet: SheetParameters,
+  segments: readonly RowSegment[],
+  widthMm: number,
+): RowProfile {
+  const { speedMmPerS, gainMmPerMv } = sheet;
+  const profile = new RowProfile(widthMm);
+  const pulseEndMm = paperGapMm + calibrationWidthMm(speedMmPerS);
+  profile.add(paperGapMm, pulseEndMm, mvToMm(calibrationMv, gainMmPerMv));
+  for (const segment of segments) {
+    const samples = strip.leads[segment.lead];
+    const [from, to] = sampleRange(segment, strip.sampleRateHz, samples.length);
+    for (let i = from; i < to; i++) {
+      const alongMm = sToMm(i / strip.sampleRateHz - segment.fromS, speedMmPerS);
+      const xMm = segment.xMm + alongMm;
+      profile.add(xMm, xMm, mvToMm(samples[i], gainMmPerMv));
+    }
+  }
+  return profile;
+}
+
+/** Segments by row; they come in the order of lines and rows. */
+function segmentsByRow(segments: readonly RowSegment[]): RowSegment[][] {
+  const rows: RowSegment[][] = [];
+  for (const segment of segments) {
+    if (segment.column === 0) rows.push([]);
+    rows[rows.length - 1].push(segment);
+  }
+  return rows;
+}
+
+function layRow(strip: PaperStrip, sheet: SheetParameters, segments: RowSegment[], widthMm: number): Row {
+  const profile = inkProfile(strip, sheet, segments, widthMm);
+  const labels = leadLabels(segments, profile, sheet.gainMmPerMv);
+  return { line: segments[0].line, segments, profile, labels };
+}
+
+function leadChangeStroke(segment: PlacedSegment): LineItem {
+  return {
+    kind: 'line',
+    role: 'leadChange',
+    x1Mm: segment.xMm,
+    y1Mm: segment.baselineMm - leadChangeHalfMm,
+    x2Mm: segment.xMm,
+    y2Mm: segment.baselineMm + leadChangeHalfMm,
+    colour: 'ink2',
+    weightMm: lineWeightsMm.leadChange,
+    dashMm: leadChangeDashMm,
+  };
+}
+
+function traceItems(
+  strip: PaperStrip,
+  sheet: SheetParameters,
+  segment: PlacedSegment,
+  heightMm: number,
+): PolylineItem[] {
+  const place: TracePlacement = {
+    sampleRateHz: strip.sampleRateHz,
+    speedMmPerS: sheet.speedMmPerS,
+    gainMmPerMv: sheet.gainMmPerMv,
+    xMm: segment.xMm,
+    baselineMm: segment.baselineMm,
+    topMm: penStopMm,
+    bottomMm: heightMm - penStopMm,
+  };
+  return tracePolylines(strip.leads[segment.lead], segment, place).map((pointsMm) => ({
+    kind: 'polyline',
+    role: 'trace',
+    pointsMm,
+    colour: 'ink',
+    weightMm: lineWeightsMm.trace,
+  }));
+}
+
+/** Leads whose trace ran along a pen stop; `traces` belong to `segments` one to one. */
+function stoppedLeads(
+  segments: readonly PlacedSegment[],
+  traces: readonly (readonly PolylineItem[])[],
+  heightMm: number,
+): LeadName[] {
+  const atStop = (mm: number, i: number) => i % 2 === 1 && (mm <= penStopMm || mm >= heightMm - penStopMm);
+  const stopped = segments.filter((_, i) => traces[i].some(({ pointsMm }) => pointsMm.some(atStop)));
+  return [...new Set(stopped.map((segment) => segment.lead))];
+}
+
+function panelNotes(
+  durationS: number,
+  drawnS: number,
+  lines: readonly TimeSpan[],
+  stopped: readonly string[],
+): string[] {
+  const notes: string[] = [];
+  if (drawnS < durationS) notes.push(`Only the first ${drawnS} s of ${durationS} s are drawn.`);
+  if (lines.length > 1) notes.push(`Continued on ${lines.length} lines, ${lines[0].toS} s a line.`);
+  if (stopped.length > 0) notes.push(`Cut at the edge of the paper: ${stopped.join(', ')}.`);
+  return notes;
+}
+
+/** y of each row's 0 mV line, from the upper edge of the paper, and the height of the paper. */
+function rowPlaces(rows: readonly Row[], sheet: SheetParameters): { baselines: number[]; heightMm: number } {
+  const rowsPerLine = rows.filter((row) => row.line === 0).length;
+  const profiles = rows.map((row) => row.profile);
+  const spacing = rowSpacing(profiles, rowsPerLine, sheet.gainMmPerMv);
+  const gapMm = rowsPerLine > 1 ? lineGapMm : 0;
+  const baselines = rows.map((row, i) => spacing.topMm + i * spacing.pitchMm + row.line * gapMm);
+  return { baselines, heightMm: baselines[baselines.length - 1] + spacing.bottomMm };
+}
+
+/**
+ * Lays a strip on gridded paper at true scale, upper left corner at (0, 0): 1 s is `speedMmPerS` mm and 1 mV is
+ * `gainMmPerMv` mm, whatever becomes of the sheet's size. Every 0 mV line and every start of a line lies on a
+ * heavy line of the grid. Rows stand an even distance apart that keeps their inks clear of each other within
+ * limits (`rowSpacing`). Throws RangeError for a strip that is empty or uneven.
+ */
+export function layoutPanel(strip: PaperStrip, sheet: SheetParameters, options: PanelOptions): Panel {
+  const durationS = stripDurationS(strip);
+  const drawnS = Math.min(durationS, longestDrawnS);
+  const along = segmentsAlongPaper(sheet, drawnS, options.lineS);
+  const widthMm = paperWidthMm(along, options.leastWidthMm);
+  const rows = segmentsByRow(along).map((segments) => layRow(strip, sheet, segments, widthMm));
+  const { baselines, heightMm } = rowPlaces(rows, sheet);
+  const area = { xMm: 0, yMm: 0, widthMm, heightMm };
+  const segments = rows.flatMap((row, i) =>
+    row.segments.map((segment) => ({ ...segment, baselineMm: baselines[i] })),
+  );
+  const pulse = (baselineMm: number) =>
+    calibrationPulse(paperGapMm, baselineMm, sheet.speedMmPerS, sheet.gainMmPerMv);
+  const traces = segments.map((segment) => traceItems(strip, sheet, segment, heightMm));
+  const items: DrawingItem[] = [
+    ...gridItems(area, sheet.gridTint),
+    ...segments.filter((segment) => segment.column > 0).map(leadChangeStroke),
+    ...baselines.map(pulse),
+    ...traces.flat(),
+    ...rows.flatMap((row, i) => row.labels.map((label) => moveItem(label, 0, baselines[i]))),
+  ];
+  const stopped = stoppedLeads(segments, traces, heightMm);
+  const lines = lineSpans(sheet, drawnS, options.lineS);
+  return { area, segments, items, notes: panelNotes(durationS, drawnS, lines, stopped) };
+}
+
+/** The panel with its upper left corner moved by (dxMm, dyMm). */
+export function movePanel(panel: Panel, dxMm: number, dyMm: number): Panel {
+  const { area, segments, items, notes } = panel;
+  return {
+    area: { ...area, xMm: area.xMm + dxMm, yMm: area.yMm + dyMm },
+    segments: segments.map((segment) => ({
+      ...segment,
+      xMm: segment.xMm + dxMm,
+      baselineMm: segment.baselineMm + dyMm,
+    })),
+    items: items.map((item) => moveItem(item, dxMm, dyMm)),
+    notes,
+  };
+}
