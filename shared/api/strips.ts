@@ -2,7 +2,7 @@ import { z } from 'zod';
 import { courseGroups, type CourseGroupId } from '../gallery/course';
 import { stripParametersSchema } from '../parameters/strip-parameters';
 import { stripIdSchema } from './strip-id';
-import { isPlainText, plainText, plainTextRule, requiredText } from './text';
+import { foldText, isPlainText, plainText, plainTextRule, requiredText } from './text';
 
 const groupIds = courseGroups.map((group) => group.id) as [CourseGroupId, ...CourseGroupId[]];
 export const courseGroupIdSchema = z.enum(groupIds);
@@ -29,8 +29,8 @@ export const tagSchema = requiredText({ label: 'Tag', maxLength: longestTag, hel
 const tagsSchema = z
   .array(tagSchema)
   .max(mostTags)
-  .refine((tags) => new Set(tags.map((tag) => tag.toLowerCase())).size === tags.length, {
-    params: { allowed: 'each tag at most once' },
+  .refine((tags) => new Set(tags.map(foldText)).size === tags.length, {
+    params: { allowed: 'each tag at most once, whatever its case and accents' },
     message: 'names a tag twice',
   });
 

@@ -36,3 +36,11 @@ export function requiredText(spec: TextSpec) {
     message: `${spec.label} is empty`,
   });
 }
+
+/**
+ * Text folded for finding and comparing: lower case, accents off, compatibility forms resolved. `Überleitung`
+ * and `uberleitung` fold alike.
+ */
+export function foldText(text: string): string {
+  return text.normalize('NFKD').replace(/\p{M}/gu, '').toLowerCase();
+}
