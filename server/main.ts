@@ -47,13 +47,13 @@ const server = createServer(app);
 
 async function announce(): Promise<void> {
   const { port } = server.address() as AddressInfo;
-  console.log(`Paceloom is open at http://localhost:${port}`);
   const { organisation, accounts } = await demoAccounts(database);
-  if (accounts.length === 0) return;
-  console.log(`Demonstration sign-ins of the ${organisation} (invented):`);
-  for (const { role, email, password } of accounts) {
-    console.log(`  ${roleNames[role].padEnd(22)} ${email.padEnd(36)} ${password}`);
-  }
+  const signIns = accounts.map(
+    ({ role, email, password }) => `  ${roleNames[role].padEnd(22)} ${email.padEnd(36)} ${password}`,
+  );
+  const heading = `Demonstration sign-ins of the ${organisation} (invented):`;
+  const lines = accounts.length > 0 ? [heading, ...signIns] : [];
+  console.log([`Paceloom is open at http://localhost:${port}`, ...lines].join('\n'));
 }
 
 let stopping = false;
@@ -67,6 +67,7 @@ async function stop(): Promise<void> {
   await closed;
   await renderPool.close();
   await database.close();
+  process.exit(0);
 }
 
 server.on('error', (error: NodeJS.ErrnoException) => {

@@ -29,6 +29,7 @@ export interface RenderPool {
 
 const idleMs = 30_000;
 
+export const usualQueueLength = 16;
 export const usualThreads = Math.max(1, availableParallelism() - 1);
 
 /** Starts a pool. A TypeScript worker is run through tsx, a built one as it is. */
@@ -36,7 +37,7 @@ export function createRenderPool(options: RenderPoolOptions): RenderPool {
   const {
     workerFile,
     threads = usualThreads,
-    queueLength = 16,
+    queueLength = usualQueueLength,
     timeLimitMs = 20_000,
     keepWarm = true,
   } = options;
