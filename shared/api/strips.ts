@@ -34,11 +34,11 @@ const tagsSchema = z
     message: 'names a tag twice',
   });
 
-/** Parameters of a strip that is kept; its texts may hold no control characters. */
-const keptParametersSchema = stripParametersSchema.refine(
-  (parameters) => isPlainText(parameters.title) && isPlainText(parameters.notes),
-  { path: ['notes'], ...plainTextRule },
-);
+/** Parameters of a strip that is kept; its notes may hold no control characters (its title is the strip's). */
+const keptParametersSchema = stripParametersSchema.refine(({ notes }) => isPlainText(notes), {
+  path: ['notes'],
+  ...plainTextRule,
+});
 
 /** POST /api/strips. `title` also becomes `parameters.title`: a kept strip has one title. */
 export const createStripSchema = z.strictObject({

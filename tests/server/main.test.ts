@@ -1,6 +1,7 @@
 import { spawn, type ChildProcess } from 'node:child_process';
 import { once } from 'node:events';
 import { mkdtempSync, rmSync, statSync } from 'node:fs';
+import { createServer, type AddressInfo } from 'node:net';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
@@ -65,6 +66,14 @@ describe('the server as a process', () => {
     const { child } = await startMain();
     expect(statSync(join(dataDirectory, 'session-secret')).mode & 0o777).toBe(0o600);
     await stop(child, 'SIGTERM');
+  });
+
+  it('says so when its port is taken', async () => {
+    const taken = createServer().listen(0, '127.0.0.1');
+    await once(taken, 'listening');
+    const PORT = String((taken.address() as AddressInfo).port);
+    await expect(startMain({ PORT })).rejects.toThrow(`Port ${PORT} is taken`);
+    taken.close();
   });
 
   it('says which setting it cannot use', async () => {

@@ -90,6 +90,11 @@ describe('a render', () => {
     expect(errorIdOf(answer)).toBe('longStrip');
   });
 
+  it('of a saved strip of more than 300 s is refused too', async () => {
+    const { id } = await educator.keep({ title: 'An hour', parameters: { durationS: 3600 } });
+    expect(errorIdOf(await refusal(await render({ stripId: id })))).toBe('longStrip');
+  });
+
   it('of parameters that cannot be is refused with the field', async () => {
     const answer = await refusal(await render({ parameters: { durationS: 0 } }));
     expect(errorIdOf(answer)).toBe('invalidInput');
