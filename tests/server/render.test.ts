@@ -134,7 +134,7 @@ describe('a busy server', () => {
     expect(server.logged).toEqual([]);
   });
 
-  it('stops a render that takes too long, and renders the next', async () => {
+  it('stops a render that takes too long, and frees its place', async () => {
     const renderPool = createRenderPool({ workerFile, threads: 1, timeLimitMs: 60, keepWarm: false });
     await start({ renderPool });
     const answer = await refusal(await render({ parameters: heavy }));
