@@ -7,6 +7,16 @@ export default defineConfig({
       { test: { name: 'unit', include: ['tests/unit/**/*.test.ts'], environment: 'node' } },
       {
         test: {
+          name: 'server',
+          include: ['tests/server/**/*.test.ts'],
+          environment: 'node',
+          globalSetup: ['tests/support/server/template.ts'],
+          testTimeout: 60_000,
+          hookTimeout: 60_000,
+        },
+      },
+      {
+        test: {
           name: 'reference',
           include: ['tests/reference/**/*.test.ts'],
           environment: 'node',

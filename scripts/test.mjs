@@ -4,7 +4,7 @@ import { spawnSync } from 'node:child_process';
 import { existsSync, mkdtempSync, readFileSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
-import { ensureNodeModules } from './test/node-modules.mjs';
+import { ensureNodeModules } from './install/node-modules.mjs';
 import { ensureSystemPackages } from './test/system-packages.mjs';
 
 const inCi = Boolean(process.env.CI);

@@ -1,0 +1,19 @@
+import { defineConfig } from 'vite';
+
+// The server as two files for Node: `main.js` and the worker's. Packages stay in node_modules, so that native
+// code and the worker threads find them; our own TypeScript needs no transpiler at run time.
+export default defineConfig({
+  publicDir: false,
+  build: {
+    ssr: true,
+    target: 'node20',
+    outDir: 'dist/server',
+    emptyOutDir: true,
+    minify: false,
+    sourcemap: true,
+    rollupOptions: {
+      input: { main: 'server/main.ts', 'render-worker': 'server/workers/render-worker.ts' },
+      output: { entryFileNames: '[name].js', chunkFileNames: 'chunks/[name]-[hash].js' },
+    },
+  },
+});

@@ -1,0 +1,69 @@
+import { copyFileSync, mkdtempSync, rmSync } from 'node:fs';
+import { createServer } from 'node:http';
+import type { AddressInfo } from 'node:net';
+import { tmpdir } from 'node:os';
+import { join, resolve } from 'node:path';
+import { pino } from 'pino';
+import { inject } from 'vitest';
+import { createApp, type AppDependencies } from '../../../server/app';
+import { openDatabase, type Database } from '../../../server/models/database';
+import { createRenderPool, type RenderPoolOptions } from '../../../server/services/rendering/render-pool';
+import { ApiClient, type Person } from './api-client';
+
+export const workerFile = resolve('server/workers/render-worker.ts');
+
+export interface TestServer {
+  url: string;
+  database: Database;
+  databaseFile: string;
+  /** Errors the server logged: unexpected ones only. */
+  logged: string[];
+  /** A client without a session. */
+  client(): ApiClient;
+  signedIn(person: Person): Promise<ApiClient>;
+  close(): Promise<void>;
+}
+
+interface TestServerOptions extends Partial<AppDependencies> {
+  /** A database to go on with; otherwise a copy of the template. */
+  databaseFile?: string;
+  pool?: Partial<RenderPoolOptions>;
+}
+
+/** The application on a free port of this machine, over a copy of the template database. */
+export async function startTestServer(options: TestServerOptions = {}): Promise<TestServer> {
+  const { databaseFile, pool, ...dependencies } = options;
+  const directory = mkdtempSync(join(tmpdir(), 'paceloom-server-'));
+  const file = databaseFile ?? join(directory, 'test.sqlite');
+  if (databaseFile === undefined) copyFileSync(inject('templateDatabase'), file);
+  const database = await openDatabase(file);
+  const renderPool = createRenderPool({ workerFile, threads: 1, keepWarm: false, ...pool });
+  const logged: string[] = [];
+  const logger = pino({ level: 'error' }, { write: (line: string) => void logged.push(line) });
+  const app = createApp({
+    database,
+    sessionSecret: 'a key for tests only, of no worth',
+    renderPool,
+    logger,
+    clientDirectory: join(directory, 'client'),
+    ...dependencies,
+  });
+  const server = createServer(app);
+  await new Promise<void>((done) => server.listen(0, '127.0.0.1', done));
+  const url = `http://127.0.0.1:${(server.address() as AddressInfo).port}`;
+  return {
+    url,
+    database,
+    databaseFile: file,
+    logged,
+    client: () => new ApiClient(url),
+    signedIn: (person) => new ApiClient(url).signIn(person),
+    async close() {
+      server.closeAllConnections();
+      await new Promise((done) => server.close(done));
+      await renderPool.close();
+      await database.close();
+      rmSync(directory, { recursive: true, force: true });
+    },
+  };
+}
