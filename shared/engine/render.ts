@@ -89,7 +89,10 @@ export function createStripStream(parameters: StripParameters): StripStream {
   const complexes = new Map<VentricularDepolarization, ComplexMeasures>();
   let nextSample = 0;
 
-  const take = (rendered: { events: StripEvent[]; complexes: Map<VentricularDepolarization, ComplexMeasures> }) => {
+  const take = (rendered: {
+    events: StripEvent[];
+    complexes: Map<VentricularDepolarization, ComplexMeasures>;
+  }) => {
     pending.push(...rendered.events);
     for (const [event, complex] of rendered.complexes) complexes.set(event, complex);
   };
@@ -126,7 +129,10 @@ export function createStripStream(parameters: StripParameters): StripStream {
 
   function nextBlock(length: number): MeasuredSamples {
     const first = nextSample * design.decimation;
-    const outputs = limiter.process(source.render(first, length * design.decimation, take), length * design.decimation);
+    const outputs = limiter.process(
+      source.render(first, length * design.decimation, take),
+      length * design.decimation,
+    );
     nextSample += length;
     return source.toMeasured(outputs, length);
   }

@@ -16,7 +16,13 @@ interface BandFilter {
 
 function bandFilter(): BandFilter {
   const cascades = new Fili.CalcCascades();
-  const common = { order: 1, characteristic: 'butterworth', Fs: knotRateHz, gain: 0, preGain: false } as const;
+  const common = {
+    order: 1,
+    characteristic: 'butterworth',
+    Fs: knotRateHz,
+    gain: 0,
+    preGain: false,
+  } as const;
   const low = cascades.lowpass({ ...common, Fc: bandHz.high });
   const k = Math.tan((Math.PI * bandHz.low) / knotRateHz);
   const n = 1 / (1 + k);

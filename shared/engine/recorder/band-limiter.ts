@@ -34,12 +34,7 @@ function settledLevel(samples: Float64Array, lowHz: number, rateHz: number): num
 }
 
 /** Advances one channel over `length` inputs. */
-function runChannel(
-  form: BlockForm,
-  state: Float64Array,
-  input: Float64Array,
-  length: number,
-): Float64Array {
+function runChannel(form: BlockForm, state: Float64Array, input: Float64Array, length: number): Float64Array {
   const { states, inputs, stateFromState, stateFromInput, outputFromState, outputFromInput } = form;
   const intervals = length / inputs;
   const output = new Float64Array(intervals);

@@ -11,9 +11,36 @@ import type { SourceSite } from '../events';
  * This gap between surface onset and sensing makes fusion and pseudofusion possible.
  */
 const conductedMs = {
-  none: { apex: 15, septum: 40, outflow: 40, his: 45, leftBundle: 35, lateral: 50, posterolateral: 55, anterolateral: 45 },
-  left: { apex: 10, septum: 35, outflow: 55, his: 60, leftBundle: 65, lateral: 130, posterolateral: 135, anterolateral: 95 },
-  right: { apex: 75, septum: 50, outflow: 40, his: 45, leftBundle: 35, lateral: 50, posterolateral: 55, anterolateral: 45 },
+  none: {
+    apex: 15,
+    septum: 40,
+    outflow: 40,
+    his: 45,
+    leftBundle: 35,
+    lateral: 50,
+    posterolateral: 55,
+    anterolateral: 45,
+  },
+  left: {
+    apex: 10,
+    septum: 35,
+    outflow: 55,
+    his: 60,
+    leftBundle: 65,
+    lateral: 130,
+    posterolateral: 135,
+    anterolateral: 95,
+  },
+  right: {
+    apex: 75,
+    septum: 50,
+    outflow: 40,
+    his: 45,
+    leftBundle: 35,
+    lateral: 50,
+    posterolateral: 55,
+    anterolateral: 45,
+  },
 } as const;
 
 /** From the other ventricle's lead, by the left lead's site. */
