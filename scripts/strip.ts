@@ -7,14 +7,14 @@ import { writeStrip } from './strip/write-strip';
 /** Exit code for input that was refused. */
 const refused = 2;
 
-async function run(args: string[]): Promise<void> {
+function run(args: string[]): void {
   const command = readCommand(args);
   if (command === 'help') process.stdout.write(help);
-  else await writeStrip(readParameters(command), command.outDirectory, command.formats);
+  else writeStrip(readParameters(command), command.outDirectory, command.formats);
 }
 
 try {
-  await run(process.argv.slice(2));
+  run(process.argv.slice(2));
 } catch (error) {
   if (!(error instanceof InvalidInputError)) throw error;
   process.stderr.write(`${error.message}\n`);
