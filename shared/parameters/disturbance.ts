@@ -38,4 +38,12 @@ export const disturbanceSchema = section({
     usual: [0, 0.05],
     help: 'Root-mean-square size of muscle activity at an electrode.',
   }),
+  motionPerMinute: numberField(0, {
+    label: 'Electrode movements',
+    unit: '/min',
+    min: 0,
+    max: 30,
+    usual: [0, 4],
+    help: 'Sudden swings of the baseline at one electrode, at random times.',
+  }),
 });

@@ -5,6 +5,7 @@ import type { SampleClock } from '../signal/wave-painter';
 import { baselineWander } from './baseline-wander';
 import { addToLeads, electrodePotentials } from './electrodes';
 import { mainsInterference } from './mains';
+import { createMotion } from './motion';
 import { createMuscleNoise } from './muscle-noise';
 import { createPeriodicSource, type PotentialSource } from './periodic';
 
@@ -18,15 +19,22 @@ type DisturbedParameters = Pick<StripParameters, 'seed' | 'patient' | 'disturban
 
 /** Whether anything disturbs the strip. */
 export function isDisturbed({ disturbance }: Pick<StripParameters, 'disturbance'>): boolean {
-  return disturbance.baselineWanderMv > 0 || disturbance.mainsMv > 0 || disturbance.muscleMv > 0;
+  const { baselineWanderMv, mainsMv, muscleMv, motionPerMinute } = disturbance;
+  return baselineWanderMv > 0 || mainsMv > 0 || muscleMv > 0 || motionPerMinute > 0;
 }
 
-function wanderSource(parameters: DisturbedParameters, clock: SampleClock, first: number): PotentialSource[] {
+function slowSources(parameters: DisturbedParameters, clock: SampleClock, first: number): PotentialSource[] {
   const { seed, patient, disturbance } = parameters;
-  if (disturbance.baselineWanderMv === 0) return [];
-  const random = randomStream(seed, 'baselineWander');
-  const components = baselineWander(disturbance.baselineWanderMv, patient.respiratoryRateBpm, random);
-  return [createPeriodicSource(components, clock, first)];
+  const sources: PotentialSource[] = [];
+  if (disturbance.baselineWanderMv > 0) {
+    const random = randomStream(seed, 'baselineWander');
+    const components = baselineWander(disturbance.baselineWanderMv, patient.respiratoryRateBpm, random);
+    sources.push(createPeriodicSource(components, clock, first));
+  }
+  if (disturbance.motionPerMinute > 0) {
+    sources.push(createMotion(disturbance.motionPerMinute, randomStream(seed, 'motion'), clock, first));
+  }
+  return sources;
 }
 
 function fastSources(parameters: DisturbedParameters, clock: SampleClock, first: number): PotentialSource[] {
@@ -44,8 +52,8 @@ function fastSources(parameters: DisturbedParameters, clock: SampleClock, first:
 }
 
 /**
- * Disturbance at the electrodes from the clock's sample `first` on. Wander is a function of time, the same on
- * every clock. `slowOnly` leaves out mains and muscle, which a settling high-pass does not see.
+ * Disturbance at the electrodes from the clock's sample `first` on. Wander and motion are functions of time, the
+ * same on every clock. `slowOnly` leaves out mains and muscle, which a settling high-pass does not see.
  */
 export function createDisturbance(
   parameters: DisturbedParameters,
@@ -54,7 +62,7 @@ export function createDisturbance(
   { slowOnly = false } = {},
 ): Disturbance {
   const sources = [
-    ...wanderSource(parameters, clock, first),
+    ...slowSources(parameters, clock, first),
     ...(slowOnly ? [] : fastSources(parameters, clock, first)),
   ];
   return {
