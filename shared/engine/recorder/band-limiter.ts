@@ -1,29 +1,56 @@
-import { highPass } from './sections';
-import { blockForm, type BlockForm } from './block-form';
+import {
+  clearFadedStates,
+  runBandPass,
+  runSection,
+  statesPerSection,
+  type BandPass,
+} from './biquad-cascade';
+import { createDecimator, type Decimator } from './decimator';
+import { highPass } from './high-pass';
 import type { RecorderDesign } from './recorder-design';
-import { bandLimits } from '../../parameters/recorder';
 
 /** Band-limits and decimates any number of channels, keeping state between calls. */
 export interface BandLimiter {
   /**
-   * Charges the high-pass with what came before, so that the recording starts settled: `channels` hold the
-   * input up to the first sample that `process` will get, at a low rate. The pre-roll's mean stands for all
-   * that came before it. Call once, first; then let `process` run over the last second before the recording,
-   * which settles the low-pass and the notch, and throw that output away.
+   * Charges the high-pass with what came before, so that the recording starts settled. Protocol:
+   *
+   * 1. `settle` once and first, with the same channels over t in [−30 s, −1 s) at a low rate (250/s will do);
+   * 2. `process` over t in [−1 s, 0) at the internal rate, which settles low-pass and notch; its output is
+   *    thrown away;
+   * 3. `process` from t = 0 on.
+   *
+   * The pre-roll's mean stands for all that came before it, so that even a high-pass of 0.01 Hz, whose time
+   * constant is 16 s, starts within 5 µV of a run that began long ago, if the input repeats itself within the
+   * pre-roll. Without a high-pass there is nothing to charge.
+   *
+   * @param channels the input up to the first sample that `process` will get, mV
    */
   settle(channels: readonly Float64Array[], rateHz: number): void;
   /**
-   * @param channels inputs at the internal rate, mV
-   * @param length inputs to use; a multiple of the decimation
-   * @returns a channel of length / decimation outputs each, mV, before the quantiser
+   * Takes the next `length` inputs of every channel, in mV at the internal rate. Any length will do; how the
+   * input is cut changes no bit of the output.
+   *
+   * @returns a channel of outputs each, mV, before the quantiser: one for every `decimation` inputs
    */
   process(channels: readonly Float64Array[], length: number): Float64Array[];
 }
 
+/**
+ * Inputs that run between two looks for faded states. Fixed in the stream's own count, so that the looks fall on
+ * the same samples however the input is cut.
+ */
+const segmentLength = 256;
+
+interface Channel {
+  state: Float64Array;
+  decimator: Decimator;
+}
+
 /** Value on the high-pass's capacitor after a stretch of low-rate input that began at the input's mean. */
 function settledLevel(samples: Float64Array, lowHz: number, rateHz: number): number {
+  if (samples.length === 0) return 0;
   const { a, b } = highPass(lowHz, rateHz);
-  const mean = samples.reduce((sum, value) => sum + value, 0) / Math.max(1, samples.length);
+  const mean = samples.reduce((sum, value) => sum + value, 0) / samples.length;
   // At rest on a level v the state is −b0 v; so it is read back as a level, whatever the rate.
   let state = -b[0] * mean;
   for (const input of samples) {
@@ -33,49 +60,55 @@ function settledLevel(samples: Float64Array, lowHz: number, rateHz: number): num
   return -state / b[0];
 }
 
-/** Advances one channel over `length` inputs. */
-function runChannel(form: BlockForm, state: Float64Array, input: Float64Array, length: number): Float64Array {
-  const { states, inputs, stateFromState, stateFromInput, outputFromState, outputFromInput } = form;
-  const intervals = length / inputs;
-  const output = new Float64Array(intervals);
-  const next = new Float64Array(states);
-  for (let interval = 0; interval < intervals; interval++) {
-    const from = interval * inputs;
-    let out = 0;
-    for (let i = 0; i < states; i++) out += outputFromState[i] * state[i];
-    for (let j = 0; j < inputs; j++) out += outputFromInput[j] * input[from + j];
-    output[interval] = out;
-    for (let row = 0; row < states; row++) {
-      let sum = 0;
-      const stateRow = row * states;
-      for (let i = 0; i < states; i++) sum += stateFromState[stateRow + i] * state[i];
-      const inputRow = row * inputs;
-      for (let j = 0; j < inputs; j++) sum += stateFromInput[inputRow + j] * input[from + j];
-      next[row] = sum;
-    }
-    state.set(next);
-  }
-  return output;
-}
-
-/** A band-limiter at rest. */
+/** A band-limiter at rest on 0 mV, for `channelCount` channels that do not touch each other. */
 export function createBandLimiter(design: RecorderDesign, channelCount: number): BandLimiter {
-  const form = blockForm(design.sections, design.decimation, design.take);
-  const states = Array.from({ length: channelCount }, () => new Float64Array(form.states));
-  const limits = bandLimits(design.settings.bandwidth);
+  const { highPass: high, lowPass: low, notch } = design;
+  const bandPass: BandPass | null = high && low ? [high, ...low] : null;
+  const notchOffset = bandPass ? statesPerSection * bandPass.length : 0;
+  const scratch = new Float64Array(segmentLength);
+  const channels = Array.from(
+    { length: channelCount },
+    (): Channel => ({
+      state: new Float64Array(statesPerSection * design.sections.length),
+      decimator: createDecimator(design.decimation, design.keep),
+    }),
+  );
+  let inSegment = 0;
+
+  const filter = (state: Float64Array, input: Float64Array, from: number, length: number): void => {
+    if (bandPass) runBandPass(bandPass, state, input, from, scratch, length);
+    else scratch.set(input.subarray(from, from + length));
+    if (notch) runSection(notch, state, notchOffset, scratch, length);
+  };
+  const runChannel = ({ state, decimator }: Channel, input: Float64Array, length: number): Float64Array => {
+    const output = new Float64Array(decimator.count(length));
+    let kept = 0;
+    let room = segmentLength - inSegment;
+    for (let from = 0; from < length; ) {
+      const part = Math.min(room, length - from);
+      filter(state, input, from, part);
+      kept = decimator.take(scratch, part, output, kept);
+      from += part;
+      room -= part;
+      if (room > 0) continue;
+      clearFadedStates(state);
+      room = segmentLength;
+    }
+    return output;
+  };
+
   return {
-    settle(channels, rateHz) {
-      const { highPass: high } = design;
+    settle(samples, rateHz) {
+      const { limits } = design;
       if (!high || !limits) return;
-      channels.forEach((samples, i) => {
-        states[i][0] = -high.b[0] * settledLevel(samples, limits.lowHz, rateHz);
+      channels.forEach(({ state }, i) => {
+        state[0] = -high.b[0] * settledLevel(samples[i], limits.lowHz, rateHz);
       });
     },
-    process(channels, length) {
-      if (length % design.decimation !== 0) {
-        throw new RangeError(`${length} inputs are not a multiple of the decimation, ${design.decimation}`);
-      }
-      return states.map((state, i) => runChannel(form, state, channels[i], length));
+    process(inputs, length) {
+      const outputs = channels.map((channel, i) => runChannel(channel, inputs[i], length));
+      inSegment = (inSegment + length) % segmentLength;
+      return outputs;
     },
   };
 }

@@ -1,7 +1,11 @@
-import { bandLimits } from '../../parameters/recorder';
+import { bandLimits, type BandLimits } from '../../parameters/recorder';
 import type { RecorderParameters } from '../../parameters/strip-parameters';
 import { msPerS } from '../../units';
-import { delayAtZeroHz, highPass, lowPass, magnitudeAt, notch, type Section } from './sections';
+import { delayAtZeroHz } from './group-delay';
+import { highPass } from './high-pass';
+import { lowPass } from './low-pass';
+import { notch } from './notch';
+import { magnitudeAt, type Section } from './section';
 
 /**
  * Rate at which strips are synthesized and band-limited: a 0.4 ms stimulus is 3.2 samples wide, where 2 kHz
@@ -9,18 +13,28 @@ import { delayAtZeroHz, highPass, lowPass, magnitudeAt, notch, type Section } fr
  */
 export const internalRateHz = 8000;
 
+/**
+ * Sections of the low-pass: two make the fourth order, which leaves −29 dB of alias at 150 Hz and 500/s where a
+ * second-order one leaves −15.
+ */
+const lowPassSections = 2;
+
 /** A recorder ready to run: filters at the internal rate and how its output is taken. */
 export interface RecorderDesign {
   settings: RecorderParameters;
-  /** Present unless unfiltered; always the first section that runs. */
+  /** −3 dB limits; null when unfiltered, and then there is neither high-pass nor low-pass. */
+  limits: BandLimits | null;
   highPass: Section | null;
-  /** Every section in the order in which they run. */
-  sections: Section[];
+  lowPass: readonly [Section, Section] | null;
+  /** The mains notch; also in an unfiltered recorder. */
+  notch: Section | null;
+  /** Every section in the order in which they run: high-pass, low-pass, notch. */
+  sections: readonly Section[];
   /** Internal samples to one output sample. */
   decimation: number;
   /** `mean`: the average of each output interval (unfiltered); `sample`: every `decimation`-th sample. */
-  take: 'sample' | 'mean';
-  /** Delay of the low-pass (or of the averaging) that is removed, ms. */
+  keep: 'sample' | 'mean';
+  /** Delay that is removed, ms: the low-pass's at 0 Hz, or half of the averaged interval. The notch's stays. */
   delayRemovedMs: number;
   /**
    * The caller renders internal sample m at time m / internalRateHz + inputLeadS, ahead of what is put out, so
@@ -28,28 +42,30 @@ export interface RecorderDesign {
    * exactly and not to the nearest sample.
    */
   inputLeadS: number;
-  /** |H| of the filters at a frequency, before decimation. */
+  /** |H| of the sections at a frequency in Hz, before decimation. */
   magnitudeAt(frequencyHz: number): number;
 }
 
-/** Designs the recorder for settings that the schema has accepted. */
+/** Designs the recorder for settings that the schema has accepted. It takes microseconds, so nothing is cached. */
 export function designRecorder(settings: RecorderParameters): RecorderDesign {
   const limits = bandLimits(settings.bandwidth);
   const decimation = internalRateHz / settings.sampleRateHz;
   const high = limits ? highPass(limits.lowHz, internalRateHz) : null;
-  const low = limits ? lowPass(limits.highHz, internalRateHz) : [];
-  const mains = settings.mainsNotchHz === 0 ? [] : notch(settings.mainsNotchHz, internalRateHz);
-  const sections = [...(high ? [high] : []), ...low, ...mains];
-  const delaySamples = limits ? delayAtZeroHz(low) : (decimation - 1) / 2;
-  const delayS = delaySamples / internalRateHz;
+  const low = limits ? lowPass(limits.highHz, internalRateHz, lowPassSections) : [];
+  const mains = settings.mainsNotchHz === 0 ? null : notch(settings.mainsNotchHz, internalRateHz);
+  const sections = [...(high ? [high] : []), ...low, ...(mains ? [mains] : [])];
+  const delayS = (limits ? delayAtZeroHz(low) : (decimation - 1) / 2) / internalRateHz;
   return {
     settings,
+    limits,
     highPass: high,
+    lowPass: limits ? [low[0], low[1]] : null,
+    notch: mains,
     sections,
     decimation,
-    take: limits ? 'sample' : 'mean',
+    keep: limits ? 'sample' : 'mean',
     delayRemovedMs: delayS * msPerS,
-    // An average of samples m … m + D − 1 is centred behind its first one; a filter's output lags its input.
+    // The mean of samples m … m + D − 1 is centred behind its first one; a filter's output lags its input.
     inputLeadS: limits ? delayS : -delayS,
     magnitudeAt: (frequencyHz) => magnitudeAt(sections, frequencyHz, internalRateHz),
   };
