@@ -2,7 +2,9 @@ import { readFileSync, mkdtempSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { describe, expect, it } from 'vitest';
-import { highPass, lowPass, magnitudeAt, type Section } from '../../shared/engine/recorder/sections';
+import { highPass } from '../../shared/engine/recorder/high-pass';
+import { lowPass } from '../../shared/engine/recorder/low-pass';
+import { magnitudeAt, type Section } from '../../shared/engine/recorder/section';
 import { createBandLimiter } from '../../shared/engine/recorder/band-limiter';
 import { designRecorder } from '../../shared/engine/recorder/recorder-design';
 import { hasPythonModule, runPython } from '../support/python';
@@ -23,7 +25,7 @@ const examples = JSON.parse(
 ) as { cases: MagnitudeCase[] };
 
 function sectionsFor({ order, cutoff_hz, type, fs_hz }: MagnitudeCase['inputs']): Section[] | null {
-  if (type === 'lowpass' && order === 4) return lowPass(cutoff_hz, fs_hz);
+  if (type === 'lowpass') return lowPass(cutoff_hz, fs_hz, order / 2);
   if (type === 'highpass' && order === 1) return [highPass(cutoff_hz, fs_hz)];
   return null;
 }
