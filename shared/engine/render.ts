@@ -8,7 +8,7 @@ import { readStrip } from './reading/read-strip';
 import type { Reading } from './reading/reading';
 import { createBandLimiter } from './recorder/band-limiter';
 import { quantiseLeads } from './recorder/quantiser';
-import { designRecorder, internalRateHz } from './recorder/recorder-design';
+import { designRecorder } from './recorder/recorder-design';
 import { createRhythm, preRollS } from './rhythm/rhythm';
 import { createChannelSource, type MeasuredSamples } from './signal/channel-source';
 import { createElectrodeSignal } from './signal/electrode-signal';
@@ -68,10 +68,10 @@ function emptyMeasured(length: number): MeasuredSamples {
 export function createStripStream(parameters: StripParameters): StripStream {
   const design = designRecorder(parameters.recorder);
   const signal = createElectrodeSignal(parameters, createRhythm(parameters));
-  const source = createChannelSource(parameters, signal, internalRateHz);
+  const source = createChannelSource(parameters, signal, design.internalRateHz);
   const limiter = createBandLimiter(design, source.channelCount);
   const queue = createEventQueue();
-  const clock: SampleClock = { rateHz: internalRateHz, firstTimeS: design.inputLeadS };
+  const clock: SampleClock = { rateHz: design.internalRateHz, firstTimeS: design.inputLeadS };
   let nextSample = 0;
 
   const render = (on: SampleClock, first: number, length: number): Float64Array[] => {
@@ -83,7 +83,7 @@ export function createStripStream(parameters: StripParameters): StripStream {
     const slow: SampleClock = { rateHz: settleRateHz, firstTimeS: design.inputLeadS };
     const slowLength = (preRollS - fullRatePreRollS) * settleRateHz;
     limiter.settle(render(slow, -preRollS * settleRateHz, slowLength), settleRateHz);
-    const fullLength = fullRatePreRollS * internalRateHz;
+    const fullLength = fullRatePreRollS * design.internalRateHz;
     limiter.process(render(clock, -fullLength, fullLength), fullLength);
     queue.takeBefore(0);
   };

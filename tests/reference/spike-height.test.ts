@@ -5,6 +5,8 @@ import { createStripStream } from '../../shared/engine/render';
 import { addStimulusArtefact } from '../../shared/engine/stimulus/stimulus-artefact';
 import { dowerMatrix } from '../../shared/engine/leads';
 import { bandLimits, type Bandwidth } from '../../shared/parameters/recorder';
+import { designRecorder } from '../../shared/engine/recorder/recorder-design';
+import { recorderSettings } from '../support/recorder-bench';
 import { steadyStrip } from '../support/strips';
 import { spikeToleranceMv } from '../support/tolerances';
 
@@ -67,17 +69,23 @@ describe('height of a band-limited stimulus against the closed form', () => {
   });
 });
 
-describe('fidelity: 8 kHz against brute force at 64 kHz with the same analogue prototype', () => {
-  for (const cutoff of [40, 150, 400]) {
+describe('fidelity: the internal rate against brute force at 64 kHz with the same analogue prototype', () => {
+  for (const cutoff of [40, 150, 200, 250, 400, 500]) {
+    const settings = recorderSettings({ bandwidth: { lowHz: 0.05, highHz: cutoff }, sampleRateHz: 2000 });
+    if (!settings) throw new Error('refused');
+    const rate = designRecorder(settings).internalRateHz;
     for (const phase of [0, 0.3, 0.5, 0.9]) {
       it(`${cutoff} Hz, stimulus ${phase} of a sample late`, () => {
         const samples = 800;
         const shiftS = -phase / 8000;
-        const ours = runSections(lowPass(cutoff, 8000, 2), artefact(8000, shiftS, 0.4, samples));
-        const brute = runSections(lowPass(cutoff, 64000, 2), artefact(64000, shiftS, 0.4, samples * 8));
+        const ours = runSections(lowPass(cutoff, rate, 2), artefact(rate, shiftS, 0.4, samples));
+        const brute = runSections(
+          lowPass(cutoff, 64000, 2),
+          artefact(64000, shiftS, 0.4, (samples * 64000) / rate),
+        );
         const tolerance = spikeToleranceMv(peak(brute));
         let worst = 0;
-        ours.forEach((value, i) => (worst = Math.max(worst, Math.abs(value - brute[8 * i]))));
+        ours.forEach((value, i) => (worst = Math.max(worst, Math.abs(value - brute[(i * 64000) / rate]))));
         expect(worst).toBeLessThan(tolerance);
       });
     }

@@ -1,7 +1,7 @@
 import { readStripParameters } from '../../shared/parameters/parse';
 import type { RecorderParameters } from '../../shared/parameters/strip-parameters';
 import { createBandLimiter } from '../../shared/engine/recorder/band-limiter';
-import { designRecorder, internalRateHz } from '../../shared/engine/recorder/recorder-design';
+import { designRecorder } from '../../shared/engine/recorder/recorder-design';
 
 export const sampleRates = [250, 500, 1000, 2000] as const;
 export const bandwidths = ['diagnostic', 'slowWave', 'monitor', 'unfiltered'] as const;
@@ -34,7 +34,7 @@ export function record(
   const first = Math.round(fromS * settings.sampleRateHz) * design.decimation;
   const inputs = Float64Array.from(
     { length: Math.round(toS * settings.sampleRateHz) * design.decimation - first },
-    (_, i) => signal((first + i) / internalRateHz + design.inputLeadS),
+    (_, i) => signal((first + i) / design.internalRateHz + design.inputLeadS),
   );
   const [output] = limiter.process([inputs], inputs.length);
   return output.subarray(-first / design.decimation);

@@ -1,10 +1,4 @@
-import {
-  clearFadedStates,
-  runBandPass,
-  runSection,
-  statesPerSection,
-  type BandPass,
-} from './biquad-cascade';
+import { clearFadedStates, runBandPass, runSection, statesPerSection, type BandPass } from './biquad-cascade';
 import { createDecimator, type Decimator } from './decimator';
 import { highPass } from './high-pass';
 import type { RecorderDesign } from './recorder-design';
@@ -39,7 +33,7 @@ export interface BandLimiter {
  * Inputs that run between two looks for faded states. Fixed in the stream's own count, so that the looks fall on
  * the same samples however the input is cut.
  */
-const segmentLength = 256;
+const segmentLength = 1024;
 
 interface Channel {
   state: Float64Array;
@@ -66,28 +60,29 @@ export function createBandLimiter(design: RecorderDesign, channelCount: number):
   const bandPass: BandPass | null = high && low ? [high, ...low] : null;
   const notchOffset = bandPass ? statesPerSection * bandPass.length : 0;
   const scratch = new Float64Array(segmentLength);
-  const channels = Array.from(
-    { length: channelCount },
-    (): Channel => ({
-      state: new Float64Array(statesPerSection * design.sections.length),
-      decimator: createDecimator(design.decimation, design.keep),
-    }),
-  );
+  const channels = Array.from({ length: channelCount }, (): Channel => ({
+    state: new Float64Array(statesPerSection * design.sections.length),
+    decimator: createDecimator(design.decimation, design.keep),
+  }));
   let inSegment = 0;
 
   const filter = (state: Float64Array, input: Float64Array, from: number, length: number): void => {
     if (bandPass) runBandPass(bandPass, state, input, from, scratch, length);
-    else scratch.set(input.subarray(from, from + length));
+    else for (let i = 0; i < length; i++) scratch[i] = input[from + i];
     if (notch) runSection(notch, state, notchOffset, scratch, length);
   };
   const runChannel = ({ state, decimator }: Channel, input: Float64Array, length: number): Float64Array => {
     const output = new Float64Array(decimator.count(length));
+    if (design.sections.length === 0) {
+      decimator.take(input, 0, length, output, 0);
+      return output;
+    }
     let kept = 0;
     let room = segmentLength - inSegment;
-    for (let from = 0; from < length; ) {
+    for (let from = 0; from < length;) {
       const part = Math.min(room, length - from);
       filter(state, input, from, part);
-      kept = decimator.take(scratch, part, output, kept);
+      kept = decimator.take(scratch, 0, part, output, kept);
       from += part;
       room -= part;
       if (room > 0) continue;

@@ -13,7 +13,7 @@ export const statesPerSection = 2;
 export type BandPass = readonly [highPass: Section, lowPass1: Section, lowPass2: Section];
 
 /**
- * Runs a band-pass. All three sections share one loop, so that each waits less for its own last sample: 3 ns a
+ * Runs a band-pass. All three sections share one loop, so that each waits less for its own last sample: 4 ns a
  * sample, where a loop for each section takes 7.
  *
  * @param state six numbers, two a section; changed

@@ -1,11 +1,9 @@
-/**
- * Keeps one output for every `decimation` inputs, over as many calls as one likes.
- */
+/** Keeps one output for every `decimation` inputs, over as many calls as one likes. */
 export interface Decimator {
   /** Outputs that the next `length` inputs will give. */
   count(length: number): number;
-  /** Takes `input[0 … length)` and writes its outputs to `output` from `to` on; returns the index after the last. */
-  take(input: Float64Array, length: number, output: Float64Array, to: number): number;
+  /** Takes `input[from … end)` and writes its outputs to `output` from `to` on; returns the index after the last. */
+  take(input: Float64Array, from: number, end: number, output: Float64Array, to: number): number;
 }
 
 /** Output k is input k · decimation. */
@@ -14,11 +12,11 @@ function createSampler(decimation: number): Decimator {
   let wait = 0;
   return {
     count: (length) => Math.max(0, Math.ceil((length - wait) / decimation)),
-    take(input, length, output, to) {
-      let i = wait;
+    take(input, from, end, output, to) {
+      let i = from + wait;
       let k = to;
-      for (; i < length; i += decimation) output[k++] = input[i];
-      wait = i - length;
+      for (; i < end; i += decimation) output[k++] = input[i];
+      wait = i - end;
       return k;
     },
   };
@@ -26,17 +24,22 @@ function createSampler(decimation: number): Decimator {
 
 /** Output k is the mean of inputs k · decimation … (k + 1) · decimation − 1; it comes with the last of them. */
 function createAverager(decimation: number): Decimator {
-  let sum = 0;
+  let carried = 0;
   let taken = 0;
   return {
     count: (length) => Math.floor((taken + length) / decimation),
-    take(input, length, output, to) {
+    take(input, from, end, output, to) {
       let k = to;
-      for (let i = 0; i < length; i++) {
-        sum += input[i];
-        if (++taken < decimation) continue;
+      let i = from;
+      while (i < end) {
+        const stop = Math.min(end, i + decimation - taken);
+        let sum = carried;
+        taken += stop - i;
+        for (; i < stop; i++) sum += input[i];
+        carried = sum;
+        if (taken < decimation) break;
         output[k++] = sum / decimation;
-        sum = 0;
+        carried = 0;
         taken = 0;
       }
       return k;

@@ -30,10 +30,13 @@ export const rechargeTimeConstantMs = 100;
 /** The recharge is over when it is this many time constants old: exp(−16) of its start is below 1e-7. */
 const rechargeEndConstants = 16;
 
-/** Time at which nothing of a stimulus is left, s. */
+/** Time at which nothing of a stimulus is left, s: from then on its samples are exactly zero. */
 export function stimulusEndS({ timeS, widthMs }: Pick<StimulusArtefact, 'timeS' | 'widthMs'>): number {
   return timeS + (widthMs + rechargeEndConstants * rechargeTimeConstantMs) / msPerS;
 }
+
+/** The recharge's exponential is computed afresh every so many samples and multiplied on in between. */
+const rechargeRun = 64;
 
 /**
  * Area under the artefact of a unit pulse from its start to `t` (ms): a rectangle, then a recharge of equal and
@@ -45,11 +48,72 @@ function unitArea(t: number, widthMs: number): number {
   return widthMs * Math.exp((widthMs - t) / rechargeTimeConstantMs);
 }
 
+/** Where a unit pulse falls on a clock: sample m holds the mean over [startMs + m·sampleMs, … + sampleMs]. */
+interface SampledPulse {
+  startMs: number;
+  sampleMs: number;
+  widthMs: number;
+  /** The first sample that holds any of it, the first that holds recharge only, and the one after its last. */
+  first: number;
+  firstRecharge: number;
+  end: number;
+}
+
+function samplePulse(clock: SampleClock, { timeS, widthMs }: StimulusArtefact): SampledPulse {
+  const sampleMs = msPerS / clock.rateHz;
+  const startMs = (clock.firstTimeS - timeS) * msPerS - sampleMs / 2;
+  return {
+    startMs,
+    sampleMs,
+    widthMs,
+    first: Math.ceil(-startMs / sampleMs) - 1,
+    firstRecharge: Math.ceil((widthMs - startMs) / sampleMs),
+    end: Math.ceil((widthMs + rechargeEndConstants * rechargeTimeConstantMs - startMs) / sampleMs),
+  };
+}
+
+/** Writes the pulse itself and the beginning of its recharge, for samples [from, end), to `out[m − offset]`. */
+function writePulse(out: Float64Array, offset: number, from: number, end: number, pulse: SampledPulse): void {
+  const { startMs, sampleMs, widthMs } = pulse;
+  for (let m = from; m < end; m++) {
+    const before = unitArea(startMs + m * sampleMs, widthMs);
+    out[m - offset] = (unitArea(startMs + (m + 1) * sampleMs, widthMs) - before) / sampleMs;
+  }
+}
+
+/**
+ * Writes recharge for samples [from, end) to `out[m − offset]`. Runs are counted from the first sample of the
+ * recharge, wherever the window starts, so that a sample's value never depends on the window.
+ */
+function writeRecharge(
+  out: Float64Array,
+  offset: number,
+  from: number,
+  end: number,
+  pulse: SampledPulse,
+): void {
+  const { startMs, sampleMs, widthMs, firstRecharge } = pulse;
+  const decay = Math.exp(-sampleMs / rechargeTimeConstantMs);
+  const height = (widthMs * Math.expm1(-sampleMs / rechargeTimeConstantMs)) / sampleMs;
+  let m = firstRecharge + Math.floor((from - firstRecharge) / rechargeRun) * rechargeRun;
+  while (m < end) {
+    const runEnd = Math.min(end, m + rechargeRun);
+    let value = height * Math.exp((widthMs - startMs - m * sampleMs) / rechargeTimeConstantMs);
+    for (; m < runEnd; m++) {
+      if (m >= from) out[m - offset] = value;
+      value *= decay;
+    }
+  }
+}
+
 /**
  * Adds a stimulus to samples [first, first + length) of a clock, as a heart vector in mV.
  *
- * Each sample holds the artefact's mean over the interval of one sample around it, so that the area is exact at
- * any position between samples and at any rate.
+ * Sample m, at time t, holds the artefact's mean over [t − T/2, t + T/2] with T the time of one sample, so that
+ * the area is exact at any position between samples and at any rate. A sample's value depends on its number
+ * only, to the bit, never on the window.
+ *
+ * @param out window of at least `length` samples; index 0 is sample `first`
  */
 export function addStimulusArtefact(
   out: VectorWindow,
@@ -58,23 +122,18 @@ export function addStimulusArtefact(
   length: number,
   stimulus: StimulusArtefact,
 ): void {
-  const { timeS, chamber, amplitudeMv, widthMs } = stimulus;
-  const sampleMs = msPerS / clock.rateHz;
-  // Interval of clock sample 0, in ms from the stimulus.
-  const start = (clock.firstTimeS - timeS) * msPerS - sampleMs / 2;
-  const from = Math.max(first, Math.ceil(-start / sampleMs) - 1);
-  const end = Math.min(
-    first + length,
-    Math.ceil(((stimulusEndS(stimulus) - timeS) * msPerS - start) / sampleMs),
-  );
-  const [dx, dy, dz] = directions[chamber];
-  let before = unitArea(start + from * sampleMs, widthMs);
-  for (let m = from; m < end; m++) {
-    const after = unitArea(start + (m + 1) * sampleMs, widthMs);
-    const value = (amplitudeMv * (after - before)) / sampleMs;
-    out.x[m - first] += dx * value;
-    out.y[m - first] += dy * value;
-    out.z[m - first] += dz * value;
-    before = after;
+  const pulse = samplePulse(clock, stimulus);
+  const from = Math.max(first, pulse.first);
+  const end = Math.min(first + length, pulse.end);
+  if (from >= end) return;
+  const unit = new Float64Array(end - from);
+  const split = Math.min(end, Math.max(from, pulse.firstRecharge));
+  writePulse(unit, from, from, split, pulse);
+  writeRecharge(unit, from, split, end, pulse);
+  const [x, y, z] = directions[stimulus.chamber].map((component) => component * stimulus.amplitudeMv);
+  for (let i = 0, o = from - first; i < unit.length; i++, o++) {
+    out.x[o] += x * unit[i];
+    out.y[o] += y * unit[i];
+    out.z[o] += z * unit[i];
   }
 }

@@ -2,7 +2,7 @@ import Fili from 'fili';
 import { describe, expect, it } from 'vitest';
 import { createBandLimiter } from '../../../shared/engine/recorder/band-limiter';
 import { quantise, quantiseLeads, twelveLeads } from '../../../shared/engine/recorder/quantiser';
-import { designRecorder, internalRateHz } from '../../../shared/engine/recorder/recorder-design';
+import { designRecorder } from '../../../shared/engine/recorder/recorder-design';
 import { measuredLeads, type MeasuredLead } from '../../../shared/engine/leads';
 import { randomStream } from '../../../shared/engine/random';
 import { allowedPairs, bandwidths, record, recorderSettings } from '../../support/recorder-bench';
@@ -86,6 +86,7 @@ describe('settling', () => {
     const design = designRecorder(settings);
     const at = (rate: number, from: number, length: number): Float64Array =>
       Float64Array.from({ length }, (_, i) => signal((from + i) / rate + design.inputLeadS));
+    const { internalRateHz } = design;
     const limiter = createBandLimiter(design, 1);
     limiter.settle([at(250, -30 * 250, 29 * 250)], 250);
     limiter.process([at(internalRateHz, -internalRateHz, internalRateHz)], internalRateHz);
