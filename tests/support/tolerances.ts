@@ -2,11 +2,17 @@
 
 /** Sums in doubles along the pipeline, mV. */
 export const doubleRoundingMv = 1e-9;
-/** The block form against fili's own filter at 0.05 Hz and 8 kHz: fili's form loses 1e-6 there, mV for 1 mV. */
+/** Our filter loop against SciPy's, both in doubles, at 0.05 Hz and 8 kHz, on 10 s of an ECG of a few mV, mV. */
+export const scipyRoundingMv = 1e-9;
+/** Our filter loop against fili's own filter at 0.05 Hz and 8 kHz: fili's form loses 1e-6 there, mV for 1 mV. */
 export const filiRoundingMv = 5e-6;
 /** A spike against the brute-force path: 1 % of its peak or 5 µV, whichever is greater (engine contract), mV. */
 export const spikeToleranceMv = (peakMv: number): number => Math.max(0.01 * peakMv, 0.005);
 /** A settled recording may differ this much from one that has run for ever, mV. */
 export const settledMv = 0.005;
+/** What a dropped recharge may leave, mV: a thousandth of the finest quantiser step. */
+export const forgottenMv = 1e-6;
 /** The diagnostic limits are inclusive; a least-squares sine over whole periods is this exact, ratio. */
 export const sineFit = 1e-4;
+/** Filters at 8 kHz bend frequencies a little; −3 dB points and widths are met this well, ratio. */
+export const designRatio = 1e-3;

@@ -16,7 +16,7 @@ const processStartS = -31;
 /** Size and rise of a movement, uniform between (chosen; larger than most QRS, slower than any). */
 const amplitudeMv = { min: 0.4, max: 1.6 } as const;
 const riseS = { min: 0.06, max: 0.25 } as const;
-/** A movement is over after this many rises: below 1e-7 of its height. */
+/** A movement is cut off after this many rises, at 4e-8 of its height. */
 const endRises = 21;
 
 const between = (range: { min: number; max: number }, u: number): number =>
@@ -24,7 +24,7 @@ const between = (range: { min: number; max: number }, u: number): number =>
 
 /** Height of a unit movement at `t` s from its start: (t/rise) exp(1 − t/rise). */
 function unitHeight(t: number, rise: number): number {
-  return t <= 0 ? 0 : (t / rise) * Math.exp(1 - t / rise);
+  return t <= 0 || t >= endRises * rise ? 0 : (t / rise) * Math.exp(1 - t / rise);
 }
 
 /**

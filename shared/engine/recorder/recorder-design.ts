@@ -13,8 +13,8 @@ import { magnitudeAt, type Section } from './section';
  */
 const usualRateHz = 8000;
 /**
- * Above this limit the bilinear transform and the width of a sample would cost a spike more than 1 % of its height
- * at 8 kHz, so the rate is doubled.
+ * Above this limit the rate is doubled: at 8 kHz the bilinear transform and the width of a sample would put a spike
+ * off by 0.5 % of its height at 200 Hz and by 1.1 % at 300 Hz, where 1 % is allowed.
  */
 const usualRateUpToHz = 200;
 
