@@ -1,32 +1,34 @@
-import Fili from 'fili';
 import { randomStream, type RandomStream } from '../random';
-import { electrodes, type Electrode } from './electrodes';
+import { runSection, statesPerSection } from '../recorder/biquad-cascade';
+import { highPass } from '../recorder/high-pass';
+import { lowPass } from '../recorder/low-pass';
+import { electrodes } from './electrodes';
 import type { PotentialSource } from './periodic';
 
-/** Noise is drawn at this rate and drawn out linearly between, Hz; muscle has little above half of it. */
-const knotRateHz = 1000;
-/** Band of surface muscle activity, Hz (common practice, no source: about 20 to 250 Hz). */
+/**
+ * Noise is drawn at this rate and straight lines are drawn between, Hz. At a quarter of it, the images that the
+ * lines leave behind are 17 dB down, and the band ends well below.
+ */
+const knotRateHz = 2000;
+/**
+ * Band of muscle activity at the skin, −3 dB at its edges, Hz: first order below, second order above. NR-14 (Friesen
+ * et al. 1990, from memory) gives 20 to 500 Hz; that most of it lies below 250 is common practice, no source.
+ */
 const bandHz = { low: 20, high: 250 };
 /** Knots that run before the first one is used, so that the filters have settled. */
 const warmUpKnots = 400;
+/** Knots drawn at a time. */
+const batchLength = 256;
 
-interface BandFilter {
-  singleStep(input: number): number;
-}
-
-function bandFilter(): BandFilter {
-  const cascades = new Fili.CalcCascades();
-  const common = {
-    order: 1,
-    characteristic: 'butterworth',
-    Fs: knotRateHz,
-    gain: 0,
-    preGain: false,
-  } as const;
-  const low = cascades.lowpass({ ...common, Fc: bandHz.high });
-  const k = Math.tan((Math.PI * bandHz.low) / knotRateHz);
-  const n = 1 / (1 + k);
-  return new Fili.IirFilter([{ k: 1, a: [(k - 1) * n, 0], b: [n, -n, 0], z: [0, 0] }, ...low]);
+/** Makes white noise into muscle noise, in place, batch after batch. */
+function createBandFilter(): (samples: Float64Array) => void {
+  const sections = [highPass(bandHz.low, knotRateHz), ...lowPass(bandHz.high, knotRateHz, 1)];
+  const state = new Float64Array(statesPerSection * sections.length);
+  return (samples) => {
+    sections.forEach((section, i) =>
+      runSection(section, state, statesPerSection * i, samples, samples.length),
+    );
+  };
 }
 
 /**
@@ -34,8 +36,9 @@ function bandFilter(): BandFilter {
  * to a knot: exact, from the filter's own correlation.
  */
 function unitRms(perKnot: number): number {
-  const filter = bandFilter();
-  const response = Array.from({ length: warmUpKnots }, (_, i) => filter.singleStep(i === 0 ? 1 : 0));
+  const response = new Float64Array(warmUpKnots);
+  response[0] = 1;
+  createBandFilter()(response);
   const correlation = (lag: number): number =>
     response.slice(lag).reduce((sum, value, i) => sum + value * response[i], 0);
   let variance = 0;
@@ -46,35 +49,59 @@ function unitRms(perKnot: number): number {
   return Math.sqrt(variance / perKnot);
 }
 
-function electrodeNoise(rmsMv: number, perKnot: number, random: RandomStream) {
-  const filter = bandFilter();
-  const gain = rmsMv / unitRms(perKnot);
-  const knot = (): number => gain * filter.singleStep(random.normal());
-  for (let i = 0; i < warmUpKnots; i++) knot();
-  let before = knot();
-  let after = knot();
+/** Filtered knots one after another, scaled by `gain`. */
+function createKnots(gain: number, random: RandomStream): () => number {
+  const filter = createBandFilter();
+  const batch = new Float64Array(batchLength);
+  let used = batchLength;
+  const next = (): number => {
+    if (used === batchLength) {
+      for (let i = 0; i < batchLength; i++) batch[i] = gain * random.normal();
+      filter(batch);
+      used = 0;
+    }
+    return batch[used++];
+  };
+  for (let i = 0; i < warmUpKnots; i++) next();
+  return next;
+}
+
+type AddNoise = (out: Float64Array, length: number) => void;
+
+/** Adds straight lines between knots, `perKnot` samples each. */
+function createElectrodeNoise(nextKnot: () => number, perKnot: number): AddNoise {
+  let before = nextKnot();
+  let after = nextKnot();
   let position = 0;
-  return (out: Float64Array, length: number): void => {
-    for (let i = 0; i < length; i++) {
-      out[i] += before + ((after - before) * position) / perKnot;
-      if (++position < perKnot) continue;
+  return (out, length) => {
+    for (let i = 0; i < length;) {
+      const end = Math.min(length, i + perKnot - position);
+      const slope = (after - before) / perKnot;
+      for (; i < end; i++, position++) out[i] += before + slope * position;
+      if (position < perKnot) return;
       position = 0;
       before = after;
-      after = knot();
+      after = nextKnot();
     }
   };
 }
 
-/** Muscle activity: band-limited Gaussian noise of `rmsMv`, independent at each electrode. `rateHz` is a multiple of 1000. */
+/**
+ * Muscle activity: band-limited Gaussian noise of `rmsMv`, independent at each electrode, one sequence of draws
+ * after another; how it is cut changes no bit.
+ *
+ * @param rateHz a multiple of 2000
+ */
 export function createMuscleNoise(rmsMv: number, seed: number, rateHz: number): PotentialSource {
   const perKnot = rateHz / knotRateHz;
-  const noises: [Electrode, ReturnType<typeof electrodeNoise>][] = electrodes.map((electrode) => [
+  const gain = rmsMv / unitRms(perKnot);
+  const noises = electrodes.map((electrode) => ({
     electrode,
-    electrodeNoise(rmsMv, perKnot, randomStream(seed, `muscle:${electrode}`)),
-  ]);
+    addNoise: createElectrodeNoise(createKnots(gain, randomStream(seed, `muscle:${electrode}`)), perKnot),
+  }));
   return {
     add(potentials, length) {
-      for (const [electrode, addNoise] of noises) addNoise(potentials[electrode], length);
+      for (const { electrode, addNoise } of noises) addNoise(potentials[electrode], length);
     },
   };
 }

@@ -55,7 +55,7 @@ describe('area and centre', () => {
       const expected = -(widthMs ** 2) / 2 - widthMs * rechargeTimeConstantMs;
       for (const shift of [0, 0.1, 0.25, 0.5, 0.77, 0.999]) {
         const one = { ...stimulus, widthMs, amplitudeMv: 1, timeS: 0.02 + shift / 8000 };
-        const { y } = paint(8000, 0, wholeLength(8000, one));
+        const { y } = paint(8000, 0, wholeLength(8000, one), one);
         const moment = y.reduce((total, value, m) => total + value * (m / 8 - 1000 * one.timeS), 0) / 8;
         expect(Math.abs(moment / component / expected - 1)).toBeLessThan(1e-5);
       }
