@@ -14,7 +14,17 @@ export function quantise(valueMv: number, resolutionUv: number): number {
 }
 
 function combine(a: Float64Array, b: Float64Array, weights: readonly [number, number]): Float64Array {
-  return a.map((value, i) => weights[0] * value + weights[1] * b[i] + 0);
+  const [wa, wb] = weights;
+  const combined = new Float64Array(a.length);
+  for (let i = 0; i < a.length; i++) combined[i] = wa * a[i] + wb * b[i] + 0;
+  return combined;
+}
+
+/** Every value of a lead, quantised. */
+function quantiseAll(values: Float64Array, resolutionUv: number): Float64Array {
+  const stepped = new Float64Array(values.length);
+  for (let i = 0; i < values.length; i++) stepped[i] = quantise(values[i], resolutionUv);
+  return stepped;
 }
 
 /**
@@ -41,10 +51,10 @@ export function quantiseLeads(
   resolutionUv: number,
 ): Record<LeadName, Float32Array> {
   const stepped = Object.fromEntries(
-    measuredLeads.map((lead) => [lead, measured[lead].map((value) => quantise(value, resolutionUv))]),
+    measuredLeads.map((lead) => [lead, quantiseAll(measured[lead], resolutionUv)]),
   ) as Record<MeasuredLead, Float64Array>;
   const leads = twelveLeads(stepped);
-  return Object.fromEntries(leadNames.map((lead) => [lead, Float32Array.from(leads[lead])])) as Record<
+  return Object.fromEntries(leadNames.map((lead) => [lead, new Float32Array(leads[lead])])) as Record<
     LeadName,
     Float32Array
   >;
