@@ -16,36 +16,48 @@ export type MeasuredSamples = Record<MeasuredLead, Float64Array>;
  */
 export interface ChannelSource {
   readonly channelCount: number;
-  /** Channels over samples [first, first + length) of a clock, and the events that came with them. */
+  /**
+   * Channels over samples [first, first + length) of a clock, and the events that came with them. The channels are
+   * good until the next call.
+   */
   render(clock: SampleClock, first: number, length: number): { channels: Float64Array[] } & RenderedEvents;
   /** Band-limited channels to the eight measured leads. */
   toMeasured(channels: readonly Float64Array[]): MeasuredSamples;
 }
 
 /** Dower projection of a heart vector onto the eight measured leads. */
-function project({ x, y, z }: VectorWindow): MeasuredSamples {
+function project({ x, y, z }: VectorWindow, length: number): MeasuredSamples {
   const entries = measuredLeads.map((lead) => {
     const [wx, wy, wz] = dowerMatrix[lead];
-    const samples = new Float64Array(x.length);
-    for (let i = 0; i < samples.length; i++) samples[i] = wx * x[i] + wy * y[i] + wz * z[i];
+    const samples = new Float64Array(length);
+    for (let i = 0; i < length; i++) samples[i] = wx * x[i] + wy * y[i] + wz * z[i];
     return [lead, samples] as const;
   });
   return Object.fromEntries(entries) as MeasuredSamples;
 }
 
-function vectorWindow(length: number): VectorWindow {
-  return { x: new Float64Array(length), y: new Float64Array(length), z: new Float64Array(length) };
+/** One window that is used again and again; samples beyond `length` are left over from longer ones. */
+function reusedWindow(): (length: number) => VectorWindow {
+  let window: VectorWindow = { x: new Float64Array(0), y: new Float64Array(0), z: new Float64Array(0) };
+  return (length) => {
+    if (window.x.length < length) {
+      window = { x: new Float64Array(length), y: new Float64Array(length), z: new Float64Array(length) };
+    }
+    return window;
+  };
 }
 
 function undisturbedSource(signal: ElectrodeSignal): ChannelSource {
+  const windowOf = reusedWindow();
   return {
     channelCount: 3,
     render(clock, first, length) {
-      const window = vectorWindow(length);
+      const window = windowOf(length);
       const rendered = signal.render(window, clock, first, length);
-      return { channels: [window.x, window.y, window.z], ...rendered };
+      const channels = [window.x, window.y, window.z].map((axis) => axis.subarray(0, length));
+      return { channels, ...rendered };
     },
-    toMeasured: ([x, y, z]) => project({ x, y, z }),
+    toMeasured: ([x, y, z]) => project({ x, y, z }, x.length),
   };
 }
 
@@ -54,13 +66,14 @@ function disturbedSource(
   signal: ElectrodeSignal,
   fullRateHz: number,
 ): ChannelSource {
+  const windowOf = reusedWindow();
   let running: { clock: SampleClock; disturbance: Disturbance } | null = null;
   return {
     channelCount: measuredLeads.length,
     render(clock, first, length) {
-      const window = vectorWindow(length);
+      const window = windowOf(length);
       const rendered = signal.render(window, clock, first, length);
-      const leads = project(window);
+      const leads = project(window, length);
       if (running?.clock !== clock) {
         const slowOnly = clock.rateHz < fullRateHz;
         running = { clock, disturbance: createDisturbance(parameters, clock, first, { slowOnly }) };
