@@ -1,5 +1,6 @@
 import js from '@eslint/js';
 import globals from 'globals';
+import reactHooks from 'eslint-plugin-react-hooks';
 import tseslint from 'typescript-eslint';
 
 /** `shared/` is pure: chance and time are passed in, so that the same parameters give the same samples. */
@@ -34,5 +35,11 @@ export default tseslint.config(
     },
   },
   { files: ['**/*.cjs'], languageOptions: { sourceType: 'commonjs' } },
+  {
+    files: ['src/**/*.{ts,tsx}'],
+    languageOptions: { globals: globals.browser },
+    plugins: { 'react-hooks': reactHooks },
+    rules: reactHooks.configs.recommended.rules,
+  },
   pureCode,
 );

@@ -1,0 +1,8 @@
+/** Every address of the product in one place; links are made here and nowhere else. */
+export const paths = {
+  signIn: (from?: string) => (from ? `/sign-in?from=${encodeURIComponent(from)}` : '/sign-in'),
+  strips: () => '/strips',
+  newStrip: () => '/strips/new',
+  strip: (stripId: string) => `/strips/${encodeURIComponent(stripId)}`,
+  help: () => '/help',
+} as const;
