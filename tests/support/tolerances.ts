@@ -4,6 +4,8 @@
 export const doubleRoundingMv = 1e-9;
 /** Our filter loop against SciPy's, both in doubles, at 0.05 Hz and 8 kHz, on 10 s of an ECG of a few mV, mV. */
 export const scipyRoundingMv = 1e-9;
+/** A notch whose width SciPy takes in Hz and fili in octaves, at 8 kHz, on the same ECG, mV; measured 7e-8. */
+export const notchWidthMv = 1e-6;
 /** Our filter loop against fili's own filter at 0.05 Hz and 8 kHz: fili's form loses 1e-6 there, mV for 1 mV. */
 export const filiRoundingMv = 5e-6;
 /** A spike against the brute-force path: 1 % of its peak or 5 µV, whichever is greater (engine contract), mV. */

@@ -7,6 +7,29 @@ export interface Oscillator {
 /** The rotation is set back to the exact angle after this many samples, before rounding can add up. */
 const renewEvery = 4096;
 
+/** Fills [from, end) with a rotation that begins at (c, s); returns where it goes on. */
+function rotate(
+  cosine: Float64Array,
+  sine: Float64Array,
+  from: number,
+  end: number,
+  firstC: number,
+  firstS: number,
+  turnCos: number,
+  turnSin: number,
+): [number, number] {
+  let c = firstC;
+  let s = firstS;
+  for (let i = from; i < end; i++) {
+    cosine[i] = c;
+    sine[i] = s;
+    const nextC = c * turnCos - s * turnSin;
+    s = s * turnCos + c * turnSin;
+    c = nextC;
+  }
+  return [c, s];
+}
+
 /**
  * cos and sin of 2π f t + phase at t = firstTimeS + m / rateHz for m = 0, 1, 2, …
  */
@@ -25,16 +48,16 @@ export function createOscillator(
   let s = 0;
   return {
     next(cosine, sine, length) {
-      for (let i = 0; i < length; i++, m++) {
-        if (m % renewEvery === 0) {
+      for (let i = 0; i < length;) {
+        const sinceRenewal = m % renewEvery;
+        if (sinceRenewal === 0) {
           c = Math.cos(start + turn * m);
           s = Math.sin(start + turn * m);
         }
-        cosine[i] = c;
-        sine[i] = s;
-        const nextC = c * turnCos - s * turnSin;
-        s = s * turnCos + c * turnSin;
-        c = nextC;
+        const run = Math.min(length - i, renewEvery - sinceRenewal);
+        [c, s] = rotate(cosine, sine, i, i + run, c, s, turnCos, turnSin);
+        i += run;
+        m += run;
       }
     },
   };

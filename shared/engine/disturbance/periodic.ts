@@ -13,6 +13,18 @@ export interface PotentialSource {
   add(potentials: ElectrodePotentials, length: number): void;
 }
 
+/** out += c · cosine + s · sine; a function of its own, because in a closure it runs three times as long. */
+function addWeighted(
+  out: Float64Array,
+  cosine: Float64Array,
+  sine: Float64Array,
+  c: number,
+  s: number,
+  length: number,
+): void {
+  for (let i = 0; i < length; i++) out[i] += c * cosine[i] + s * sine[i];
+}
+
 /** Components that sound together, from the clock's sample `first` on. */
 export function createPeriodicSource(
   components: readonly PeriodicComponent[],
@@ -24,7 +36,7 @@ export function createPeriodicSource(
     oscillator: createOscillator(component.frequencyHz, 0, clock.rateHz, firstTimeS),
     weights: electrodes.map((electrode) => {
       const { amplitudeMv, phaseRad } = component.at[electrode];
-      return { cosine: amplitudeMv * Math.sin(phaseRad), sine: amplitudeMv * Math.cos(phaseRad) };
+      return { electrode, c: amplitudeMv * Math.sin(phaseRad), s: amplitudeMv * Math.cos(phaseRad) };
     }),
   }));
   return {
@@ -33,11 +45,9 @@ export function createPeriodicSource(
       const sine = new Float64Array(length);
       for (const { oscillator, weights } of running) {
         oscillator.next(cosine, sine, length);
-        electrodes.forEach((electrode, e) => {
-          const out = potentials[electrode];
-          const weight = weights[e];
-          for (let i = 0; i < length; i++) out[i] += weight.cosine * cosine[i] + weight.sine * sine[i];
-        });
+        for (const { electrode, c, s } of weights) {
+          addWeighted(potentials[electrode], cosine, sine, c, s, length);
+        }
       }
     },
   };
