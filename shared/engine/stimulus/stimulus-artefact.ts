@@ -1,5 +1,7 @@
+import type { LeadName } from '../../parameters/sheet';
 import { msPerS } from '../../units';
 import type { StimulusChamber } from '../events';
+import { projectVector } from '../leads';
 import type { SampleClock, VectorWindow } from '../signal/wave-painter';
 
 /** What of a stimulus reaches the body surface. */
@@ -147,4 +149,10 @@ export function addStimulusArtefact(
     out.y[o] += y * unit[i];
     out.z[o] += z * unit[i];
   }
+}
+
+/** Height of a stimulus in one lead at the electrodes, mV: its surface size seen along the lead. */
+export function stimulusLeadMv(stimulus: Pick<StimulusArtefact, 'chamber' | 'amplitudeMv'>, lead: LeadName): number {
+  const [x, y, z] = directions[stimulus.chamber].map((component) => component * stimulus.amplitudeMv);
+  return projectVector(lead, x, y, z);
 }

@@ -1,0 +1,139 @@
+import { useId, useState } from 'react';
+import { pacesBothVentricles } from '../../../../shared/parameters/pacing';
+import { bandwidthLabel } from '../../../../shared/paper/bandwidth-label';
+import type { StripParameters } from '../../../../shared/parameters/strip-parameters';
+import { classNames } from '../../../lib/class-names';
+import type { ParametersEditor } from '../state/use-parameters';
+import {
+  DisturbanceFields,
+  LeadFields,
+  PacingFields,
+  PatientFields,
+  RecorderFields,
+  WaveformFields,
+} from './parameter-groups';
+
+interface Stop {
+  id: string;
+  title: string;
+  /** Two lines of current values. */
+  lines(parameters: StripParameters): [string, string];
+  Fields: (props: { editor: ParametersEditor }) => React.JSX.Element;
+}
+
+/** The six groups in the order in which the impulse travels. */
+const stops: readonly Stop[] = [
+  {
+    id: 'patient',
+    title: 'Patient',
+    lines: ({ patient }) => [
+      `${patient.atrialRhythm === 'sinus' ? `Sinus ${patient.atrialRateBpm} /min` : 'Atrial arrest'}, ${patient.avConduction === 'intact' ? `PR ${patient.prIntervalMs} ms` : 'complete block'}`,
+      patient.escapeSite === 'none' ? 'No escape' : `Escape ${patient.escapeSite}, ${patient.escapeRateBpm} /min`,
+    ],
+    Fields: PatientFields,
+  },
+  {
+    id: 'pacing',
+    title: 'Pacing',
+    lines: ({ pacing }) =>
+      pacing.source === 'none'
+        ? ['No pacemaker', '']
+        : [
+            `${pacing.mode}, ${pacing.lowerRateBpm}–${pacing.upperTrackingRateBpm} /min`,
+            `AV ${pacing.pacedAvDelayMs} / ${pacing.sensedAvDelayMs} ms`,
+          ],
+    Fields: PacingFields,
+  },
+  {
+    id: 'leads',
+    title: 'Leads and capture',
+    lines: ({ pacing }) => [
+      `RV ${pacing.rightVentricularLead.amplitudeV} V at ${pacing.rightVentricularLead.pulseWidthMs} ms`,
+      pacesBothVentricles(pacing.mode)
+        ? `LV ${pacing.leftVentricularLead.amplitudeV} V`
+        : `RA ${pacing.atrialLead.amplitudeV} V`,
+    ],
+    Fields: LeadFields,
+  },
+  {
+    id: 'waveform',
+    title: 'Waveform',
+    lines: ({ waveform }) => [
+      waveform.qrsDurationMs === null ? 'QRS from heart model' : `QRS ${waveform.qrsDurationMs} ms`,
+      `QTc ${waveform.qtcMs} ms`,
+    ],
+    Fields: WaveformFields,
+  },
+  {
+    id: 'disturbance',
+    title: 'Disturbance',
+    lines: ({ disturbance }) => [
+      `Wander ${disturbance.baselineWanderMv} mV`,
+      `Muscle ${disturbance.muscleMv}, mains ${disturbance.mainsMv} mV`,
+    ],
+    Fields: DisturbanceFields,
+  },
+  {
+    id: 'recorder',
+    title: 'Recorder',
+    lines: ({ recorder }) => [
+      bandwidthLabel(recorder),
+      `${recorder.sampleRateHz} samples/s, ${recorder.resolutionUv} µV`,
+    ],
+    Fields: RecorderFields,
+  },
+];
+
+/** The path of the impulse with its six stops; the open one shows its fields below. */
+export function ParameterPath({ editor }: { editor: ParametersEditor }) {
+  const [open, setOpen] = useState('patient');
+  const panelId = useId();
+  const current = stops.find((stop) => stop.id === open) ?? stops[0];
+  return (
+    <section aria-label="Parameters" className="px-4 pb-8 tablet:px-6">
+      <ol className="grid tablet:grid-cols-3 desk:grid-cols-6">
+        {stops.map((stop) => {
+          const chosen = stop.id === current.id;
+          const [first, second] = stop.lines(editor.parameters);
+          return (
+            <li key={stop.id}>
+              <button
+                type="button"
+                aria-expanded={chosen}
+                aria-controls={panelId}
+                onClick={() => setOpen(stop.id)}
+                className={classNames(
+                  'group flex w-full flex-col border-b border-rule py-2.5 text-left desk:border-b-0 desk:pt-0',
+                  chosen && 'border-l-4 border-l-teal pl-3 desk:border-l-0 desk:pl-0',
+                )}
+              >
+                <span aria-hidden="true" className="hidden h-4 items-center desk:flex">
+                  <span
+                    className={classNames(
+                      'size-2.5 rounded-full border',
+                      chosen ? 'border-teal bg-teal' : 'border-edge bg-paper group-hover:bg-sunk',
+                    )}
+                  />
+                  <span className={classNames('grow', chosen ? 'h-[3px] bg-teal' : 'h-px bg-edge')} />
+                </span>
+                <span className={classNames('text-section', chosen ? 'font-semibold text-teal-dark' : 'font-medium')}>
+                  {stop.title}
+                </span>
+                <span className="pr-3 text-dense text-ink-2">{first}</span>
+                <span className="min-h-4.5 pr-3 text-dense text-ink-2">{second}</span>
+              </button>
+              {chosen && (
+                <div className="border-b border-rule py-4 tablet:hidden">
+                  <stop.Fields editor={editor} />
+                </div>
+              )}
+            </li>
+          );
+        })}
+      </ol>
+      <div id={panelId} className="mt-4 hidden border-t border-rule pt-5 tablet:block">
+        <current.Fields editor={editor} />
+      </div>
+    </section>
+  );
+}

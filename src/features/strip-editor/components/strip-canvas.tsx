@@ -1,0 +1,103 @@
+import { useEffect, useRef, type KeyboardEvent, type PointerEvent } from 'react';
+import type { GridTint } from '../../../../shared/paper/tokens';
+import type { BeatColumn } from '../canvas/beat-columns';
+import { paintCalipers } from '../canvas/calipers';
+import { paintColumns, paintGrid, paintRow, type ScreenWindow } from '../canvas/paint';
+import type { RowLayout } from '../canvas/rows';
+import { pxToTime, type ScreenScale } from '../canvas/scale';
+import type { TraceChoice } from '../state/view-state';
+import type { Calipers } from './use-calipers';
+
+export interface StripCanvasProps {
+  layout: RowLayout;
+  scale: ScreenScale;
+  scrollPx: number;
+  widthPx: number;
+  durationS: number;
+  speedMmPerS: number;
+  tint: GridTint;
+  trace: TraceChoice;
+  columns: readonly BeatColumn[];
+  /** null when the calipers are put away. */
+  calipers: Calipers | null;
+  label: string;
+  onBeatStep(step: -1 | 1): void;
+  onTimePicked(timeS: number): void;
+}
+
+/** One px of the strip as a step of the calipers' arrow keys; ten with Shift. */
+const bigStep = 10;
+
+function prepare(canvas: HTMLCanvasElement, widthPx: number, heightPx: number): CanvasRenderingContext2D | null {
+  const ratio = window.devicePixelRatio || 1;
+  canvas.width = Math.round(widthPx * ratio);
+  canvas.height = Math.round(heightPx * ratio);
+  const context = canvas.getContext('2d');
+  context?.setTransform(ratio, 0, 0, ratio, 0, 0);
+  return context;
+}
+
+/** The strip in layers: paper, traces, then columns and calipers; each is repainted only when it changes. */
+export function StripCanvas(props: StripCanvasProps) {
+  const { layout, scale, scrollPx, widthPx, durationS, speedMmPerS, tint, trace, columns, calipers, label } = props;
+  const base = useRef<HTMLCanvasElement>(null);
+  const overlay = useRef<HTMLCanvasElement>(null);
+  const marks = calipers?.marks ?? null;
+  const { heightPx } = layout;
+
+  useEffect(() => {
+    if (!base.current || widthPx === 0) return;
+    const context = prepare(base.current, widthPx, heightPx);
+    if (!context) return;
+    const window: ScreenWindow = { scrollPx, widthPx, heightPx };
+    paintGrid(context, scale, window, tint);
+    for (const row of layout.rows) paintRow(context, scale, window, row, trace);
+    performance.mark('strip-painted');
+  }, [layout, scale, scrollPx, widthPx, heightPx, tint, trace]);
+
+  useEffect(() => {
+    if (!overlay.current || widthPx === 0) return;
+    const context = prepare(overlay.current, widthPx, heightPx);
+    if (!context) return;
+    const window: ScreenWindow = { scrollPx, widthPx, heightPx };
+    paintColumns(context, scale, window, columns);
+    if (marks) paintCalipers(context, scale, window, marks, durationS, speedMmPerS);
+  }, [columns, marks, scale, scrollPx, widthPx, heightPx, durationS, speedMmPerS]);
+
+  const timeAt = (event: PointerEvent<HTMLCanvasElement>): number =>
+    pxToTime(scale, event.clientX - event.currentTarget.getBoundingClientRect().left + scrollPx);
+
+  const onKeyDown = (event: KeyboardEvent<HTMLCanvasElement>): void => {
+    const direction = event.key === 'ArrowLeft' ? -1 : event.key === 'ArrowRight' ? 1 : 0;
+    if (direction !== 0) {
+      event.preventDefault();
+      if (calipers) calipers.move((direction * (event.shiftKey ? bigStep : 1)) / scale.pxPerS);
+      else props.onBeatStep(direction);
+    }
+    if (calipers && event.key === 'Enter') {
+      event.preventDefault();
+      const last = calipers.marks?.secondS ?? calipers.marks?.firstS;
+      calipers.mark(last === undefined ? durationS / 2 : last + (calipers.marks?.secondS === null ? 0.5 : 0));
+    }
+    if (calipers && event.key === 'Escape') calipers.clear();
+  };
+
+  return (
+    <div className="relative" style={{ height: heightPx, width: widthPx }}>
+      <canvas ref={base} aria-hidden="true" className="absolute inset-0 block h-full w-full" />
+      <canvas
+        ref={overlay}
+        role="img"
+        aria-label={label}
+        tabIndex={0}
+        className="absolute inset-0 block h-full w-full focus-visible:outline-offset-[-2px]"
+        style={{ cursor: calipers ? 'crosshair' : 'default' }}
+        onPointerDown={(event) => {
+          if (calipers) calipers.mark(timeAt(event));
+          else props.onTimePicked(timeAt(event));
+        }}
+        onKeyDown={onKeyDown}
+      />
+    </div>
+  );
+}
