@@ -1,0 +1,57 @@
+import { Select } from 'radix-ui';
+import { classNames } from '../lib/class-names';
+import type { Option } from './segments';
+
+interface SelectFieldProps<T extends string> {
+  label: string;
+  value: T;
+  options: readonly Option<T>[];
+  onChange(value: T): void;
+}
+
+/** One of many, in a list that opens. */
+export function SelectField<T extends string>({ label, value, options, onChange }: SelectFieldProps<T>) {
+  return (
+    <Select.Root value={value} onValueChange={(next) => onChange(next as T)}>
+      <Select.Trigger
+        aria-label={label}
+        className="inline-flex h-8 min-w-40 max-w-full items-center justify-between gap-3 rounded-control border border-edge bg-sheet px-3 text-body hover:bg-sunk pointer-coarse:min-h-11"
+      >
+        <Select.Value />
+        <Select.Icon aria-hidden="true" className="text-ink-3">
+          <Chevron />
+        </Select.Icon>
+      </Select.Trigger>
+      <Select.Portal>
+        <Select.Content
+          position="popper"
+          sideOffset={4}
+          className="z-50 max-h-80 min-w-(--radix-select-trigger-width) overflow-auto rounded-dialog border border-rule-strong bg-sheet p-1 shadow-float"
+        >
+          <Select.Viewport>
+            {options.map((option) => (
+              <Select.Item
+                key={option.value}
+                value={option.value}
+                className={classNames(
+                  'cursor-default rounded-chip px-2.5 py-1.5 text-body outline-none select-none pointer-coarse:py-3',
+                  'data-highlighted:bg-teal-tint data-[state=checked]:font-medium',
+                )}
+              >
+                <Select.ItemText>{option.label}</Select.ItemText>
+              </Select.Item>
+            ))}
+          </Select.Viewport>
+        </Select.Content>
+      </Select.Portal>
+    </Select.Root>
+  );
+}
+
+export function Chevron() {
+  return (
+    <svg viewBox="0 0 12 12" className="size-3" fill="none" stroke="currentColor" strokeWidth="1.6">
+      <path d="M2.5 4.5 6 8l3.5-3.5" />
+    </svg>
+  );
+}
