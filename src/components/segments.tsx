@@ -9,8 +9,8 @@ export interface Option<T extends string> {
 interface SegmentsProps<T extends string> {
   label: string;
   value: T;
-  options: readonly Option<T>[];
-  onChange(value: T): void;
+  options: readonly Option<NoInfer<T>>[];
+  onChange(value: NoInfer<T>): void;
   small?: boolean;
 }
 

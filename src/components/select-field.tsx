@@ -5,8 +5,8 @@ import type { Option } from './segments';
 interface SelectFieldProps<T extends string> {
   label: string;
   value: T;
-  options: readonly Option<T>[];
-  onChange(value: T): void;
+  options: readonly Option<NoInfer<T>>[];
+  onChange(value: NoInfer<T>): void;
 }
 
 /** One of many, in a list that opens. */

@@ -6,8 +6,8 @@ import type { Option } from './segments';
 interface TabsProps<T extends string> {
   label: string;
   value: T;
-  options: readonly Option<T>[];
-  onChange(value: T): void;
+  options: readonly Option<NoInfer<T>>[];
+  onChange(value: NoInfer<T>): void;
   accent?: 'teal' | 'copper';
   children: ReactNode;
 }

@@ -1,0 +1,85 @@
+import type { StripRecording } from '../../../../shared/engine/render';
+import { bandwidthLabel } from '../../../../shared/paper/bandwidth-label';
+import { leadNames } from '../../../../shared/parameters/sheet';
+import { paintGrid, paintRow, ink, type ScreenWindow } from '../canvas/paint';
+import { layoutRows } from '../canvas/rows';
+import { screenScale, timeToPx } from '../canvas/scale';
+
+/** Pixels a mm: 203 dots per inch, sharp on slides. */
+const pxPerMm = 8;
+const marginPx = 40;
+const headPx = 64;
+const footPx = 44;
+
+export type PictureOutcome = 'copied' | 'downloaded';
+
+function paintTexts(context: CanvasRenderingContext2D, recording: StripRecording, widthPx: number, heightPx: number): void {
+  const { title, sheet, recorder } = recording.parameters;
+  context.fillStyle = ink;
+  context.textBaseline = 'alphabetic';
+  context.font = '600 26px "IBM Plex Sans"';
+  context.fillText(title || 'Strip', marginPx, 44, widthPx * 0.6);
+  context.font = '400 18px "IBM Plex Mono"';
+  const scaleWords = `${sheet.speedMmPerS} mm/s ${sheet.gainMmPerMv} mm/mV ${bandwidthLabel(recorder)}`;
+  context.textAlign = 'right';
+  context.fillText(scaleWords, widthPx - marginPx, 44);
+  context.textAlign = 'left';
+  context.font = '500 18px "IBM Plex Sans"';
+  context.fillText('Synthetic teaching strip, not a patient recording', marginPx, heightPx - 16);
+}
+
+function drawPicture(recording: StripRecording, twelve: boolean): HTMLCanvasElement {
+  const { sheet, durationS } = recording.parameters;
+  const scale = screenScale(sheet, pxPerMm, 1);
+  const leads = twelve ? leadNames : sheet.leads;
+  const layout = layoutRows(
+    leads.map((lead) => ({ lead, recording, electrodes: null, caption: null })),
+    scale,
+  );
+  const window: ScreenWindow = {
+    scrollPx: 0,
+    widthPx: Math.ceil(timeToPx(scale, durationS) + 4 * pxPerMm),
+    heightPx: layout.heightPx,
+  };
+  const canvas = document.createElement('canvas');
+  canvas.width = window.widthPx + 2 * marginPx;
+  canvas.height = window.heightPx + headPx + footPx;
+  const context = canvas.getContext('2d');
+  if (!context) throw new Error('no canvas');
+  context.fillStyle = '#ffffff';
+  context.fillRect(0, 0, canvas.width, canvas.height);
+  paintTexts(context, recording, canvas.width, canvas.height);
+  context.save();
+  context.translate(marginPx, headPx);
+  context.beginPath();
+  context.rect(0, 0, window.widthPx, window.heightPx);
+  context.clip();
+  paintGrid(context, scale, window, sheet.gridTint);
+  for (const row of layout.rows) paintRow(context, scale, window, row, 'recorded');
+  context.restore();
+  return canvas;
+}
+
+function download(blob: Blob, name: string): void {
+  const link = document.createElement('a');
+  link.href = URL.createObjectURL(blob);
+  link.download = name;
+  link.click();
+  setTimeout(() => URL.revokeObjectURL(link.href), 1000);
+}
+
+/** Puts the strip on the clipboard as a picture with its scale and caution; saves it where there is no clipboard. */
+export async function copyPicture(recording: StripRecording, twelve: boolean): Promise<PictureOutcome> {
+  await document.fonts.ready;
+  const canvas = drawPicture(recording, twelve);
+  const blob = await new Promise<Blob>((done, fail) =>
+    canvas.toBlob((made) => (made ? done(made) : fail(new Error('no picture'))), 'image/png'),
+  );
+  try {
+    await navigator.clipboard.write([new ClipboardItem({ 'image/png': blob })]);
+    return 'copied';
+  } catch {
+    download(blob, 'strip.png');
+    return 'downloaded';
+  }
+}
