@@ -177,7 +177,7 @@ function BandwidthField({ editor }: GroupProps) {
     >
       <SelectField
         label="Bandwidth"
-        value={typeof bandwidth === 'string' ? bandwidth : 'custom'}
+        value={(typeof bandwidth === 'string' ? bandwidth : 'custom') as string}
         options={bandwidthOptions}
         onChange={set}
       />
