@@ -58,7 +58,7 @@ export function DetailsDialog(props: DetailsDialogProps) {
             <FieldFrame label="Place in the course">
               <SelectField
                 label="Place in the course"
-                value={field.value ?? noGroup}
+                value={(field.value ?? noGroup) as string}
                 options={groupOptions}
                 onChange={(value) => field.onChange(value === noGroup ? null : value)}
               />
