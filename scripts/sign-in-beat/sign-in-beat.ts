@@ -21,7 +21,13 @@ export function signInBeat() {
     samples: [...leads[lead]].map((value) => Math.round((2000 * value) / resolutionUv)),
     stimuli: events.flatMap((event) =>
       event.type === 'stimulus'
-        ? [{ timeS: event.timeS, chamber: event.chamber, heightMv: Number(stimulusLeadMv(event, lead).toFixed(3)) }]
+        ? [
+            {
+              timeS: event.timeS,
+              chamber: event.chamber,
+              heightMv: Number(stimulusLeadMv(event, lead).toFixed(3)),
+            },
+          ]
         : [],
     ),
     avMs: Math.round(reading.avIntervalMs ?? 0),

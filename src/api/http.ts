@@ -8,7 +8,10 @@ export class ApiError extends Error {
   readonly details: Record<string, unknown>;
   readonly retryAfterS: number | null;
 
-  constructor(error: Partial<Omit<ApiErrorBody['error'], 'id'>> & { id: ApiErrorId | 'offline' }, retryAfterS: number | null = null) {
+  constructor(
+    error: Partial<Omit<ApiErrorBody['error'], 'id'>> & { id: ApiErrorId | 'offline' },
+    retryAfterS: number | null = null,
+  ) {
     super(error.message ?? 'The server cannot be reached. Nothing is lost; try again.');
     this.name = 'ApiError';
     this.id = error.id;

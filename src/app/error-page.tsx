@@ -19,9 +19,15 @@ function wordsFor(error: unknown): Words {
     case 'notFound':
       return { title: 'There is nothing here', text: 'It was moved or deleted, or the address is mistyped.' };
     case 'offline':
-      return { title: 'The server cannot be reached', text: 'Nothing is lost. Check the connection and try again.' };
+      return {
+        title: 'The server cannot be reached',
+        text: 'Nothing is lost. Check the connection and try again.',
+      };
     default:
-      return { title: 'Something went wrong', text: 'Nothing you saved is lost. Try again; if it stays, tell the administrator.' };
+      return {
+        title: 'Something went wrong',
+        text: 'Nothing you saved is lost. Try again; if it stays, tell the administrator.',
+      };
   }
 }
 

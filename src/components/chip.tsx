@@ -2,7 +2,15 @@ import type { ReactNode } from 'react';
 import { classNames } from '../lib/class-names';
 
 /** A word in a box; a button when it can be chosen. */
-export function Tag({ children, chosen, onClick }: { children: ReactNode; chosen?: boolean; onClick?: () => void }) {
+export function Tag({
+  children,
+  chosen,
+  onClick,
+}: {
+  children: ReactNode;
+  chosen?: boolean;
+  onClick?: () => void;
+}) {
   const look = classNames(
     'inline-flex items-center rounded-chip border px-2 text-caption whitespace-nowrap',
     chosen ? 'border-teal bg-teal text-white' : 'border-rule-strong text-ink-2',

@@ -22,7 +22,9 @@ export function Dialog({ open, title, description, onClose, children }: DialogPr
         >
           <RadixDialog.Title className="text-section font-semibold">{title}</RadixDialog.Title>
           {description && (
-            <RadixDialog.Description className="mt-1.5 text-body text-ink-2">{description}</RadixDialog.Description>
+            <RadixDialog.Description className="mt-1.5 text-body text-ink-2">
+              {description}
+            </RadixDialog.Description>
           )}
           {children}
         </RadixDialog.Content>
@@ -43,7 +45,16 @@ interface ConfirmDialogProps {
   onClose(): void;
 }
 
-export function ConfirmDialog({ open, title, description, safe, action, danger, onAct, onClose }: ConfirmDialogProps) {
+export function ConfirmDialog({
+  open,
+  title,
+  description,
+  safe,
+  action,
+  danger,
+  onAct,
+  onClose,
+}: ConfirmDialogProps) {
   return (
     <Dialog open={open} title={title} description={description} onClose={onClose}>
       <div className="mt-5 flex flex-wrap justify-end gap-2.5">

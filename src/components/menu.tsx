@@ -2,7 +2,15 @@ import { DropdownMenu } from 'radix-ui';
 import type { ReactNode } from 'react';
 
 /** A list of actions behind a button. */
-export function Menu({ label, trigger, children }: { label: string; trigger: ReactNode; children: ReactNode }) {
+export function Menu({
+  label,
+  trigger,
+  children,
+}: {
+  label: string;
+  trigger: ReactNode;
+  children: ReactNode;
+}) {
   return (
     <DropdownMenu.Root>
       <DropdownMenu.Trigger
@@ -36,5 +44,9 @@ export function MenuItem({ onSelect, children }: { onSelect(): void; children: R
 }
 
 export function MenuLabel({ children }: { children: ReactNode }) {
-  return <DropdownMenu.Label className="border-b border-rule px-2.5 pt-1 pb-2 text-body">{children}</DropdownMenu.Label>;
+  return (
+    <DropdownMenu.Label className="border-b border-rule px-2.5 pt-1 pb-2 text-body">
+      {children}
+    </DropdownMenu.Label>
+  );
 }

@@ -17,7 +17,10 @@ interface NoticeProps {
 /** Something to know, with a bar at its left. */
 export function Notice({ kind, title, children }: NoticeProps) {
   return (
-    <div role={kind === 'red' ? 'alert' : 'status'} className={classNames('border-l-[3px] px-3.5 py-2.5 text-dense', kinds[kind])}>
+    <div
+      role={kind === 'red' ? 'alert' : 'status'}
+      className={classNames('border-l-[3px] px-3.5 py-2.5 text-dense', kinds[kind])}
+    >
       <strong className="font-semibold">{title}</strong> {children}
     </div>
   );

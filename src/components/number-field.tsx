@@ -41,7 +41,10 @@ export function showNumber(value: number): string {
   return String(Number(value.toPrecision(6)));
 }
 
-function rangeError(value: number, { min, max, unit, integer, value: shown }: NumberFieldProps): string | null {
+function rangeError(
+  value: number,
+  { min, max, unit, integer, value: shown }: NumberFieldProps,
+): string | null {
   const withUnit = (one: number): string => `${showNumber(one)}${unit ? ` ${unit}` : ''}`;
   const still = shown === null ? '' : ` The strip still shows ${withUnit(shown)}.`;
   if (value > max) return `${withUnit(value)} is above ${withUnit(max)}, the most allowed.${still}`;

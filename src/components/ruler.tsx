@@ -23,7 +23,18 @@ function shareOf(value: number, min: number, max: number): number {
 const percent = (share: number): string => `${(100 * share).toFixed(2)}%`;
 
 /** A slider that is a ruler: hairline, ticks, the usual range as a band, a ring as knob. */
-export function Ruler({ label, value, min, max, step, usual, markerAt, describedBy, onChange, onCommit }: RulerProps) {
+export function Ruler({
+  label,
+  value,
+  min,
+  max,
+  step,
+  usual,
+  markerAt,
+  describedBy,
+  onChange,
+  onCommit,
+}: RulerProps) {
   const at = (one: number): string => percent(shareOf(one, min, max));
   return (
     <Slider.Root

@@ -26,7 +26,12 @@ export function TextField({ label, help, error, large, end, ...rest }: TextField
           id={id}
           aria-invalid={Boolean(error)}
           aria-describedby={error ? `${id}-error` : help ? `${id}-help` : undefined}
-          className={classNames(box, large ? 'h-11' : 'h-9 pointer-coarse:h-11', error ? 'border-red' : 'border-edge', Boolean(end) && 'pr-16')}
+          className={classNames(
+            box,
+            large ? 'h-11' : 'h-9 pointer-coarse:h-11',
+            error ? 'border-red' : 'border-edge',
+            Boolean(end) && 'pr-16',
+          )}
           {...rest}
         />
         {end && <div className="absolute inset-y-0 right-2 flex items-center">{end}</div>}

@@ -14,56 +14,62 @@ export function Component() {
     <main className="mx-auto w-full max-w-3xl px-4 py-9 tablet:px-6">
       <h1 className="text-title font-semibold tracking-[-0.012em]">How Paceloom works</h1>
       <p className="mt-3 text-section text-ink-2">
-        A strip here is made, not recorded. A patient’s conduction system and a pacemaker run as cause and effect; their
-        events decide where and when the heart is activated; the activation decides all twelve leads; a recorder limits the
-        bandwidth. So what is true of every beat is known before it is drawn.
+        A strip here is made, not recorded. A patient’s conduction system and a pacemaker run as cause and
+        effect; their events decide where and when the heart is activated; the activation decides all twelve
+        leads; a recorder limits the bandwidth. So what is true of every beat is known before it is drawn.
       </p>
       <Section title="What you see on a paced strip">
         <p>
-          <strong className="text-ink">Stimulus or pacing spike.</strong> A pulse of a few tenths of a millisecond. Bipolar
-          leads leave a small spike, unipolar ones a large one, because the current returns through the body. By common
-          practice the ventricular spike is larger than the atrial one.
+          <strong className="text-ink">Stimulus or pacing spike.</strong> A pulse of a few tenths of a
+          millisecond. Bipolar leads leave a small spike, unipolar ones a large one, because the current
+          returns through the body. By common practice the ventricular spike is larger than the atrial one.
         </p>
         <p>
-          <strong className="text-ink">Capture.</strong> The stimulus starts a depolarization. It needs enough output for its
-          pulse width (the strength–duration curve) and muscle that is not refractory. A spike alone proves nothing: look for
-          what follows it, and feel for the pulse.
+          <strong className="text-ink">Capture.</strong> The stimulus starts a depolarization. It needs enough
+          output for its pulse width (the strength–duration curve) and muscle that is not refractory. A spike
+          alone proves nothing: look for what follows it, and feel for the pulse.
         </p>
         <p>
-          <strong className="text-ink">Wide QRS and discordance.</strong> A wave that starts in muscle is slow, so the QRS is
-          wide; the last to depolarize recover last, so T points the other way.
+          <strong className="text-ink">Wide QRS and discordance.</strong> A wave that starts in muscle is
+          slow, so the QRS is wide; the last to depolarize recover last, so T points the other way.
         </p>
         <p>
-          <strong className="text-ink">Fusion and pseudofusion.</strong> A paced and a conducted wave can share a beat. When the
-          stimulus comes too late to change anything, the beat is pseudofusion.
+          <strong className="text-ink">Fusion and pseudofusion.</strong> A paced and a conducted wave can
+          share a beat. When the stimulus comes too late to change anything, the beat is pseudofusion.
         </p>
       </Section>
       <Section title="What bandwidth does">
         <p>
-          A 0.4 ms spike holds little below 150 Hz. A diagnostic recorder (0.05–150 Hz) leaves about a seventh of its height, a
-          monitor (0.5–40 Hz) about a twenty-fifth: the spike you look for may not be on the screen. The 0.5 Hz limit also
-          shifts the ST segment. Compare two bandwidths in the editor.
+          A 0.4 ms spike holds little below 150 Hz. A diagnostic recorder (0.05–150 Hz) leaves about a seventh
+          of its height, a monitor (0.5–40 Hz) about a twenty-fifth: the spike you look for may not be on the
+          screen. The 0.5 Hz limit also shifts the ST segment. Compare two bandwidths in the editor.
         </p>
       </Section>
       <Section title="In the editor">
         <p>
-          The groups follow the impulse: patient, pacing, leads and capture, waveform, disturbance, recorder. Drag a ruler or
-          type a value, also with a unit (“1.2 s”, “800 uV”); for rates an interval will do. Arrow keys on the strip walk the
-          beats. With the calipers, a third mark repeats the measured interval. Ctrl Z undoes, Ctrl S saves.
+          The groups follow the impulse: patient, pacing, leads and capture, waveform, disturbance, recorder.
+          Drag a ruler or type a value, also with a unit (“1.2 s”, “800 uV”); for rates an interval will do.
+          Arrow keys on the strip walk the beats. With the calipers, a third mark repeats the measured
+          interval. Ctrl Z undoes, Ctrl S saves.
         </p>
       </Section>
       <Section title="Cautions">
         <p>
-          For education only; not for diagnosis, monitoring, device programming or treatment. Follow local protocols, the
-          manufacturer’s instructions and licensed practice. The heart model is one dipole in a uniform body: it teaches
-          patterns, it does not predict a patient.
+          For education only; not for diagnosis, monitoring, device programming or treatment. Follow local
+          protocols, the manufacturer’s instructions and licensed practice. The heart model is one dipole in a
+          uniform body: it teaches patterns, it does not predict a patient.
         </p>
       </Section>
       <Section title="Sources">
         <ul className="list-disc pl-5">
-          <li>Bandwidth and its tests: IEC 60601-2-25:2011; Kligfield et al. 2007, AHA/ACC/HRS recommendations, part I.</li>
+          <li>
+            Bandwidth and its tests: IEC 60601-2-25:2011; Kligfield et al. 2007, AHA/ACC/HRS recommendations,
+            part I.
+          </li>
           <li>NBG code: Bernstein et al. 2002.</li>
-          <li>Leads: Dower et al. 1980, Clin Cardiol 3:87; Edenbrandt and Pahlm 1988, J Electrocardiol 21:361.</li>
+          <li>
+            Leads: Dower et al. 1980, Clin Cardiol 3:87; Edenbrandt and Pahlm 1988, J Electrocardiol 21:361.
+          </li>
           <li>Bundle branch block criteria: Surawicz et al. 2009, AHA/ACCF/HRS recommendations, part III.</li>
           <li>Paced QRS width: Alhous et al. 2011, Europace 13:1738; Gupta et al. 2018, IPEJ 18:210.</li>
           <li>Spike directions: Koenig et al. 2011, J Electrocardiol.</li>

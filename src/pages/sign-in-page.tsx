@@ -23,12 +23,15 @@ export function Component() {
         <Wordmark />
         <div className="my-auto w-full max-w-90 py-10">
           <h1 className="text-display font-semibold tracking-[-0.012em]">Sign in</h1>
-          <p className="mt-1 mb-6 text-section text-ink-2">Paced strips to order: you know what is true of every beat.</p>
+          <p className="mt-1 mb-6 text-section text-ink-2">
+            Paced strips to order: you know what is true of every beat.
+          </p>
           <SignInForm onSignedIn={enter} />
         </div>
         <p className="max-w-90 text-caption text-ink-3">
-          For education only. Synthetic teaching strips, not patient recordings. Not for diagnosis, monitoring, device
-          programming or treatment. Follow local protocols, the manufacturer’s instructions and licensed practice.
+          For education only. Synthetic teaching strips, not patient recordings. Not for diagnosis,
+          monitoring, device programming or treatment. Follow local protocols, the manufacturer’s instructions
+          and licensed practice.
         </p>
       </main>
       <figure className="relative hidden overflow-hidden border-l border-rule-strong tablet:block">

@@ -8,5 +8,4 @@ export interface RenderJob {
 }
 
 export type RenderAnswer =
-  | { id: number; ok: true; recordings: StripRecording[] }
-  | { id: number; ok: false; message: string };
+  { id: number; ok: true; recordings: StripRecording[] } | { id: number; ok: false; message: string };

@@ -56,9 +56,15 @@ export function createStripRenderer(): StripRenderer {
 /**
  * One renderer for many small pictures: jobs are queued, none is dropped.
  */
-export function createQueuedRenderer(): { render(strip: StripParameters): Promise<StripRecording>; close(): void } {
+export function createQueuedRenderer(): {
+  render(strip: StripParameters): Promise<StripRecording>;
+  close(): void;
+} {
   const worker = startWorker();
-  const pending = new Map<number, { done: (recording: StripRecording) => void; fail: (error: Error) => void }>();
+  const pending = new Map<
+    number,
+    { done: (recording: StripRecording) => void; fail: (error: Error) => void }
+  >();
   let lastId = 0;
   worker.addEventListener('message', ({ data }: MessageEvent<RenderAnswer>) => {
     const job = pending.get(data.id);

@@ -10,7 +10,9 @@ import { paths } from '../../lib/paths';
 
 function initialsOf(name: string): string {
   const words = name.split(/\s+/).filter(Boolean);
-  return [words[0], words.length > 1 ? words[words.length - 1] : ''].map((word) => word?.charAt(0) ?? '').join('');
+  return [words[0], words.length > 1 ? words[words.length - 1] : '']
+    .map((word) => word?.charAt(0) ?? '')
+    .join('');
 }
 
 function NavItem({ to, children }: { to: string; children: string }) {
@@ -63,7 +65,10 @@ export function AppLayout() {
   if (!user) return null;
   return (
     <div className="flex min-h-dvh flex-col">
-      <a href="#page" className="sr-only focus:not-sr-only focus:absolute focus:left-4 focus:top-2 focus:z-50 focus:bg-sheet focus:px-3 focus:py-2">
+      <a
+        href="#page"
+        className="sr-only focus:not-sr-only focus:absolute focus:left-4 focus:top-2 focus:z-50 focus:bg-sheet focus:px-3 focus:py-2"
+      >
         Skip to the page
       </a>
       <header className="flex h-13 shrink-0 items-center gap-4 border-b border-rule-strong px-4 tablet:gap-10 tablet:px-6">
@@ -83,8 +88,8 @@ export function AppLayout() {
         <Outlet />
       </div>
       <footer className="flex shrink-0 items-center border-t border-rule px-4 py-1.5 text-caption text-ink-3 tablet:px-6">
-        For education only. Synthetic teaching strips, not patient recordings. Not for diagnosis, monitoring, device
-        programming or treatment.
+        For education only. Synthetic teaching strips, not patient recordings. Not for diagnosis, monitoring,
+        device programming or treatment.
       </footer>
       <ScrollRestoration />
     </div>

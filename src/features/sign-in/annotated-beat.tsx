@@ -10,7 +10,10 @@ const xOf = (timeS: number): number => timeS * mmPerS;
 const yOf = (mv: number): number => size.baseline - mv * mmPerMv;
 
 const path = beatData.samples
-  .map((steps, i) => `${i === 0 ? 'M' : 'L'}${xOf(i / beatData.sampleRateHz).toFixed(2)} ${yOf(steps * beatData.stepMv).toFixed(2)}`)
+  .map(
+    (steps, i) =>
+      `${i === 0 ? 'M' : 'L'}${xOf(i / beatData.sampleRateHz).toFixed(2)} ${yOf(steps * beatData.stepMv).toFixed(2)}`,
+  )
   .join('');
 
 /** Value of the trace at a time, mV. */
@@ -32,9 +35,22 @@ function Note({ x, y, toX, toY, title, text, copper }: NoteProps) {
   const colour = copper ? 'fill-copper-dark' : 'fill-ink';
   return (
     <g>
-      <line x1={x + 1} y1={y + 3.4} x2={toX} y2={toY} strokeWidth={0.12} className={copper ? 'stroke-copper-dark' : 'stroke-ink'} />
+      <line
+        x1={x + 1}
+        y1={y + 3.4}
+        x2={toX}
+        y2={toY}
+        strokeWidth={0.12}
+        className={copper ? 'stroke-copper-dark' : 'stroke-ink'}
+      />
       <circle cx={toX} cy={toY} r={0.35} className={colour} />
-      <rect x={x - 0.6} y={y - 2} width={Math.max(title.length * 0.98, text.length * 0.82) + 1.6} height={5.2} fill="#fffbf8" />
+      <rect
+        x={x - 0.6}
+        y={y - 2}
+        width={Math.max(title.length * 0.98, text.length * 0.82) + 1.6}
+        height={5.2}
+        fill="#fffbf8"
+      />
       <text x={x} y={y} className={`${colour} text-[1.75px] font-semibold`}>
         {title}
       </text>
@@ -48,7 +64,10 @@ function Note({ x, y, toX, toY, title, text, copper }: NoteProps) {
 const atrial = beatData.stimuli.filter((stimulus) => stimulus.chamber === 'atrium');
 const ventricular = beatData.stimuli.filter((stimulus) => stimulus.chamber !== 'atrium');
 /** The pair that is explained: the second of each, so that its QRS and T are on the picture. */
-const explained = { atrial: atrial[1], ventricular: ventricular.find((one) => one.timeS > atrial[1].timeS) ?? ventricular[1] };
+const explained = {
+  atrial: atrial[1],
+  ventricular: ventricular.find((one) => one.timeS > atrial[1].timeS) ?? ventricular[1],
+};
 
 /** A large paced beat, drawn by the engine, with its parts named. */
 export function AnnotatedBeat() {
@@ -56,7 +75,13 @@ export function AnnotatedBeat() {
   const v = explained.ventricular;
   const words = `Lead ${beatData.lead}: a small atrial stimulus and its P wave, ${beatData.avMs} ms later a larger ventricular stimulus, a wide QRS of ${beatData.qrsMs} ms and a T wave that points the other way.`;
   return (
-    <svg viewBox={`0 0 ${size.width} ${size.height}`} preserveAspectRatio="xMidYMid slice" role="img" aria-label={words} className="h-full w-full">
+    <svg
+      viewBox={`0 0 ${size.width} ${size.height}`}
+      preserveAspectRatio="xMidYMid slice"
+      role="img"
+      aria-label={words}
+      className="h-full w-full"
+    >
       <defs>
         <pattern id="mm" width="1" height="1" patternUnits="userSpaceOnUse">
           <path d="M1 0V1H0" fill="none" stroke="#f8e8e2" strokeWidth="0.08" />
@@ -71,26 +96,86 @@ export function AnnotatedBeat() {
       <rect x="-60" y="50" width="200" height="60" fill="#faf7f1" />
       <line x1="-60" x2="140" y1="50" y2="50" stroke="#867b68" strokeWidth="0.12" />
       {beatData.stimuli.map((stimulus) => (
-        <line key={stimulus.timeS} x1={xOf(stimulus.timeS)} x2={xOf(stimulus.timeS)} y1={yOf(0)} y2={yOf(stimulus.heightMv)} strokeWidth={0.3} className="stroke-copper" />
+        <line
+          key={stimulus.timeS}
+          x1={xOf(stimulus.timeS)}
+          x2={xOf(stimulus.timeS)}
+          y1={yOf(0)}
+          y2={yOf(stimulus.heightMv)}
+          strokeWidth={0.3}
+          className="stroke-copper"
+        />
       ))}
       <path d={path} fill="none" strokeWidth={0.36} strokeLinejoin="round" className="stroke-ink" />
-      <Note copper x={xOf(a.timeS) - 15} y={20} toX={xOf(a.timeS)} toY={yOf(0)} title="Atrial stimulus" text="small, bipolar" />
-      <Note x={xOf(a.timeS) - 1} y={13} toX={xOf(a.timeS + 0.07)} toY={yOf(traceMv(a.timeS + 0.07))} title="P wave" text="it captures" />
-      <Note copper x={xOf(v.timeS) - 13} y={45} toX={xOf(v.timeS)} toY={yOf(v.heightMv)} title="Ventricular stimulus" text="larger" />
-      <Note x={xOf(v.timeS) + 12} y={19} toX={xOf(v.timeS + 0.33)} toY={yOf(traceMv(v.timeS + 0.33))} title="T points the other way" text="discordance" />
-      <Note x={xOf(v.timeS) + 7} y={45} toX={xOf(v.timeS + 0.1)} toY={yOf(traceMv(v.timeS + 0.1))} title="Wide QRS" text={`${beatData.qrsMs} ms`} />
+      <Note
+        copper
+        x={xOf(a.timeS) - 15}
+        y={20}
+        toX={xOf(a.timeS)}
+        toY={yOf(0)}
+        title="Atrial stimulus"
+        text="small, bipolar"
+      />
+      <Note
+        x={xOf(a.timeS) - 1}
+        y={13}
+        toX={xOf(a.timeS + 0.07)}
+        toY={yOf(traceMv(a.timeS + 0.07))}
+        title="P wave"
+        text="it captures"
+      />
+      <Note
+        copper
+        x={xOf(v.timeS) - 13}
+        y={45}
+        toX={xOf(v.timeS)}
+        toY={yOf(v.heightMv)}
+        title="Ventricular stimulus"
+        text="larger"
+      />
+      <Note
+        x={xOf(v.timeS) + 12}
+        y={19}
+        toX={xOf(v.timeS + 0.33)}
+        toY={yOf(traceMv(v.timeS + 0.33))}
+        title="T points the other way"
+        text="discordance"
+      />
+      <Note
+        x={xOf(v.timeS) + 7}
+        y={45}
+        toX={xOf(v.timeS + 0.1)}
+        toY={yOf(traceMv(v.timeS + 0.1))}
+        title="Wide QRS"
+        text={`${beatData.qrsMs} ms`}
+      />
       <text x={xOf((a.timeS + v.timeS) / 2)} y={40.4} textAnchor="middle" className="fill-ink text-[1.5px]">
         AV {beatData.avMs} ms
       </text>
-      <path d={`M${xOf(a.timeS)} 38.4v1.2m0-.6H${xOf(v.timeS)}m0-.6v1.2`} fill="none" strokeWidth={0.14} className="stroke-ink" />
+      <path
+        d={`M${xOf(a.timeS)} 38.4v1.2m0-.6H${xOf(v.timeS)}m0-.6v1.2`}
+        fill="none"
+        strokeWidth={0.14}
+        className="stroke-ink"
+      />
       {Object.values(ladder).map((y) => (
         <line key={y} x1="-60" x2="140" y1={y} y2={y} stroke="#cbc0ac" strokeWidth="0.1" />
       ))}
       {atrial.map(({ timeS }) => (
-        <path key={timeS} d={`M${xOf(timeS)} ${ladder.atria - 1.4}v1.4`} strokeWidth={0.4} className="stroke-copper" />
+        <path
+          key={timeS}
+          d={`M${xOf(timeS)} ${ladder.atria - 1.4}v1.4`}
+          strokeWidth={0.4}
+          className="stroke-copper"
+        />
       ))}
       {ventricular.map(({ timeS }) => (
-        <path key={timeS} d={`M${xOf(timeS)} ${ladder.ventricles + 1.4}v-1.4`} strokeWidth={0.4} className="stroke-copper" />
+        <path
+          key={timeS}
+          d={`M${xOf(timeS)} ${ladder.ventricles + 1.4}v-1.4`}
+          strokeWidth={0.4}
+          className="stroke-copper"
+        />
       ))}
     </svg>
   );

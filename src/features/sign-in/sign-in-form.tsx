@@ -31,7 +31,11 @@ export function SignInForm({ onSignedIn }: { onSignedIn(user: User): void }) {
   return (
     <>
       <form className="flex flex-col gap-4" noValidate onSubmit={(event) => void handleSubmit(enter)(event)}>
-        {entering.isError && <Notice kind="red" title="Not signed in.">{signInWords(entering.error)}</Notice>}
+        {entering.isError && (
+          <Notice kind="red" title="Not signed in.">
+            {signInWords(entering.error)}
+          </Notice>
+        )}
         <TextField
           large
           label="E-mail"
@@ -47,7 +51,11 @@ export function SignInForm({ onSignedIn }: { onSignedIn(user: User): void }) {
           autoComplete="current-password"
           error={formState.errors.password && 'Give your password.'}
           end={
-            <button type="button" className="px-1 text-body font-medium text-teal-dark" onClick={() => setShown(!shown)}>
+            <button
+              type="button"
+              className="px-1 text-body font-medium text-teal-dark"
+              onClick={() => setShown(!shown)}
+            >
               {shown ? 'Hide' : 'Show'}
             </button>
           }

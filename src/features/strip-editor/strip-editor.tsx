@@ -69,8 +69,14 @@ export function StripEditor({ strip, initial, origin, onSavedAs, onDuplicate }: 
   );
   const { state, retry } = usePreview(parameters, wish);
   const preview = state.kind === 'waiting' ? null : state.preview;
-  const changeView = useCallback((change: Partial<ViewState>) => setView((old) => ({ ...old, ...change })), []);
-  const chooseBeats = useCallback((chosenBeats: readonly number[]) => changeView({ chosenBeats }), [changeView]);
+  const changeView = useCallback(
+    (change: Partial<ViewState>) => setView((old) => ({ ...old, ...change })),
+    [],
+  );
+  const chooseBeats = useCallback(
+    (chosenBeats: readonly number[]) => changeView({ chosenBeats }),
+    [changeView],
+  );
 
   const finish = (done: Strip, words: string): void => {
     setSaved(done);
@@ -142,7 +148,9 @@ export function StripEditor({ strip, initial, origin, onSavedAs, onDuplicate }: 
         <div className="flex flex-wrap items-center gap-3 px-4 pt-3 tablet:px-6">
           <Notice
             kind="teal"
-            title={origin === 'address' ? 'This draft came with the address.' : 'Your unsaved changes are back.'}
+            title={
+              origin === 'address' ? 'This draft came with the address.' : 'Your unsaved changes are back.'
+            }
           >
             {saved && 'The saved version is untouched.'}
           </Notice>
@@ -197,7 +205,9 @@ export function StripEditor({ strip, initial, origin, onSavedAs, onDuplicate }: 
         <DetailsDialog
           title={dialog === 'saveNew' ? 'Save as a new strip' : 'About this strip'}
           action={dialog === 'saveNew' ? 'Save strip' : 'Save version'}
-          initial={dialog === 'saveNew' ? { ...detailsOf(saved, newTitle), title: newTitle } : detailsOf(saved, '')}
+          initial={
+            dialog === 'saveNew' ? { ...detailsOf(saved, newTitle), title: newTitle } : detailsOf(saved, '')
+          }
           visibilityFixed={dialog === 'details' && saved?.canDelete === false}
           busy={saving.busy}
           error={saveError}

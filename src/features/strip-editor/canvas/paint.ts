@@ -69,7 +69,10 @@ function paintTrace(
   const samples = recording.leads[lead];
   const rate = recording.sampleRateHz;
   const from = Math.max(0, Math.floor(pxToTime(scale, window.scrollPx) * rate) - 1);
-  const end = Math.min(samples.length, Math.ceil(pxToTime(scale, window.scrollPx + window.widthPx) * rate) + 2);
+  const end = Math.min(
+    samples.length,
+    Math.ceil(pxToTime(scale, window.scrollPx + window.widthPx) * rate) + 2,
+  );
   context.beginPath();
   for (let i = from; i < end; i++) {
     const x = timeToPx(scale, i / rate) - window.scrollPx;

@@ -13,7 +13,12 @@ const footPx = 44;
 
 export type PictureOutcome = 'copied' | 'downloaded';
 
-function paintTexts(context: CanvasRenderingContext2D, recording: StripRecording, widthPx: number, heightPx: number): void {
+function paintTexts(
+  context: CanvasRenderingContext2D,
+  recording: StripRecording,
+  widthPx: number,
+  heightPx: number,
+): void {
   const { title, sheet, recorder } = recording.parameters;
   context.fillStyle = ink;
   context.textBaseline = 'alphabetic';

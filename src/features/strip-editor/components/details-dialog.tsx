@@ -37,20 +37,35 @@ export function DetailsDialog(props: DetailsDialogProps) {
   const errorOf = (name: keyof StripDetailsInput): string | undefined => formState.errors[name]?.message;
   return (
     <Dialog open title={props.title} onClose={props.onClose}>
-      <form className="mt-4 flex flex-col gap-4" noValidate onSubmit={(event) => void handleSubmit(props.onSave)(event)}>
+      <form
+        className="mt-4 flex flex-col gap-4"
+        noValidate
+        onSubmit={(event) => void handleSubmit(props.onSave)(event)}
+      >
         {props.error && (
           <Notice kind="red" title="Not saved.">
             {props.error}
           </Notice>
         )}
-        <TextField label="Title" autoComplete="off" error={errorOf('title') && 'Give a title of 1 to 120 characters.'} {...register('title')} />
+        <TextField
+          label="Title"
+          autoComplete="off"
+          error={errorOf('title') && 'Give a title of 1 to 120 characters.'}
+          {...register('title')}
+        />
         <TextArea
           label="Teaching point"
           help="What a learner should see, in one or two sentences."
           error={errorOf('teachingPoint') && 'At most 500 characters.'}
           {...register('teachingPoint')}
         />
-        <TextField label="Tags" help="Words with commas between, at most 12." autoComplete="off" error={errorOf('tagWords')} {...register('tagWords')} />
+        <TextField
+          label="Tags"
+          help="Words with commas between, at most 12."
+          autoComplete="off"
+          error={errorOf('tagWords')}
+          {...register('tagWords')}
+        />
         <Controller
           control={control}
           name="group"

@@ -104,11 +104,7 @@ export function WaveformFields({ editor }: GroupProps) {
     <Fields>
       <ParameterField editor={editor} path="waveform.pAmplitudeMv" />
       <ParameterField editor={editor} path="waveform.pDurationMs" />
-      <ParameterField
-        editor={editor}
-        path="waveform.qrsDurationMs"
-        emptyWords="as the heart model gives"
-      />
+      <ParameterField editor={editor} path="waveform.qrsDurationMs" emptyWords="as the heart model gives" />
       <ParameterField editor={editor} path="waveform.qrsScale" />
       <ParameterField editor={editor} path="waveform.axisRotationDeg" />
       <ParameterField editor={editor} path="waveform.tScale" />

@@ -28,7 +28,9 @@ const stops: readonly Stop[] = [
     title: 'Patient',
     lines: ({ patient }) => [
       `${patient.atrialRhythm === 'sinus' ? `Sinus ${patient.atrialRateBpm} /min` : 'Atrial arrest'}, ${patient.avConduction === 'intact' ? `PR ${patient.prIntervalMs} ms` : 'complete block'}`,
-      patient.escapeSite === 'none' ? 'No escape' : `Escape ${patient.escapeSite}, ${patient.escapeRateBpm} /min`,
+      patient.escapeSite === 'none'
+        ? 'No escape'
+        : `Escape ${patient.escapeSite}, ${patient.escapeRateBpm} /min`,
     ],
     Fields: PatientFields,
   },
@@ -116,7 +118,12 @@ export function ParameterPath({ editor }: { editor: ParametersEditor }) {
                   />
                   <span className={classNames('grow', chosen ? 'h-[3px] bg-teal' : 'h-px bg-edge')} />
                 </span>
-                <span className={classNames('text-section', chosen ? 'font-semibold text-teal-dark' : 'font-medium')}>
+                <span
+                  className={classNames(
+                    'text-section',
+                    chosen ? 'font-semibold text-teal-dark' : 'font-medium',
+                  )}
+                >
                   {stop.title}
                 </span>
                 <span className="pr-3 text-dense text-ink-2">{first}</span>

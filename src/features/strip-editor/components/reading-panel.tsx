@@ -32,11 +32,18 @@ function capturedWords(reading: Reading): string {
 /** Most chips that stand before a sentence; a finding of every beat says "all". */
 const mostChips = 4;
 
-function FindingRow({ finding, reading, chosenBeats, onChooseBeats }: ReadingPanelProps & { finding: Finding }) {
+function FindingRow({
+  finding,
+  reading,
+  chosenBeats,
+  onChooseBeats,
+}: ReadingPanelProps & { finding: Finding }) {
   const all = finding.beats.length === reading.beats.length && finding.beats.length > 1;
   const ranges = beatRanges(finding.beats);
   const isChosen = (beats: readonly number[]): boolean =>
-    beats.length > 0 && beats.length === chosenBeats.length && beats.every((beat) => chosenBeats.includes(beat));
+    beats.length > 0 &&
+    beats.length === chosenBeats.length &&
+    beats.every((beat) => chosenBeats.includes(beat));
   const touched = finding.beats.some((beat) => chosenBeats.includes(beat)) && !all;
   const toggle = (beats: readonly number[]): void => onChooseBeats(isChosen(beats) ? [] : beats);
   return (

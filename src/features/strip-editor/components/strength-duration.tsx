@@ -17,7 +17,9 @@ export function StrengthDuration({ lead }: { lead: PacingLead }) {
   const yOf = (volts: number): number =>
     size.top + (1 - Math.min(topV, volts) / topV) * (size.height - size.top - size.bottom);
   const steps = Array.from({ length: 41 }, (_, i) => widths.min * (widths.max / widths.min) ** (i / 40));
-  const curve = steps.map((width) => `${xOf(width).toFixed(1)},${yOf(thresholdV(lead.captureThresholdV, width)).toFixed(1)}`);
+  const curve = steps.map(
+    (width) => `${xOf(width).toFixed(1)},${yOf(thresholdV(lead.captureThresholdV, width)).toFixed(1)}`,
+  );
   const threshold = thresholdV(lead.captureThresholdV, lead.pulseWidthMs);
   const margin = lead.amplitudeV - threshold;
   const words = `${lead.amplitudeV.toFixed(2)} V at ${lead.pulseWidthMs} ms is ${Math.abs(margin).toFixed(2)} V ${margin >= 0 ? 'above' : 'below'} the threshold: it ${margin >= 0 ? 'captures' : 'does not capture'}.`;
@@ -27,21 +29,43 @@ export function StrengthDuration({ lead }: { lead: PacingLead }) {
         <span className="font-medium">Strength and duration</span>
         <span className="text-ink-3">volts against ms</span>
       </figcaption>
-      <svg viewBox={`0 0 ${size.width} ${size.height}`} role="img" aria-label={words} className="mt-1 w-full max-w-md">
+      <svg
+        viewBox={`0 0 ${size.width} ${size.height}`}
+        role="img"
+        aria-label={words}
+        className="mt-1 w-full max-w-md"
+      >
         <polygon
           points={`${curve.join(' ')} ${xOf(widths.max)},${size.top} ${xOf(widths.min)},${size.top}`}
           className="fill-teal-tint"
         />
         {[0, topV / 2, topV].map((volts) => (
           <g key={volts}>
-            <line x1={size.left} x2={size.width - size.right} y1={yOf(volts)} y2={yOf(volts)} className="stroke-rule" />
-            <text x={size.left - 6} y={yOf(volts) + 4} textAnchor="end" className="fill-ink-2 font-mono text-[12px]">
+            <line
+              x1={size.left}
+              x2={size.width - size.right}
+              y1={yOf(volts)}
+              y2={yOf(volts)}
+              className="stroke-rule"
+            />
+            <text
+              x={size.left - 6}
+              y={yOf(volts) + 4}
+              textAnchor="end"
+              className="fill-ink-2 font-mono text-[12px]"
+            >
               {volts}
             </text>
           </g>
         ))}
         {widthTicks.map((width) => (
-          <text key={width} x={xOf(width)} y={size.height - 8} textAnchor="middle" className="fill-ink-2 font-mono text-[12px]">
+          <text
+            key={width}
+            x={xOf(width)}
+            y={size.height - 8}
+            textAnchor="middle"
+            className="fill-ink-2 font-mono text-[12px]"
+          >
             {width}
           </text>
         ))}

@@ -28,7 +28,11 @@ export interface StripCanvasProps {
 /** One px of the strip as a step of the calipers' arrow keys; ten with Shift. */
 const bigStep = 10;
 
-function prepare(canvas: HTMLCanvasElement, widthPx: number, heightPx: number): CanvasRenderingContext2D | null {
+function prepare(
+  canvas: HTMLCanvasElement,
+  widthPx: number,
+  heightPx: number,
+): CanvasRenderingContext2D | null {
   const ratio = window.devicePixelRatio || 1;
   canvas.width = Math.round(widthPx * ratio);
   canvas.height = Math.round(heightPx * ratio);
@@ -39,7 +43,8 @@ function prepare(canvas: HTMLCanvasElement, widthPx: number, heightPx: number): 
 
 /** The strip in layers: paper, traces, then columns and calipers; each is repainted only when it changes. */
 export function StripCanvas(props: StripCanvasProps) {
-  const { layout, scale, scrollPx, widthPx, durationS, speedMmPerS, tint, trace, columns, calipers, label } = props;
+  const { layout, scale, scrollPx, widthPx, durationS, speedMmPerS, tint, trace, columns, calipers, label } =
+    props;
   const base = useRef<HTMLCanvasElement>(null);
   const overlay = useRef<HTMLCanvasElement>(null);
   const marks = calipers?.marks ?? null;

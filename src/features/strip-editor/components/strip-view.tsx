@@ -70,7 +70,8 @@ export function StripView({ preview, view, onChooseBeats }: StripViewProps) {
     }
   };
   const stepBeat = (step: -1 | 1): void => {
-    const last = step > 0 ? Math.max(0, ...view.chosenBeats) : Math.min(columns.length + 1, ...view.chosenBeats);
+    const last =
+      step > 0 ? Math.max(0, ...view.chosenBeats) : Math.min(columns.length + 1, ...view.chosenBeats);
     const number = view.chosenBeats.length === 0 ? (step > 0 ? 1 : columns.length) : last + step;
     if (columns[number - 1]) choose(number);
   };

@@ -25,7 +25,14 @@ function stateWords(strip: Strip | null, unsaved: boolean): string {
 
 function Undo({ flipped }: { flipped?: boolean }) {
   return (
-    <svg viewBox="0 0 16 16" className={`size-4 ${flipped ? '-scale-x-100' : ''}`} fill="none" stroke="currentColor" strokeWidth="1.6" aria-hidden="true">
+    <svg
+      viewBox="0 0 16 16"
+      className={`size-4 ${flipped ? '-scale-x-100' : ''}`}
+      fill="none"
+      stroke="currentColor"
+      strokeWidth="1.6"
+      aria-hidden="true"
+    >
       <path d="M6 3 2.5 6.5 6 10M2.5 6.5h7a4 4 0 0 1 0 8H7" />
     </svg>
   );
@@ -41,7 +48,11 @@ export function TitleBar(props: TitleBarProps) {
         <h1 className="max-w-full text-title font-semibold tracking-[-0.012em] break-words">
           {strip?.title ?? 'New strip'}
         </h1>
-        <span className="flex flex-wrap gap-1.5">{strip?.tags.slice(0, 3).map((tag) => <Tag key={tag}>{tag}</Tag>)}</span>
+        <span className="flex flex-wrap gap-1.5">
+          {strip?.tags.slice(0, 3).map((tag) => (
+            <Tag key={tag}>{tag}</Tag>
+          ))}
+        </span>
         <span role="status" className="text-dense text-ink-3">
           {stateWords(strip, unsaved)}
         </span>

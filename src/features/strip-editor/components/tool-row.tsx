@@ -83,9 +83,19 @@ export function ToolRow({ editor, view, onView, onCopyPicture }: ToolRowProps) {
   const zoomAt = zoomSteps.indexOf(view.zoom as (typeof zoomSteps)[number]);
   const zoomBy = (step: number): void => onView({ zoom: zoomSteps[zoomAt + step] ?? view.zoom });
   return (
-    <div role="toolbar" aria-label="View" className="flex flex-wrap items-center gap-x-4 gap-y-2 px-4 py-2 tablet:px-6">
+    <div
+      role="toolbar"
+      aria-label="View"
+      className="flex flex-wrap items-center gap-x-4 gap-y-2 px-4 py-2 tablet:px-6"
+    >
       <LeadChoice editor={editor} view={view} onView={onView} />
-      <Segments small label="Trace" value={view.trace} options={traceOptions} onChange={(trace) => onView({ trace })} />
+      <Segments
+        small
+        label="Trace"
+        value={view.trace}
+        options={traceOptions}
+        onChange={(trace) => onView({ trace })}
+      />
       <SelectField
         label="Second bandwidth"
         value={view.compare ?? 'none'}
@@ -127,11 +137,19 @@ export function ToolRow({ editor, view, onView, onCopyPicture }: ToolRowProps) {
           −
         </Button>
         <span className="w-12 text-center font-mono text-caption">{Math.round(100 * view.zoom)} %</span>
-        <Button small aria-label="Zoom in" disabled={zoomAt >= zoomSteps.length - 1} onClick={() => zoomBy(1)}>
+        <Button
+          small
+          aria-label="Zoom in"
+          disabled={zoomAt >= zoomSteps.length - 1}
+          onClick={() => zoomBy(1)}
+        >
           +
         </Button>
       </span>
-      <Button small aria-pressed={view.calipers} onClick={() => onView({ calipers: !view.calipers })}
+      <Button
+        small
+        aria-pressed={view.calipers}
+        onClick={() => onView({ calipers: !view.calipers })}
         kind={view.calipers ? 'primary' : 'plain'}
       >
         Calipers

@@ -35,7 +35,12 @@ export function change<State>(history: History<State>, present: State): History<
 export function undo<State>(history: History<State>): History<State> {
   const { past, present, future } = settle(history);
   if (past.length === 0) return settle(history);
-  return { past: past.slice(0, -1), present: past[past.length - 1], future: [present, ...future], before: null };
+  return {
+    past: past.slice(0, -1),
+    present: past[past.length - 1],
+    future: [present, ...future],
+    before: null,
+  };
 }
 
 export function redo<State>(history: History<State>): History<State> {

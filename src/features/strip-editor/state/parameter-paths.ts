@@ -34,8 +34,7 @@ function chambersFor(parameters: StripParameters): 'right' | 'left' | 'both' {
 }
 
 export type ParameterChange =
-  | { ok: true; parameters: StripParameters }
-  | { ok: false; path: ParameterPath; words: string };
+  { ok: true; parameters: StripParameters } | { ok: false; path: ParameterPath; words: string };
 
 function refusalWords({ path, value, allowed }: Problem, changed: ParameterPath): string {
   if (path === changed) return `${value} does not fit here. Allowed: ${allowed}.`;

@@ -4,7 +4,15 @@ export type ParsedQuantity = { value: number } | { error: string };
 const plainNumber = /^[+-]?(\d+([.,]\d*)?|[.,]\d+)(e[+-]?\d+)?$/i;
 
 /** Units of the fields in the words of mathjs; rates and plain factors have none. */
-const mathUnit: Record<string, string> = { ms: 'ms', s: 's', mV: 'mV', V: 'V', Hz: 'Hz', '°': 'deg', 'µV': 'uV' };
+const mathUnit: Record<string, string> = {
+  ms: 'ms',
+  s: 's',
+  mV: 'mV',
+  V: 'V',
+  Hz: 'Hz',
+  '°': 'deg',
+  µV: 'uV',
+};
 
 function plain(text: string): number | null {
   return plainNumber.test(text) ? Number(text.replace(',', '.')) : null;

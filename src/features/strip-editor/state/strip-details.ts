@@ -10,7 +10,14 @@ export type StripDetails = z.output<typeof stripDetailsSchema>;
 export type StripDetailsInput = z.input<typeof stripDetailsSchema>;
 
 export function tagsOf(words: string): string[] {
-  return [...new Set(words.split(',').map((word) => word.trim()).filter(Boolean))];
+  return [
+    ...new Set(
+      words
+        .split(',')
+        .map((word) => word.trim())
+        .filter(Boolean),
+    ),
+  ];
 }
 
 export function detailsOf(strip: Strip | null, title: string): StripDetailsInput {

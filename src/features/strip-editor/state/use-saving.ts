@@ -11,9 +11,7 @@ interface Kept {
 }
 
 /** Why a strip was not saved; nothing of the work is lost. */
-export type SaveProblem =
-  | { kind: 'stale'; current: Strip }
-  | { kind: 'refused'; words: string };
+export type SaveProblem = { kind: 'stale'; current: Strip } | { kind: 'refused'; words: string };
 
 function problemOf(error: unknown): SaveProblem {
   if (!(error instanceof ApiError)) return { kind: 'refused', words: 'Something went wrong; try again.' };

@@ -1,0 +1,45 @@
+import { useEffect, useRef, useState } from 'react';
+
+/** Typing rests this long before the list follows. */
+const restMs = 250;
+
+/** A search that follows what is typed, and what the address says. */
+export function SearchBox({ value, onSearch }: { value: string; onSearch(words: string): void }) {
+  const [typed, setTyped] = useState(value);
+  const [lastValue, setLastValue] = useState(value);
+  const timer = useRef<ReturnType<typeof setTimeout> | null>(null);
+  if (value !== lastValue) {
+    setLastValue(value);
+    if (value !== typed.trim()) setTyped(value);
+  }
+  useEffect(() => () => clearTimeout(timer.current ?? undefined), []);
+  return (
+    <div className="relative min-w-44 grow tablet:max-w-80">
+      <svg
+        viewBox="0 0 16 16"
+        className="pointer-events-none absolute top-1/2 left-3 size-4 -translate-y-1/2 text-ink-3"
+        fill="none"
+        stroke="currentColor"
+        strokeWidth="1.6"
+        aria-hidden="true"
+      >
+        <circle cx="7" cy="7" r="4.5" />
+        <path d="m10.5 10.5 3.5 3.5" />
+      </svg>
+      <input
+        type="search"
+        aria-label="Search strips"
+        placeholder="Title, tag or teaching point"
+        value={typed}
+        maxLength={200}
+        onChange={(event) => {
+          const words = event.target.value;
+          setTyped(words);
+          clearTimeout(timer.current ?? undefined);
+          timer.current = setTimeout(() => onSearch(words.trim()), restMs);
+        }}
+        className="h-[34px] w-full rounded-control border border-edge bg-sheet pr-3 pl-9 text-body placeholder:text-ink-3 pointer-coarse:h-11"
+      />
+    </div>
+  );
+}

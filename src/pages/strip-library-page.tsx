@@ -1,0 +1,5 @@
+import { StripLibrary } from '../features/strip-library/strip-library';
+
+export function Component() {
+  return <StripLibrary />;
+}
