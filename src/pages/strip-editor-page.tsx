@@ -1,5 +1,5 @@
 import { useQuery } from '@tanstack/react-query';
-import { useMemo, useState } from 'react';
+import { useState } from 'react';
 import { useLocation, useNavigate, useParams } from 'react-router-dom';
 import { parseStripParameters } from '../../shared/parameters/parse';
 import type { StripParameters } from '../../shared/parameters/strip-parameters';
@@ -67,9 +67,8 @@ function Editor({ strip }: { strip: Strip | null }) {
 
 function SavedStripPage({ stripId }: { stripId: string }) {
   const { data: strip } = useQuery({ ...stripQuery(stripId), throwOnError: true });
-  // The editor keeps what it was opened with; a background refresh must not pull the page from under it.
-  const opened = useMemo(() => strip ?? null, [stripId, strip === undefined]);
-  return opened ? <Editor key={opened.id} strip={opened} /> : <LoadingStrip durationS={10} tint="rose" />;
+  // The editor keeps what it was opened with; a background refresh does not pull the page from under it.
+  return strip ? <Editor key={strip.id} strip={strip} /> : <LoadingStrip durationS={10} tint="rose" />;
 }
 
 /** The strip editor, for a new strip or a saved one. */

@@ -8,7 +8,6 @@ export function useElementWidth(element: RefObject<HTMLElement | null>): number 
     if (!target) return;
     const observer = new ResizeObserver(([entry]) => setWidth(Math.round(entry.contentRect.width)));
     observer.observe(target);
-    setWidth(Math.round(target.getBoundingClientRect().width));
     return () => observer.disconnect();
   }, [element]);
   return width;
