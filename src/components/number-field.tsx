@@ -53,6 +53,12 @@ function rangeError(
   return null;
 }
 
+/** Where the words for the usual range stand: under their band, but clear of the ruler's ends. */
+function usualAt([from, to]: readonly [number, number], min: number, max: number): string {
+  const middle = (100 * ((from + to) / 2 - min)) / (max - min);
+  return `${Math.max(26, Math.min(74, middle)).toFixed(1)}%`;
+}
+
 /** Label, typed value with its unit, ruler with the usual range, help and errors in words. */
 export function NumberField(props: NumberFieldProps) {
   const { label, unit, value, min, max, integer, usual, help, nullable, emptyWords, marker, parse } = props;
@@ -134,10 +140,13 @@ export function NumberField(props: NumberFieldProps) {
         }}
         onCommit={props.onCommit}
       />
-      <div className="flex justify-between text-caption text-ink-3">
+      <div className="relative flex justify-between text-caption text-ink-3">
         <span>{showNumber(min)}</span>
         {usual && (
-          <span>
+          <span
+            className="absolute -translate-x-1/2 bg-paper px-1"
+            style={{ left: usualAt(usual, min, max) }}
+          >
             usual {showNumber(usual[0])}–{showNumber(usual[1])}
           </span>
         )}

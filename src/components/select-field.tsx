@@ -7,15 +7,25 @@ interface SelectFieldProps<T extends string> {
   value: T;
   options: readonly Option<NoInfer<T>>[];
   onChange(value: NoInfer<T>): void;
+  small?: boolean;
 }
 
 /** One of many, in a list that opens. */
-export function SelectField<T extends string>({ label, value, options, onChange }: SelectFieldProps<T>) {
+export function SelectField<T extends string>({
+  label,
+  value,
+  options,
+  onChange,
+  small,
+}: SelectFieldProps<T>) {
   return (
     <Select.Root value={value} onValueChange={(next) => onChange(next as T)}>
       <Select.Trigger
         aria-label={label}
-        className="inline-flex h-8 min-w-40 max-w-full items-center justify-between gap-3 rounded-control border border-edge bg-sheet px-3 text-body hover:bg-sunk pointer-coarse:min-h-11"
+        className={classNames(
+          'inline-flex max-w-full items-center justify-between gap-2 rounded-control border border-edge bg-sheet whitespace-nowrap hover:bg-sunk pointer-coarse:min-h-11',
+          small ? 'h-7 px-2.5 text-dense' : 'h-8 min-w-40 px-3 text-body',
+        )}
       >
         <Select.Value />
         <Select.Icon aria-hidden="true" className="text-ink-3">

@@ -1,10 +1,11 @@
 import { beatData } from './beat-data';
 
-/** SVG units are millimetres at 25 mm/s and 20 mm/mV, so that one beat fills the page. */
+/** SVG units are millimetres at 25 mm/s and 15 mm/mV, so that one beat fills the page. */
 const mmPerS = 25;
-const mmPerMv = 20;
-const size = { width: 75, height: 62, baseline: 34 };
-const ladder = { atria: 53, av: 56, ventricles: 59 };
+const mmPerMv = 15;
+const size = { width: 75, height: 62, baseline: 27 };
+const paperEnd = 50;
+const ladder = { atria: 52.5, av: 55.5, ventricles: 58.5 };
 
 const xOf = (timeS: number): number => timeS * mmPerS;
 const yOf = (mv: number): number => size.baseline - mv * mmPerMv;
@@ -33,28 +34,26 @@ interface NoteProps {
 
 function Note({ x, y, toX, toY, title, text, copper }: NoteProps) {
   const colour = copper ? 'fill-copper-dark' : 'fill-ink';
+  const width = Math.max(title.length * 0.66, text.length * 0.56) + 1;
+  // The line leaves from the side of the label that faces its end.
+  const fromX = toX > x + width ? x + width - 0.5 : Math.max(x, toX);
+  const fromY = toY > y ? y + 2.2 : y - 1.4;
   return (
     <g>
       <line
-        x1={x + 1}
-        y1={y + 3.4}
+        x1={fromX}
+        y1={fromY}
         x2={toX}
         y2={toY}
-        strokeWidth={0.12}
+        strokeWidth={0.09}
         className={copper ? 'stroke-copper-dark' : 'stroke-ink'}
       />
-      <circle cx={toX} cy={toY} r={0.35} className={colour} />
-      <rect
-        x={x - 0.6}
-        y={y - 2}
-        width={Math.max(title.length * 0.98, text.length * 0.82) + 1.6}
-        height={5.2}
-        fill="#fffbf8"
-      />
-      <text x={x} y={y} className={`${colour} text-[1.75px] font-semibold`}>
+      <circle cx={toX} cy={toY} r={0.26} className={colour} />
+      <rect x={x - 0.5} y={y - 1.4} width={width} height={3.6} fill="#fffbf8" />
+      <text x={x} y={y} className={`${colour} text-[1.15px] font-semibold`}>
         {title}
       </text>
-      <text x={x} y={y + 2.2} className="fill-ink-2 text-[1.55px]">
+      <text x={x} y={y + 1.5} className="fill-ink-2 text-[1px]">
         {text}
       </text>
     </g>
@@ -93,8 +92,8 @@ export function AnnotatedBeat() {
       </defs>
       <rect x="-60" y="-60" width="200" height="110" fill="#fffbf8" />
       <rect x="-60" y="-60" width="200" height="110" fill="url(#mm5)" />
-      <rect x="-60" y="50" width="200" height="60" fill="#faf7f1" />
-      <line x1="-60" x2="140" y1="50" y2="50" stroke="#867b68" strokeWidth="0.12" />
+      <rect x="-60" y={paperEnd} width="200" height="60" fill="#faf7f1" />
+      <line x1="-60" x2="140" y1={paperEnd} y2={paperEnd} stroke="#867b68" strokeWidth="0.12" />
       {beatData.stimuli.map((stimulus) => (
         <line
           key={stimulus.timeS}
@@ -102,23 +101,32 @@ export function AnnotatedBeat() {
           x2={xOf(stimulus.timeS)}
           y1={yOf(0)}
           y2={yOf(stimulus.heightMv)}
-          strokeWidth={0.3}
+          strokeWidth={0.22}
           className="stroke-copper"
         />
       ))}
-      <path d={path} fill="none" strokeWidth={0.36} strokeLinejoin="round" className="stroke-ink" />
+      <path d={path} fill="none" strokeWidth={0.26} strokeLinejoin="round" className="stroke-ink" />
+      <path
+        d={`M${xOf(a.timeS)} 22.4v1.2m0-.6H${xOf(v.timeS)}m0-.6v1.2`}
+        fill="none"
+        strokeWidth={0.1}
+        className="stroke-ink"
+      />
+      <text x={xOf((a.timeS + v.timeS) / 2)} y={21.6} textAnchor="middle" className="fill-ink text-[1.05px]">
+        AV {beatData.avMs} ms
+      </text>
       <Note
         copper
-        x={xOf(a.timeS) - 15}
-        y={20}
+        x={xOf(a.timeS) - 12}
+        y={34}
         toX={xOf(a.timeS)}
-        toY={yOf(0)}
+        toY={yOf(a.heightMv)}
         title="Atrial stimulus"
         text="small, bipolar"
       />
       <Note
-        x={xOf(a.timeS) - 1}
-        y={13}
+        x={xOf(a.timeS) - 8}
+        y={15}
         toX={xOf(a.timeS + 0.07)}
         toY={yOf(traceMv(a.timeS + 0.07))}
         title="P wave"
@@ -126,7 +134,7 @@ export function AnnotatedBeat() {
       />
       <Note
         copper
-        x={xOf(v.timeS) - 13}
+        x={xOf(v.timeS) - 16}
         y={45}
         toX={xOf(v.timeS)}
         toY={yOf(v.heightMv)}
@@ -134,29 +142,20 @@ export function AnnotatedBeat() {
         text="larger"
       />
       <Note
-        x={xOf(v.timeS) + 12}
-        y={19}
-        toX={xOf(v.timeS + 0.33)}
-        toY={yOf(traceMv(v.timeS + 0.33))}
+        x={xOf(v.timeS) + 13}
+        y={14}
+        toX={xOf(v.timeS + 0.41)}
+        toY={yOf(traceMv(v.timeS + 0.41))}
         title="T points the other way"
         text="discordance"
       />
       <Note
         x={xOf(v.timeS) + 7}
-        y={45}
+        y={44}
         toX={xOf(v.timeS + 0.1)}
         toY={yOf(traceMv(v.timeS + 0.1))}
         title="Wide QRS"
         text={`${beatData.qrsMs} ms`}
-      />
-      <text x={xOf((a.timeS + v.timeS) / 2)} y={40.4} textAnchor="middle" className="fill-ink text-[1.5px]">
-        AV {beatData.avMs} ms
-      </text>
-      <path
-        d={`M${xOf(a.timeS)} 38.4v1.2m0-.6H${xOf(v.timeS)}m0-.6v1.2`}
-        fill="none"
-        strokeWidth={0.14}
-        className="stroke-ink"
       />
       {Object.values(ladder).map((y) => (
         <line key={y} x1="-60" x2="140" y1={y} y2={y} stroke="#cbc0ac" strokeWidth="0.1" />

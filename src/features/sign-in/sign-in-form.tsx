@@ -2,6 +2,7 @@ import { zodResolver } from '@hookform/resolvers/zod';
 import { useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
 import { useState } from 'react';
 import { useForm } from 'react-hook-form';
+import type { DemoAccount } from '../../../shared/api/demo';
 import { roleNames } from '../../../shared/api/roles';
 import { signInRequestSchema, type SignInRequest, type User } from '../../../shared/api/session';
 import { demoQuery, sessionKeys, signIn } from '../../api/session';
@@ -9,6 +10,11 @@ import { Button, buttonClass } from '../../components/button';
 import { Notice } from '../../components/notice';
 import { TextField } from '../../components/text-field';
 import { signInWords } from './sign-in-words';
+
+/** The first account of each role. */
+function onePerRole(accounts: readonly DemoAccount[]): DemoAccount[] {
+  return accounts.filter((account, i) => accounts.findIndex((one) => one.role === account.role) === i);
+}
 
 /** E-mail and password, and the people of the demonstration where there is one. */
 export function SignInForm({ onSignedIn }: { onSignedIn(user: User): void }) {
@@ -70,7 +76,7 @@ export function SignInForm({ onSignedIn }: { onSignedIn(user: User): void }) {
           <p className="text-body font-semibold">Demonstration college</p>
           <p className="text-body text-ink-2">Enter as one of its people:</p>
           <div className="mt-2.5 flex flex-wrap gap-2">
-            {demo.accounts.map((account) => (
+            {onePerRole(demo.accounts).map((account) => (
               <button
                 key={account.email}
                 type="button"

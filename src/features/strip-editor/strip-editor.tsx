@@ -143,6 +143,7 @@ export function StripEditor({ strip, initial, origin, onSavedAs, onDuplicate }: 
         onDetails={() => setDialog('details')}
         onDuplicate={onDuplicate}
         onCopyAddress={() => void copyAddress()}
+        onCopyPicture={() => void copy()}
       />
       {showOrigin && (
         <div className="flex flex-wrap items-center gap-3 px-4 pt-3 tablet:px-6">
@@ -170,7 +171,7 @@ export function StripEditor({ strip, initial, origin, onSavedAs, onDuplicate }: 
           </Button>
         </div>
       )}
-      <ToolRow editor={editor} view={view} onView={changeView} onCopyPicture={() => void copy()} />
+      <ToolRow editor={editor} view={view} onView={changeView} />
       {state.kind === 'failed' && (
         <div className="flex items-center gap-3 px-4 pb-2 tablet:px-6">
           <Notice kind="red" title="The strip could not be rendered.">

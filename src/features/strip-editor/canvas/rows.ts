@@ -30,6 +30,8 @@ const leastHeightPx = 160;
 /** Room that a row keeps, mV, and the most it asks for: taller spikes cross rows, as on paper. */
 const leastMv = { two: 0.7, twelve: 0.45 } as const;
 const mostMv = 2.4;
+/** The calibration pulse of the top row must not be cut. */
+const calibrationMv = 1;
 
 function extentOf(samples: Float32Array): Extent {
   let up = 0;
@@ -50,7 +52,7 @@ export function layoutRows(rows: readonly Omit<Row, 'baselinePx'>[], scale: Scre
   let y = 0;
   const placed = rows.map((row): Row => {
     const { up, down } = extentOf(row.recording.leads[row.lead]);
-    const baselinePx = y + boxes(up);
+    const baselinePx = y + boxes(y === 0 ? Math.max(calibrationMv, up) : up);
     y = baselinePx + boxes(down);
     return { ...row, baselinePx };
   });

@@ -15,6 +15,7 @@ interface TitleBarProps {
   onDetails(): void;
   onDuplicate(): void;
   onCopyAddress(): void;
+  onCopyPicture(): void;
 }
 
 function stateWords(strip: Strip | null, unsaved: boolean): string {
@@ -77,6 +78,7 @@ export function TitleBar(props: TitleBarProps) {
           {strip && <MenuItem onSelect={props.onDuplicate}>Duplicate the saved strip</MenuItem>}
           <MenuItem onSelect={props.onCopyAddress}>Copy address of this draft</MenuItem>
         </Menu>
+        <Button onClick={props.onCopyPicture}>Copy picture</Button>
         {canSave ? (
           <Button kind="primary" disabled={busy || (strip !== null && !unsaved)} onClick={props.onSave}>
             {busy ? 'Saving …' : strip ? 'Save version' : 'Save strip'}

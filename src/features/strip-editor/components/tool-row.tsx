@@ -10,7 +10,6 @@ interface ToolRowProps {
   editor: ParametersEditor;
   view: ViewState;
   onView(change: Partial<ViewState>): void;
-  onCopyPicture(): void;
 }
 
 const traceOptions = [
@@ -29,7 +28,7 @@ const compareOptions = [
 
 const durations = [6, 10, 30, 60];
 
-function LeadChoice({ editor, view, onView }: Omit<ToolRowProps, 'onCopyPicture'>) {
+function LeadChoice({ editor, view, onView }: ToolRowProps) {
   const { leads } = editor.parameters.sheet;
   const toggle = (lead: LeadName): void => {
     const next = leadNames.filter((one) => (one === lead ? !leads.includes(one) : leads.includes(one)));
@@ -49,7 +48,9 @@ function LeadChoice({ editor, view, onView }: Omit<ToolRowProps, 'onCopyPicture'
         onChange={(value) => onView({ twelve: value === 'twelve' })}
       />
       <Popover.Root>
-        <Popover.Trigger className={buttonClass('plain', true)}>Choose leads</Popover.Trigger>
+        <Popover.Trigger aria-label="Choose leads" className={buttonClass('plain', true)}>
+          Choose
+        </Popover.Trigger>
         <Popover.Portal>
           <Popover.Content
             align="start"
@@ -78,7 +79,7 @@ function LeadChoice({ editor, view, onView }: Omit<ToolRowProps, 'onCopyPicture'
 }
 
 /** How the strip is looked at: leads, traces, bandwidths, speed, gain, zoom, calipers. */
-export function ToolRow({ editor, view, onView, onCopyPicture }: ToolRowProps) {
+export function ToolRow({ editor, view, onView }: ToolRowProps) {
   const { sheet, durationS } = editor.parameters;
   const zoomAt = zoomSteps.indexOf(view.zoom as (typeof zoomSteps)[number]);
   const zoomBy = (step: number): void => onView({ zoom: zoomSteps[zoomAt + step] ?? view.zoom });
@@ -86,7 +87,7 @@ export function ToolRow({ editor, view, onView, onCopyPicture }: ToolRowProps) {
     <div
       role="toolbar"
       aria-label="View"
-      className="flex flex-wrap items-center gap-x-4 gap-y-2 px-4 py-2 tablet:px-6"
+      className="flex items-center gap-x-3 gap-y-2 overflow-x-auto px-4 py-2 tablet:flex-wrap tablet:overflow-x-visible tablet:px-6"
     >
       <LeadChoice editor={editor} view={view} onView={onView} />
       <Segments
@@ -97,6 +98,7 @@ export function ToolRow({ editor, view, onView, onCopyPicture }: ToolRowProps) {
         onChange={(trace) => onView({ trace })}
       />
       <SelectField
+        small
         label="Second bandwidth"
         value={view.compare ?? 'none'}
         options={compareOptions}
@@ -153,9 +155,6 @@ export function ToolRow({ editor, view, onView, onCopyPicture }: ToolRowProps) {
         kind={view.calipers ? 'primary' : 'plain'}
       >
         Calipers
-      </Button>
-      <Button small onClick={onCopyPicture}>
-        Copy picture
       </Button>
     </div>
   );
