@@ -25,6 +25,17 @@ export default defineConfig({
       },
       {
         test: {
+          name: 'e2e',
+          include: ['tests/e2e/**/*.test.ts'],
+          environment: 'node',
+          globalSetup: ['tests/support/browser/build-product.ts'],
+          testTimeout: 180_000,
+          hookTimeout: 120_000,
+          fileParallelism: false,
+        },
+      },
+      {
+        test: {
           name: 'command-line',
           include: ['tests/command-line/**/*.test.ts'],
           environment: 'node',

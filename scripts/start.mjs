@@ -1,5 +1,6 @@
 // `npm start`: installs and builds what is missing, then serves. Plain JavaScript, because it must run before
 // anything is installed. Settings: PORT (4280), HOST (127.0.0.1), DATA_DIR (data), LOG_LEVEL (warn), TRUST_PROXY (0).
+// `--build-only` stops before serving.
 import { dirname } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { ensureNodeModules } from './install/node-modules.mjs';
@@ -21,4 +22,4 @@ await buildWhenChanged({
   sources: ['server', 'shared'],
   output: 'dist/server',
 });
-await import('../dist/server/main.js');
+if (!process.argv.includes('--build-only')) await import('../dist/server/main.js');

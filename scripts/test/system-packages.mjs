@@ -1,7 +1,13 @@
 import { spawnSync } from 'node:child_process';
+import { existsSync } from 'node:fs';
 
 /** Debian packages that some checks need; `present` tells without apt whether they are there. */
 const needed = [
+  {
+    name: 'chromium',
+    checks: 'browser journeys, accessibility and widths',
+    present: () => existsSync('/usr/bin/chromium'),
+  },
   {
     name: 'python3-scipy',
     checks: 'the recorder against SciPy on a real ECG record',

@@ -1,9 +1,13 @@
-import { existsSync } from 'node:fs';
+import { existsSync, readFileSync } from 'node:fs';
 import { extname, join, sep } from 'node:path';
 import express, { type RequestHandler } from 'express';
+import { styleNonceOf } from './security-headers';
 
 /** Built files carry a hash of their content in their names, so they never change. */
 const builtForEver = 'public, max-age=31536000, immutable';
+
+/** Stands in index.html where each answer's nonce for style elements goes. */
+const noncePlace = '__STYLE_NONCE__';
 
 /**
  * The built client: its files, and its one page for every other address, since the client does its own routing.
@@ -25,8 +29,8 @@ export function staticClient(directory: string): RequestHandler[] {
       response.status(503).type('text').send('The pages are not built yet. Start with: npm start\n');
       return;
     }
-    response.set('Cache-Control', 'no-cache');
-    response.sendFile(page);
+    const html = readFileSync(page, 'utf8').replace(noncePlace, styleNonceOf(response));
+    response.set('Cache-Control', 'no-store').type('html').send(html);
   };
   return [files, sendPage];
 }

@@ -1,5 +1,6 @@
 import { Select } from 'radix-ui';
 import { classNames } from '../lib/class-names';
+import { styleNonce } from '../lib/style-nonce';
 import type { Option } from './segments';
 
 interface SelectFieldProps<T extends string> {
@@ -38,7 +39,7 @@ export function SelectField<T extends string>({
           sideOffset={4}
           className="z-50 max-h-80 min-w-(--radix-select-trigger-width) overflow-auto rounded-dialog border border-rule-strong bg-sheet p-1 shadow-float"
         >
-          <Select.Viewport>
+          <Select.Viewport nonce={styleNonce()}>
             {options.map((option) => (
               <Select.Item
                 key={option.value}

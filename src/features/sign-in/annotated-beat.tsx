@@ -125,8 +125,8 @@ export function AnnotatedBeat() {
         text="small, bipolar"
       />
       <Note
-        x={xOf(a.timeS) - 8}
-        y={15}
+        x={xOf(a.timeS) - 9}
+        y={20}
         toX={xOf(a.timeS + 0.07)}
         toY={yOf(traceMv(a.timeS + 0.07))}
         title="P wave"

@@ -56,7 +56,7 @@ export function StripEditor({ strip, initial, origin, onSavedAs, onDuplicate }: 
 
   const base = saved?.parameters ?? (origin === 'saved' ? fresh : null);
   const unsaved = base === null || !same(parameters, base);
-  const guard = useUnsavedGuard(unsaved);
+  const { blocker, letGo } = useUnsavedGuard(unsaved);
   const stripId = saved?.id ?? null;
   useEffect(() => {
     if (unsaved) storeDraft(stripId, { parameters, version: saved?.version ?? 0 });
@@ -105,6 +105,7 @@ export function StripEditor({ strip, initial, origin, onSavedAs, onDuplicate }: 
     }
     dropDraft(stripId);
     finish(outcome, 'Strip saved');
+    letGo();
     onSavedAs(outcome);
   };
   const takeTheirs = (): void => {
@@ -231,14 +232,14 @@ export function StripEditor({ strip, initial, origin, onSavedAs, onDuplicate }: 
         />
       )}
       <ConfirmDialog
-        open={guard.state === 'blocked'}
+        open={blocker.state === 'blocked'}
         title="Leave without saving?"
         description="Your changes to this strip are not saved. They are kept in this tab until you come back or close it."
         safe="Keep editing"
         action="Leave"
         danger
-        onAct={() => guard.proceed?.()}
-        onClose={() => guard.reset?.()}
+        onAct={() => blocker.proceed?.()}
+        onClose={() => blocker.reset?.()}
       />
     </main>
   );

@@ -1,0 +1,118 @@
+import AxeBuilder from '@axe-core/playwright';
+import type { Browser, Page } from 'playwright-core';
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { hasBrowser, launchBrowser, openPage, signInAs } from '../support/browser/browser';
+import { startProduct, type Product } from '../support/browser/product';
+
+const sizes = [
+  { width: 1440, height: 900 },
+  { width: 1024, height: 768 },
+  { width: 390, height: 844 },
+];
+
+interface State {
+  name: string;
+  path: string;
+  /** What to do before looking. */
+  act?(page: Page): Promise<void>;
+  /** Something that is there when the page is ready. */
+  ready(page: Page): Promise<void>;
+}
+
+const seen = (page: Page, text: string): Promise<void> => page.getByText(text).first().waitFor();
+const openGroup = (page: Page, name: string): Promise<void> =>
+  page.getByRole('region', { name: 'Parameters' }).getByRole('button', { name }).click();
+
+const states: State[] = [
+  { name: 'library', path: '/strips', ready: (page) => seen(page, 'Recognise the chamber') },
+  {
+    name: 'library as a table',
+    path: '/strips?view=table&sort=title',
+    ready: (page) => seen(page, 'Changed'),
+  },
+  {
+    name: 'library without a match',
+    path: '/strips?search=zzzz',
+    ready: (page) => seen(page, 'No strip fits'),
+  },
+  { name: 'new strip', path: '/strips/new', ready: (page) => seen(page, 'No stimulus is given.') },
+  {
+    name: 'saved strip',
+    path: '/strips/av-sequential-pacing',
+    ready: (page) => seen(page, 'stimulated in sequence'),
+  },
+  ...['Pacing', 'Leads and capture', 'Waveform', 'Disturbance', 'Recorder'].map((group): State => ({
+    name: `group ${group}`,
+    path: '/strips/two-ventricles-right-first',
+    ready: (page) => seen(page, '40 ms apart'),
+    act: (page) => openGroup(page, group),
+  })),
+  {
+    name: 'twelve leads with an error at a field',
+    path: '/strips/new',
+    ready: (page) => seen(page, 'No stimulus is given.'),
+    async act(page) {
+      await page.getByRole('radio', { name: 'All twelve' }).click();
+      const field = page.getByRole('textbox', { name: 'Atrial rate', exact: true });
+      await field.fill('9000');
+      await field.press('Enter');
+      await seen(page, 'the most allowed');
+    },
+  },
+  {
+    name: 'save dialog',
+    path: '/strips/new',
+    ready: (page) => seen(page, 'No stimulus is given.'),
+    act: (page) => page.getByRole('button', { name: 'Save strip' }).click(),
+  },
+  { name: 'help', path: '/help', ready: (page) => seen(page, 'What bandwidth does') },
+  { name: 'nothing here', path: '/nowhere', ready: (page) => seen(page, 'There is nothing here') },
+];
+
+async function check(page: Page): Promise<void> {
+  const { violations } = await new AxeBuilder({ page }).analyze();
+  expect(violations.map(({ id, nodes }) => `${id}: ${nodes.map((node) => node.html).join(' | ')}`)).toEqual(
+    [],
+  );
+  const overflow = await page.evaluate(() => document.documentElement.scrollWidth - window.innerWidth);
+  expect(overflow).toBeLessThanOrEqual(0);
+}
+
+describe.skipIf(!hasBrowser())('every page at every width is accessible and fits', () => {
+  let browser: Browser;
+  let product: Product;
+  beforeAll(async () => {
+    product = await startProduct();
+    browser = await launchBrowser();
+  });
+  afterAll(async () => {
+    await browser?.close();
+    await product?.stop();
+  });
+
+  for (const size of sizes) {
+    it(`sign-in at ${size.width} px`, async () => {
+      const { context, page, trouble } = await openPage(browser, product.url, size);
+      await page.goto('/sign-in');
+      await seen(page, 'Enter as one of its people:');
+      await check(page);
+      await context.close();
+      expect(trouble.messages).toEqual([]);
+    });
+
+    it(`all states at ${size.width} px`, async () => {
+      const { context, page, trouble } = await openPage(browser, product.url, size);
+      await signInAs(page, 'educator');
+      for (const state of states) {
+        await page.goto(state.path);
+        await state.ready(page);
+        await state.act?.(page);
+        await check(page).catch((error: Error) => {
+          throw new Error(`${state.name} at ${size.width} px: ${error.message}`);
+        });
+      }
+      await context.close();
+      expect(trouble.messages).toEqual([]);
+    });
+  }
+});

@@ -1,0 +1,264 @@
+import type { Browser, Page } from 'playwright-core';
+import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest';
+import { hasBrowser, launchBrowser, openPage, signInAs, type Visit } from '../support/browser/browser';
+import { startProduct, type Product } from '../support/browser/product';
+
+// Whole journeys in Debian's Chromium against the built product.
+describe.skipIf(!hasBrowser())('in the browser', () => {
+  let browser: Browser;
+  let product: Product;
+  let visits: Visit[] = [];
+
+  beforeAll(async () => {
+    product = await startProduct();
+    browser = await launchBrowser();
+  });
+  afterAll(async () => {
+    await browser?.close();
+    await product?.stop();
+  });
+  // Every page of every journey: no error or warning in its console, no request that left the origin.
+  afterEach(async () => {
+    const messages = visits.flatMap((visit) => visit.trouble.messages);
+    await Promise.all(visits.map((visit) => visit.context.close()));
+    visits = [];
+    expect(messages).toEqual([]);
+  });
+
+  async function visit(size?: { width: number; height: number }): Promise<Page> {
+    const opened = await openPage(browser, product.url, size);
+    visits.push(opened);
+    return opened.page;
+  }
+  const reading = (page: Page) => page.getByRole('region', { name: 'Reading' });
+  const openGroup = (page: Page, name: string) =>
+    page.getByRole('region', { name: 'Parameters' }).getByRole('button', { name }).click();
+  const type = async (page: Page, label: string, value: string): Promise<void> => {
+    const field = page.getByRole('textbox', { name: label, exact: true });
+    await field.fill(value);
+    await field.press('Enter');
+  };
+  async function saveAs(page: Page, title: string): Promise<void> {
+    await page.getByRole('button', { name: 'Save strip' }).click();
+    const dialog = page.getByRole('dialog');
+    await dialog.getByLabel('Title').fill(title);
+    await dialog.getByRole('radio', { name: 'My department' }).click();
+    await dialog.getByRole('button', { name: 'Save strip' }).click();
+    await page.waitForURL(/\/strips\/[0-9a-f-]{36}$/);
+  }
+
+  it('makes an AV sequential strip from nothing, saves it, reloads it and finds it again', async () => {
+    const page = await visit();
+    await signInAs(page, 'educator');
+    await page.getByRole('link', { name: 'New strip' }).click();
+    await reading(page).getByText('No stimulus is given.').waitFor();
+    await page.getByRole('radio', { name: 'Complete block' }).click();
+    await type(page, 'Atrial rate', '42');
+    await openGroup(page, 'Pacing');
+    await page.getByRole('radio', { name: 'Implanted' }).click();
+    await type(page, 'Lower rate', '66');
+    await reading(page)
+      .getByText('Atrium and right ventricle are stimulated in sequence, 180 ms apart.')
+      .waitFor();
+    await type(page, 'Paced AV delay', '0.15 s');
+    await reading(page).getByText('in sequence, 150 ms apart.').waitFor();
+    await saveAs(page, 'Sequence for Thursday');
+    await page.reload();
+    await page.getByRole('heading', { name: 'Sequence for Thursday' }).waitFor();
+    await reading(page).getByText('in sequence, 150 ms apart.').waitFor();
+    await page.getByRole('link', { name: 'Strips', exact: true }).click();
+    await page.getByLabel('Search strips').fill('thursday');
+    await page.getByRole('link', { name: 'Sequence for Thursday' }).waitFor();
+    await page.getByText('1 strip', { exact: true }).waitFor();
+  });
+
+  it('reads lost capture when the output drops below the threshold, and takes it back with undo', async () => {
+    const page = await visit();
+    await signInAs(page, 'technician');
+    await page.goto('/strips/ventricular-pacing-apex');
+    await reading(page).getByText('Every stimulus in the right ventricle captures.').waitFor();
+    await openGroup(page, 'Leads and capture');
+    await type(page, 'Output', '0.5');
+    await reading(page).getByText('the output is below the threshold').waitFor();
+    await page.getByRole('button', { name: 'Undo' }).click();
+    await reading(page).getByText('Every stimulus in the right ventricle captures.').waitFor();
+    await page.getByRole('button', { name: 'Redo' }).click();
+    await reading(page).getByText('the output is below the threshold').waitFor();
+  });
+
+  it('refuses bad values in words at the field, and keeps the strip', async () => {
+    const page = await visit();
+    await signInAs(page, 'educator');
+    await page.goto('/strips/new');
+    await openGroup(page, 'Pacing');
+    await type(page, 'Paced AV delay', '400');
+    await page.getByText('400 ms is above 350 ms, the most allowed. The strip still shows 180 ms.').waitFor();
+    await type(page, 'Lower rate', 'fast');
+    await page.getByText('“fast” is not a number or a quantity in /min.').waitFor();
+    await type(page, 'Lower rate', '800 ms');
+    expect(await page.getByRole('textbox', { name: 'Lower rate', exact: true }).inputValue()).toBe('75');
+  });
+
+  it('shows two bandwidths under each other, all twelve leads, and reads calipers', async () => {
+    const page = await visit();
+    await signInAs(page, 'educator');
+    await page.goto('/strips/av-sequential-pacing');
+    await reading(page).waitFor();
+    const strip = page.getByRole('img', { name: /Arrow keys walk the beats/ });
+    const before = (await strip.boundingBox())?.height ?? 0;
+    await page.getByLabel('Second bandwidth').click();
+    await page.getByRole('option', { name: 'Beside monitor' }).click();
+    await expect.poll(async () => (await strip.boundingBox())?.height ?? 0).toBeGreaterThan(1.5 * before);
+    await page.getByRole('radio', { name: 'All twelve' }).click();
+    await expect.poll(async () => (await strip.boundingBox())?.height ?? 0).toBeGreaterThan(4 * before);
+    await page.getByRole('button', { name: 'Calipers' }).click();
+    await strip.click({ position: { x: 300, y: 100 } });
+    await strip.click({ position: { x: 425, y: 100 } });
+    await page.getByText('1000 ms, 25.0 mm, 60 /min').waitFor();
+    await strip.press('ArrowRight');
+    await page.getByText('1008 ms, 25.2 mm, 60 /min').waitFor();
+  });
+
+  it('walks the beats by keyboard and ties sentences to them', async () => {
+    const page = await visit();
+    await signInAs(page, 'educator');
+    await page.goto('/strips/capture-lost-junctional-escape');
+    const strip = page.getByRole('img', { name: /Arrow keys walk the beats/ });
+    await strip.focus();
+    await strip.press('ArrowRight');
+    await strip.press('ArrowRight');
+    const chip = page
+      .getByRole('list', { name: 'Beats' })
+      .getByRole('button', { name: 'Beat 2', exact: true });
+    expect(await chip.getAttribute('aria-pressed')).toBe('true');
+  });
+
+  it('keeps a draft through a reload, and carries one in the address', async () => {
+    const page = await visit();
+    await signInAs(page, 'educator');
+    await page.goto('/strips/new');
+    await type(page, 'Atrial rate', '88');
+    await page.getByText('Not saved yet').waitFor();
+    page.once('dialog', (dialog) => void dialog.accept());
+    await page.reload();
+    await page.getByText('Your unsaved changes are back.').waitFor();
+    expect(await page.getByRole('textbox', { name: 'Atrial rate', exact: true }).inputValue()).toBe('88');
+    await page.getByRole('button', { name: 'More actions' }).click();
+    await page.getByRole('menuitem', { name: 'Copy address of this draft' }).click();
+    await expect.poll(() => page.url()).toContain('#draft=');
+    const address = page.url();
+    const other = await visit();
+    await signInAs(other, 'technician');
+    await other.goto(address);
+    await other.getByText('This draft came with the address.').waitFor();
+    expect(await other.getByRole('textbox', { name: 'Atrial rate', exact: true }).inputValue()).toBe('88');
+    await other.goto('/help');
+    await other.goto('/strips/new#draft=broken');
+    await other.getByText('The draft in the address cannot be read.').waitFor();
+  });
+
+  it('asks before unsaved work is left', async () => {
+    const page = await visit();
+    await signInAs(page, 'educator');
+    await page.goto('/strips/new');
+    await type(page, 'Atrial rate', '91');
+    await page.getByRole('link', { name: 'Help' }).click();
+    await page.getByRole('dialog', { name: 'Leave without saving?' }).waitFor();
+    await page.getByRole('button', { name: 'Keep editing' }).click();
+    expect(page.url()).toContain('/strips/new');
+    await page.getByRole('link', { name: 'Help' }).click();
+    await page.getByRole('button', { name: 'Leave' }).click();
+    await page.getByRole('heading', { name: 'How Paceloom works' }).waitFor();
+  });
+
+  it('loses nothing when two people save the same strip', async () => {
+    const first = await visit();
+    await signInAs(first, 'educator');
+    await first.goto('/strips/new');
+    await type(first, 'Atrial rate', '77');
+    await saveAs(first, 'Shared between tabs');
+    const address = first.url();
+    const second = await first.context().newPage();
+    await second.goto(address);
+    await type(second, 'Atrial rate', '99');
+    await second.getByRole('button', { name: 'Save version' }).click();
+    await second.getByText('Version 2, saved').waitFor();
+    await type(first, 'Atrial rate', '55');
+    await first.getByRole('button', { name: 'Save version' }).click();
+    const dialog = first.getByRole('dialog', { name: /someone saved in between/ });
+    await dialog.waitFor();
+    await dialog.getByRole('button', { name: 'Save mine as a new strip' }).click();
+    const details = first.getByRole('dialog', { name: 'Save as a new strip' });
+    await details.getByLabel('Title').fill('My own fifty-five');
+    await details.getByRole('button', { name: 'Save strip' }).click();
+    await first.getByRole('heading', { name: 'My own fifty-five' }).waitFor();
+    expect(await first.getByRole('textbox', { name: 'Atrial rate', exact: true }).inputValue()).toBe('55');
+    await second.reload();
+    expect(await second.getByRole('textbox', { name: 'Atrial rate', exact: true }).inputValue()).toBe('99');
+  });
+
+  it('deletes with undo, and duplicates a gallery strip', async () => {
+    const page = await visit();
+    await signInAs(page, 'educator');
+    await page.goto('/strips/atrial-pacing');
+    await page.getByRole('button', { name: 'More actions' }).click();
+    await page.getByRole('menuitem', { name: 'Duplicate the saved strip' }).click();
+    await page.getByRole('heading', { name: /Copy of Atrial pacing/ }).waitFor();
+    await page.goto('/strips?search=copy+of+atrial');
+    await page.getByRole('button', { name: /Actions for Copy of Atrial pacing/ }).click();
+    await page.getByRole('menuitem', { name: 'Delete' }).click();
+    await page.getByRole('dialog').getByRole('button', { name: 'Delete' }).click();
+    await page.getByText('No strip fits').waitFor();
+    await page.getByRole('button', { name: 'Undo' }).click();
+    await page.getByRole('link', { name: /Copy of Atrial pacing/ }).waitFor();
+  });
+
+  it('goes on after a restart of the server', async () => {
+    const page = await visit();
+    await signInAs(page, 'educator');
+    await page.goto('/strips/new');
+    await type(page, 'Atrial rate', '64');
+    await product.restart();
+    await saveAs(page, 'Saved after a restart');
+    await page.getByText('Version 1, saved').waitFor();
+  });
+
+  it('refuses a learner by page and by API', async () => {
+    const page = await visit();
+    await signInAs(page, 'learner');
+    expect(new URL(page.url()).pathname).toBe('/help');
+    await page.goto('/strips');
+    await page.getByRole('heading', { name: 'This page is not for your role' }).waitFor();
+    expect((await page.request.get('/api/strips')).status()).toBe(403);
+    const render = await page.request.post('/api/strips/render', { data: { parameters: {} } });
+    expect(render.status()).toBe(403);
+  });
+
+  it('sends a stranger to sign in and back to where they were going', async () => {
+    const page = await visit();
+    await page.goto('/strips/unipolar-spike');
+    await page.waitForURL(/\/sign-in\?from=/);
+    await page.getByRole('button', { name: 'Educator', exact: true }).click();
+    await page.getByRole('heading', { name: 'Unipolar against bipolar' }).waitFor();
+    await page.getByRole('button', { name: /Educator/ }).click();
+    await page.getByRole('menuitem', { name: 'Sign out' }).click();
+    await page.waitForURL(/\/sign-in/);
+    await page.goto('/strips');
+    await page.waitForURL(/\/sign-in\?from=/);
+  });
+
+  it('says what is wrong with a password, and locks after too many', async () => {
+    const page = await visit();
+    await page.goto('/sign-in');
+    await page.getByRole('button', { name: 'Sign in', exact: true }).click();
+    await page.getByText('Give your password.').waitFor();
+    await page.getByLabel('E-mail').fill('nobody@tarnvalley.example');
+    await page.getByLabel('Password').fill('wrong');
+    for (let attempt = 0; attempt < 11; attempt++) {
+      const answer = page.waitForResponse('**/api/session');
+      await page.getByRole('button', { name: 'Sign in', exact: true }).click();
+      await answer;
+    }
+    await page.getByText(/Too many attempts\. Wait \d+ minutes?, then try again\./).waitFor();
+  });
+});
