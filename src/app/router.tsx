@@ -20,6 +20,11 @@ function only(queryClient: QueryClient, roles: readonly Role[]) {
   };
 }
 
+/** Every address that no page has. */
+function notFound(): never {
+  throw new Response('notFound', { status: 404 });
+}
+
 function routes(queryClient: QueryClient): RouteObject[] {
   const forAuthors = only(queryClient, authors);
   return [
@@ -43,7 +48,7 @@ function routes(queryClient: QueryClient): RouteObject[] {
             { path: 'strips/new', loader: forAuthors, lazy: () => import('../pages/strip-editor-page') },
             { path: 'strips/:stripId', loader: forAuthors, lazy: () => import('../pages/strip-editor-page') },
             { path: 'help', lazy: () => import('../pages/help-page') },
-            { path: '*', loader: () => Promise.reject(new Response('notFound', { status: 404 })) },
+            { path: '*', Component: LoadingPage, loader: notFound },
           ],
         },
       ],

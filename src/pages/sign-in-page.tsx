@@ -34,14 +34,17 @@ export function Component() {
           and licensed practice.
         </p>
       </main>
-      <figure className="relative hidden overflow-hidden border-l border-rule-strong tablet:block">
+      <aside
+        aria-label="A paced beat"
+        className="relative hidden overflow-hidden border-l border-rule-strong tablet:block"
+      >
         <div className="absolute inset-0">
           <AnnotatedBeat />
         </div>
-        <figcaption className="absolute right-4 bottom-3 bg-paper px-2 text-caption text-ink-2">
+        <p className="absolute right-4 bottom-3 bg-paper px-2 text-caption text-ink-2">
           Synthetic teaching strip, not a patient recording
-        </figcaption>
-      </figure>
+        </p>
+      </aside>
     </div>
   );
 }

@@ -24,7 +24,11 @@ const openGroup = (page: Page, name: string): Promise<void> =>
   page.getByRole('region', { name: 'Parameters' }).getByRole('button', { name }).click();
 
 const states: State[] = [
-  { name: 'library', path: '/strips', ready: (page) => seen(page, 'Recognise the chamber') },
+  {
+    name: 'library',
+    path: '/strips',
+    ready: (page) => page.getByRole('heading', { name: /Recognise the chamber/ }).waitFor(),
+  },
   {
     name: 'library as a table',
     path: '/strips?view=table&sort=title',

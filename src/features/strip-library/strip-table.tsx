@@ -38,7 +38,7 @@ function SortHead({
 /** The library as a table; heads sort. */
 export function StripTable({ strips, actions, ...sorting }: StripTableProps) {
   return (
-    <div className="overflow-x-auto">
+    <div className="relative overflow-x-auto">
       <table className="w-full min-w-160 border-collapse text-left text-body">
         <thead className="border-b border-edge text-caption text-ink-2">
           <tr>
