@@ -7,6 +7,14 @@ export default defineConfig({
       { test: { name: 'unit', include: ['tests/unit/**/*.test.ts'], environment: 'node' } },
       {
         test: {
+          name: 'client',
+          include: ['tests/client/**/*.test.tsx'],
+          environment: 'jsdom',
+          setupFiles: ['tests/support/client/setup.ts'],
+        },
+      },
+      {
+        test: {
           name: 'server',
           include: ['tests/server/**/*.test.ts'],
           environment: 'node',

@@ -1,21 +1,35 @@
 // `npm run bench`: figures measured in one run, as ratios where a reference exists. `-- --json` prints them as JSON.
+import { spawnSync } from 'node:child_process';
+import { measurePreview } from './bench/preview';
 import { measureHour, measureStrip } from './bench/strip';
 
-const figures = { strip12Lead10s: measureStrip(), hourStreamed: measureHour() };
+const strip12Lead10s = measureStrip();
+const hourStreamed = measureHour();
+spawnSync('node', ['scripts/start.mjs', '--build-only'], { stdio: 'ignore' });
+const preview = await measurePreview();
+const figures = { strip12Lead10s, hourStreamed, ...(preview ? { preview } : {}) };
+
+function ratioWords(): string {
+  const { scipyMedianMs, ratio } = strip12Lead10s;
+  if (scipyMedianMs === null || ratio === null) return 'SciPy is not installed here, so there is no ratio';
+  return `SciPy sosfilt on the same eight leads ${scipyMedianMs.toFixed(2)} ms, ratio ${ratio.toFixed(2)}`;
+}
+
+function previewWords(): string {
+  if (!preview) return 'preview: no Chromium here';
+  const { leads3, leads12 } = preview;
+  return `preview from key to frame: 3 leads ${leads3.p50Ms.toFixed(1)} ms (p95 ${leads3.p95Ms.toFixed(1)}), 12 leads ${leads12.p50Ms.toFixed(1)} ms (p95 ${leads12.p95Ms.toFixed(1)})`;
+}
 
 if (process.argv.includes('--json')) {
   process.stdout.write(`${JSON.stringify(figures)}\n`);
 } else {
-  const { strip12Lead10s: strip, hourStreamed: hour } = figures;
-  const scipy =
-    strip.scipyMedianMs === null || strip.ratio === null
-      ? 'SciPy is not installed here, so there is no ratio'
-      : `SciPy sosfilt on the same eight leads ${strip.scipyMedianMs.toFixed(2)} ms, ratio ${strip.ratio.toFixed(2)}`;
   process.stdout.write(
     [
-      `10 s, twelve leads, diagnostic: ${strip.medianMs.toFixed(2)} ms without pre-roll; ${scipy}`,
-      `pre-roll of 30 s: ${strip.preRollMs.toFixed(2)} ms more per strip`,
-      `one hour streamed: ${hour.timesRealTime.toFixed(0)} × real time, at most ${hour.peakMb.toFixed(0)} MB`,
+      `10 s, twelve leads, diagnostic: ${strip12Lead10s.medianMs.toFixed(2)} ms without pre-roll; ${ratioWords()}`,
+      `pre-roll of 30 s: ${strip12Lead10s.preRollMs.toFixed(2)} ms more per strip`,
+      `one hour streamed: ${hourStreamed.timesRealTime.toFixed(0)} × real time, at most ${hourStreamed.peakMb.toFixed(0)} MB`,
+      previewWords(),
       '',
     ].join('\n'),
   );

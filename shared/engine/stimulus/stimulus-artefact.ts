@@ -152,7 +152,10 @@ export function addStimulusArtefact(
 }
 
 /** Height of a stimulus in one lead at the electrodes, mV: its surface size seen along the lead. */
-export function stimulusLeadMv(stimulus: Pick<StimulusArtefact, 'chamber' | 'amplitudeMv'>, lead: LeadName): number {
+export function stimulusLeadMv(
+  stimulus: Pick<StimulusArtefact, 'chamber' | 'amplitudeMv'>,
+  lead: LeadName,
+): number {
   const [x, y, z] = directions[stimulus.chamber].map((component) => component * stimulus.amplitudeMv);
   return projectVector(lead, x, y, z);
 }
