@@ -10,7 +10,10 @@ let educator: ApiClient;
 const clientDirectory = mkdtempSync(join(tmpdir(), 'paceloom-client-'));
 beforeAll(async () => {
   mkdirSync(join(clientDirectory, 'assets'));
-  writeFileSync(join(clientDirectory, 'index.html'), '<!doctype html><title>The page</title>');
+  writeFileSync(
+    join(clientDirectory, 'index.html'),
+    '<!doctype html><title>The page</title>nonce __STYLE_NONCE__',
+  );
   writeFileSync(join(clientDirectory, 'assets', 'index-a1b2c3.js'), `/* ${'long '.repeat(1000)} */`);
   writeFileSync(join(clientDirectory, 'favicon.svg'), '<svg xmlns="http://www.w3.org/2000/svg"/>');
   server = await startTestServer({ clientDirectory });
@@ -67,18 +70,16 @@ describe('headers', () => {
       const directives = new Map(
         policy.split(';').map((one) => [one.split(' ')[0], one.split(' ').slice(1)]),
       );
-      for (const kind of [
-        'default-src',
-        'script-src',
-        'style-src',
-        'connect-src',
-        'worker-src',
-        'font-src',
-      ]) {
+      for (const kind of ['default-src', 'script-src', 'connect-src', 'worker-src', 'font-src']) {
         expect(directives.get(kind)).toEqual(["'self'"]);
       }
       expect(policy).not.toMatch(/https?:|\*|unsafe-eval/);
       expect(policy.match(/unsafe-inline/g)).toHaveLength(1);
+      // Style elements only with this answer's own nonce.
+      expect(directives.get('style-src')).toEqual([
+        "'self'",
+        expect.stringMatching(/^'nonce-[A-Za-z0-9+/]{22}=='$/),
+      ]);
       expect(directives.get('style-src-attr')).toEqual(["'unsafe-inline'"]);
       expect(directives.get('frame-ancestors')).toEqual(["'none'"]);
       expect(headers.get('x-content-type-options')).toBe('nosniff');
@@ -99,9 +100,23 @@ describe('pages', () => {
       const response = await server.client().raw('GET', path);
       expect(response.status).toBe(200);
       expect(await response.text()).toContain('The page');
-      expect(response.headers.get('cache-control')).toBe('no-cache');
+      // It carries a nonce of its own, so nothing may keep it.
+      expect(response.headers.get('cache-control')).toBe('no-store');
     },
   );
+
+  it('hands the page the nonce of its own answer, a new one each time', async () => {
+    const nonces = await Promise.all(
+      [1, 2].map(async () => {
+        const response = await server.client().raw('GET', '/sign-in');
+        const policy = response.headers.get('content-security-policy') ?? '';
+        const nonce = /'nonce-([^']+)'/.exec(policy)?.[1] ?? 'none';
+        expect(await response.text()).toContain(`nonce ${nonce}`);
+        return nonce;
+      }),
+    );
+    expect(nonces[0]).not.toBe(nonces[1]);
+  });
 
   it('keeps hashed files for ever, compressed on the way', async () => {
     const response = await server.client().raw('GET', '/assets/index-a1b2c3.js');
