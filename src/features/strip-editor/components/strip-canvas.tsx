@@ -1,4 +1,4 @@
-import { useEffect, useRef, type KeyboardEvent, type PointerEvent } from 'react';
+import { useLayoutEffect, useRef, type KeyboardEvent, type PointerEvent } from 'react';
 import type { GridTint } from '../../../../shared/paper/tokens';
 import type { BeatColumn } from '../canvas/beat-columns';
 import { paintCalipers } from '../canvas/calipers';
@@ -50,7 +50,8 @@ export function StripCanvas(props: StripCanvasProps) {
   const marks = calipers?.marks ?? null;
   const { heightPx } = layout;
 
-  useEffect(() => {
+  // In the commit itself, not after it: a passive effect would cost the preview a frame.
+  useLayoutEffect(() => {
     if (!base.current || widthPx === 0) return;
     const context = prepare(base.current, widthPx, heightPx);
     if (!context) return;
@@ -60,7 +61,7 @@ export function StripCanvas(props: StripCanvasProps) {
     performance.mark('strip-painted');
   }, [layout, scale, scrollPx, widthPx, heightPx, tint, trace]);
 
-  useEffect(() => {
+  useLayoutEffect(() => {
     if (!overlay.current || widthPx === 0) return;
     const context = prepare(overlay.current, widthPx, heightPx);
     if (!context) return;
