@@ -7,10 +7,10 @@
  */
 
 /** A chamber that a stimulus is delivered to. `chest` is transcutaneous pacing. */
-export type StimulusChamber = 'atrium' | 'rightVentricle' | 'leftVentricle';
+export type StimulusChamber = 'atrium' | 'rightVentricle' | 'leftVentricle' | 'chest';
 
 /** Why a stimulus did not start a depolarization. */
-export type CaptureFailure = 'refractoryTissue' | 'belowThreshold';
+export type CaptureFailure = 'refractoryTissue' | 'belowThreshold' | 'fault';
 
 export interface StimulusEvent {
   type: 'stimulus';
@@ -27,40 +27,44 @@ export interface StimulusEvent {
   pseudofusion?: true;
 }
 
-export type AtrialOrigin = 'sinus' | 'paced';
-export type VentricularOrigin = 'conducted' | 'paced' | 'junctionalEscape' | 'ventricularEscape';
+export type AtrialOrigin =
+  'sinus' | 'tachycardia' | 'flutter' | 'fibrillation' | 'paced' | 'premature' | 'retrograde';
+export type VentricularOrigin =
+  'conducted' | 'paced' | 'premature' | 'junctionalEscape' | 'ventricularEscape';
 
 /** Where activation starts: a stimulated chamber, the conduction system, or a focus. */
-export type SourceSite =
-  | 'sinus'
-  | 'atrium'
+export type AtrialSource = Exclude<AtrialOrigin, 'paced'> | 'atrium';
+export type VentricularSourceSite =
   | 'conducted'
   | 'rightVentricle'
   | 'leftVentricle'
+  | 'chest'
+  | 'premature'
   | 'junctionalEscape'
   | 'ventricularEscape';
+export type SourceSite = AtrialSource | VentricularSourceSite;
 
-export interface ActivationSource {
-  site: SourceSite;
+export interface ActivationSource<Site extends SourceSite = SourceSite> {
+  site: Site;
   timeS: number;
 }
 
-interface DepolarizationBase {
+interface DepolarizationBase<Site extends SourceSite> {
   type: 'depolarization';
   /** Surface onset: the earliest source's time. */
   timeS: number;
   /** In time order; at least one. */
-  sources: ActivationSource[];
+  sources: ActivationSource<Site>[];
   /** The chamber was activated from an intrinsic and a paced source at once. */
   fusion: boolean;
 }
 
-export interface AtrialDepolarization extends DepolarizationBase {
+export interface AtrialDepolarization extends DepolarizationBase<AtrialSource> {
   chamber: 'atrium';
   origin: AtrialOrigin;
 }
 
-export interface VentricularDepolarization extends DepolarizationBase {
+export interface VentricularDepolarization extends DepolarizationBase<VentricularSourceSite> {
   chamber: 'ventricle';
   origin: VentricularOrigin;
 }
@@ -79,13 +83,15 @@ export type MarkerCode =
   | 'modeSwitchOn'
   | 'modeSwitchOff';
 
+export type SenseCause = 'depolarization' | 'crosstalk' | 'oversensing';
+
 export interface MarkerEvent {
   type: 'marker';
   /** The time of the sense (not the surface onset) or of the pace. */
   timeS: number;
   code: MarkerCode;
   /** What was sensed; only on senses. */
-  cause?: 'depolarization' | 'crosstalk';
+  cause?: SenseCause;
   /** A ventricular sense inside the crosstalk window. */
   window?: 'crosstalk';
   /** The mode now in force; only on mode switches. */

@@ -67,6 +67,7 @@ export function allowedWords(schema: z.ZodType): string {
   const meta = fieldMeta(schema);
   if (meta?.kind === 'number') return numberRange(meta);
   if (meta?.kind === 'text') return `text of at most ${meta.maxLength} characters`;
+  if (meta?.kind === 'flag') return 'true or false';
   const inner = unwrap(schema);
   if (inner instanceof z.ZodEnum) return `one of ${inner.options.join(', ')}`;
   if (inner instanceof z.ZodLiteral) {
@@ -76,7 +77,6 @@ export function allowedWords(schema: z.ZodType): string {
   if (inner instanceof z.ZodUnion)
     return inner.options.map((one) => allowedWords(one as z.ZodType)).join('; or ');
   if (inner instanceof z.ZodObject) return `an object with the keys ${Object.keys(inner.shape).join(', ')}`;
-  if (inner instanceof z.ZodArray)
-    return `a list of 1 to 12, each ${allowedWords(inner.element as z.ZodType)}`;
+  if (inner instanceof z.ZodArray) return `a list, each ${allowedWords(inner.element as z.ZodType)}`;
   return 'a value of the documented kind';
 }

@@ -1,5 +1,22 @@
 import { z } from 'zod';
-import { numberField, section } from './fields';
+import { choiceField, numberField, section } from './fields';
+
+/** Pairs of electrodes that can be exchanged (LD-40 to LD-46). */
+const reversals = {
+  none: 'None',
+  'RA-LA': 'RA and LA',
+  'RA-LL': 'RA and LL',
+  'LA-LL': 'LA and LL',
+  'RA-RL': 'RA and RL',
+  'LA-RL': 'LA and RL',
+  'V1-V2': 'V1 and V2',
+  'V1-V3': 'V1 and V3',
+  'V2-V3': 'V2 and V3',
+  'V3-V4': 'V3 and V4',
+  'V4-V5': 'V4 and V5',
+  'V5-V6': 'V5 and V6',
+} as const;
+export type ElectrodeReversal = keyof typeof reversals;
 
 /** What enters at the electrodes beside the heart. */
 export const disturbanceSchema = section({
@@ -45,5 +62,9 @@ export const disturbanceSchema = section({
     max: 30,
     usual: [0, 4],
     help: 'Sudden swings of the baseline at one electrode, at random times.',
+  }),
+  electrodeReversal: choiceField(reversals, 'none', {
+    label: 'Electrodes exchanged',
+    help: 'Two electrodes on each other’s place.',
   }),
 });

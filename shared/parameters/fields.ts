@@ -33,7 +33,14 @@ export interface TextFieldMeta {
   help: string;
 }
 
-export type FieldMeta = NumberFieldMeta | ChoiceFieldMeta | TextFieldMeta;
+/** On or off. */
+export interface FlagFieldMeta {
+  kind: 'flag';
+  label: string;
+  help: string;
+}
+
+export type FieldMeta = NumberFieldMeta | ChoiceFieldMeta | TextFieldMeta | FlagFieldMeta;
 
 type NumberSpec = Omit<NumberFieldMeta, 'kind'>;
 
@@ -56,6 +63,21 @@ export function nullableNumberField(spec: NumberSpec) {
     .nullable()
     .meta({ field: { kind: 'number', nullable: true, ...spec } satisfies NumberFieldMeta })
     .default(null);
+}
+
+/** A number whose default depends on something else and is filled in later. */
+export function dependentNumberField(spec: NumberSpec) {
+  return boundedNumber(spec)
+    .meta({ field: { kind: 'number', ...spec } satisfies NumberFieldMeta })
+    .optional();
+}
+
+/** True or false. */
+export function flagField(defaultValue: boolean, spec: Omit<FlagFieldMeta, 'kind'>) {
+  return z
+    .boolean()
+    .meta({ field: { kind: 'flag', ...spec } satisfies FlagFieldMeta })
+    .default(defaultValue);
 }
 
 /** One of a few named values. */

@@ -1,30 +1,44 @@
 import { z } from 'zod';
-import { choiceField, numberField } from './fields';
+import { faultsSchema } from './faults';
+import { choiceField, flagField, nullableNumberField, numberField } from './fields';
 import { atrialLeadSchema, leftVentricularLeadSchema, rightVentricularLeadSchema } from './leads';
+import { pacesBothVentricles, pacingModeCodes, temporaryModes, type PacingMode } from './pacing-mode';
+import { transcutaneousSchema, transvenousSchema } from './temporary-pacing';
 
-/** NBG codes implemented; the fifth letter V is multisite ventricular pacing (TM-01 to TM-05, Bernstein et al. 2002). */
-export const pacingModes = {
-  AOO: 'AOO',
-  AAI: 'AAI',
-  VOO: 'VOO',
-  VVI: 'VVI',
-  DOO: 'DOO',
-  DDD: 'DDD',
-  VVIOV: 'VVIOV',
-  DOOOV: 'DOOOV',
-  DDDOV: 'DDDOV',
+const sources = {
+  none: 'No pacemaker',
+  implanted: 'Implanted',
+  transvenous: 'Transvenous',
+  transcutaneous: 'Transcutaneous',
 } as const;
-export type PacingMode = keyof typeof pacingModes;
+export type PacingSource = keyof typeof sources;
+
+/** A source that paces through a wire or pads of its own and knows VVI and VOO only. */
+export function isTemporary(source: PacingSource): boolean {
+  return source === 'transvenous' || source === 'transcutaneous';
+}
+
+/** The mode where none is given. */
+export function usualMode(source: PacingSource): PacingMode {
+  return isTemporary(source) ? 'VVI' : 'DDD';
+}
 
 const pacingObject = z.strictObject({
-  source: choiceField({ none: 'No pacemaker', implanted: 'Implanted' }, 'none', {
+  source: choiceField(sources, 'none', {
     label: 'Pacing',
-    help: 'Whether a pacemaker acts on this patient.',
+    help: 'Whether and how this patient is paced.',
   }),
-  mode: choiceField(pacingModes, 'DDD', {
-    label: 'Mode',
-    help: 'NBG code: chambers paced, sensed, response; fifth letter V for two ventricles.',
-  }),
+  mode: z
+    .enum(pacingModeCodes as [PacingMode, ...PacingMode[]])
+    .meta({
+      field: {
+        kind: 'choice',
+        label: 'Mode',
+        options: Object.fromEntries(pacingModeCodes.map((code) => [code, code])),
+        help: 'NBG code: chambers paced, sensed, response; R for rate response, fifth letter V for two ventricles.',
+      },
+    })
+    .optional(),
   ventricularChambers: z
     .enum(['right', 'left', 'both'])
     .optional()
@@ -52,6 +66,22 @@ const pacingObject = z.strictObject({
     usual: [110, 140],
     help: 'The fastest that the ventricles are paced after sensed P waves.',
   }),
+  sensorRateBpm: nullableNumberField({
+    label: 'Sensor rate',
+    unit: '/min',
+    min: 30,
+    max: 200,
+    usual: [70, 120],
+    help: 'Rate that the activity sensor asks for; acts in modes with R. Empty: at rest.',
+  }),
+  hysteresisRateBpm: nullableNumberField({
+    label: 'Hysteresis rate',
+    unit: '/min',
+    min: 20,
+    max: 200,
+    usual: [40, 55],
+    help: 'After a sensed beat the pacemaker waits as if at this slower rate. Empty: off.',
+  }),
   pacedAvDelayMs: numberField(180, {
     label: 'Paced AV delay',
     unit: 'ms',
@@ -76,6 +106,10 @@ const pacingObject = z.strictObject({
     usual: [250, 310],
     help: 'Post-ventricular atrial refractory period: P waves inside it are not tracked.',
   }),
+  pvarpAfterEctopic: choiceField({ unchanged: 'Unchanged', lengthened: 'Lengthened' }, 'unchanged', {
+    label: 'PVARP after an ectopic',
+    help: 'Lengthened to 400 ms after a ventricular beat without a P wave, so that no loop starts.',
+  }),
   ventricularRefractoryMs: numberField(250, {
     label: 'Ventricular refractory',
     unit: 'ms',
@@ -92,6 +126,34 @@ const pacingObject = z.strictObject({
     usual: [20, 60],
     help: 'After an atrial stimulus the ventricular channel is deaf for this long.',
   }),
+  safetyPacing: flagField(true, {
+    label: 'Safety pacing',
+    help: 'A sense in the crosstalk window brings an early ventricular stimulus instead of a pause.',
+  }),
+  modeSwitching: flagField(true, {
+    label: 'Mode switching',
+    help: 'Stops tracking while the atria are too fast.',
+  }),
+  modeSwitchRateBpm: numberField(170, {
+    label: 'Mode switch rate',
+    unit: '/min',
+    min: 120,
+    max: 200,
+    usual: [150, 180],
+    help: 'Atrial rate above which tracking stops.',
+  }),
+  magnetApplied: flagField(false, {
+    label: 'Magnet applied',
+    help: 'An implanted device paces asynchronously while a magnet lies on it.',
+  }),
+  magnetRateBpm: numberField(90, {
+    label: 'Magnet rate',
+    unit: '/min',
+    min: 50,
+    max: 120,
+    usual: [85, 100],
+    help: 'Rate under a magnet; it differs by maker and battery.',
+  }),
   interventricularDelayMs: numberField(0, {
     label: 'Interventricular delay',
     unit: 'ms',
@@ -107,45 +169,55 @@ const pacingObject = z.strictObject({
   atrialLead: atrialLeadSchema,
   rightVentricularLead: rightVentricularLeadSchema,
   leftVentricularLead: leftVentricularLeadSchema,
+  transvenous: transvenousSchema,
+  transcutaneous: transcutaneousSchema,
+  faults: faultsSchema,
 });
 
-/** The fifth letter of an NBG code is V: two ventricular sites are paced. */
-export function pacesBothVentricles(mode: PacingMode): boolean {
-  return mode.charAt(4) === 'V';
+/** With what follows from the rest filled in. */
+function complete(pacing: z.output<typeof pacingObject>) {
+  const mode = pacing.mode ?? usualMode(pacing.source);
+  const chambers = pacesBothVentricles(mode) ? ('both' as const) : ('right' as const);
+  return { ...pacing, mode, ventricularChambers: pacing.ventricularChambers ?? chambers };
+}
+type CompletePacing = ReturnType<typeof complete>;
+
+interface Mismatch {
+  path: keyof CompletePacing;
+  value: unknown;
+  allowed: string;
 }
 
-/** The pacemaker. `ventricularChambers` follows from the mode when not given, and must agree with it when given. */
+/** Settings that contradict each other. */
+function mismatches(pacing: CompletePacing): Mismatch[] {
+  const { source, mode, ventricularChambers, lowerRateBpm, upperTrackingRateBpm, hysteresisRateBpm } = pacing;
+  const found: Mismatch[] = [];
+  if (isTemporary(source) && !temporaryModes.includes(mode)) {
+    found.push({ path: 'mode', value: mode, allowed: `VVI or VOO, because the source is ${source}` });
+  }
+  if ((ventricularChambers === 'both') !== pacesBothVentricles(mode)) {
+    const allowed = pacesBothVentricles(mode)
+      ? `both, because the mode ${mode} has the fifth letter V`
+      : `right or left with the mode ${mode}; both needs the fifth letter V, such as DDDOV`;
+    found.push({ path: 'ventricularChambers', value: ventricularChambers, allowed });
+  }
+  if (upperTrackingRateBpm < lowerRateBpm) {
+    const allowed = `at least the lower rate, ${lowerRateBpm} /min, up to 200 /min`;
+    found.push({ path: 'upperTrackingRateBpm', value: upperTrackingRateBpm, allowed });
+  }
+  if (hysteresisRateBpm !== null && hysteresisRateBpm >= lowerRateBpm) {
+    const allowed = `null or below the lower rate, ${lowerRateBpm} /min, from 20 /min`;
+    found.push({ path: 'hysteresisRateBpm', value: hysteresisRateBpm, allowed });
+  }
+  return found;
+}
+
+/** The pacemaker. What follows from source and mode is filled in; what contradicts them is refused. */
 export const pacingSchema = pacingObject
-  .transform((pacing) => ({
-    ...pacing,
-    ventricularChambers:
-      pacing.ventricularChambers ??
-      (pacesBothVentricles(pacing.mode) ? ('both' as const) : ('right' as const)),
-  }))
+  .transform(complete)
   .superRefine((pacing, context) => {
-    if ((pacing.ventricularChambers === 'both') !== pacesBothVentricles(pacing.mode)) {
-      context.addIssue({
-        code: 'custom',
-        path: ['ventricularChambers'],
-        params: {
-          value: pacing.ventricularChambers,
-          allowed: pacesBothVentricles(pacing.mode)
-            ? `both, because the mode ${pacing.mode} has the fifth letter V`
-            : `right or left with the mode ${pacing.mode}; both needs the fifth letter V (VVIOV, DOOOV, DDDOV)`,
-        },
-        message: 'does not fit the mode',
-      });
-    }
-    if (pacing.upperTrackingRateBpm < pacing.lowerRateBpm) {
-      context.addIssue({
-        code: 'custom',
-        path: ['upperTrackingRateBpm'],
-        params: {
-          value: pacing.upperTrackingRateBpm,
-          allowed: `at least the lower rate, ${pacing.lowerRateBpm} /min, up to 200 /min`,
-        },
-        message: 'is below the lower rate',
-      });
+    for (const { path, value, allowed } of mismatches(pacing)) {
+      context.addIssue({ code: 'custom', path: [path], params: { value, allowed }, message: 'does not fit' });
     }
   })
   .prefault({});

@@ -78,7 +78,7 @@ function partnerDelays(assertion: TimingAssertion, of: StripEvent[], to: StripEv
   return of.map((event) => {
     const partner =
       direction === 'after'
-        ? to.find((other) => other.timeS >= event.timeS)
+        ? to.find((other) => other !== event && other.timeS >= event.timeS)
         : to.findLast((other) => other.timeS < event.timeS);
     if (!partner) return null;
     const delay = 1000 * Math.abs(partner.timeS - event.timeS);

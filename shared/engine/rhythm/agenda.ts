@@ -1,23 +1,35 @@
+import type { SenseCause } from '../events';
+
 /**
  * Kinds of things that can be due, in the order in which they are handled when due at the same microsecond
  * (timing-cycles rules, section 1): so a sense at the very end of an escape interval inhibits.
  */
 export const agendaKinds = [
+  'armPrematureVentricle',
+  'armPrematureAtrium',
   'nodeExit',
+  'retrograde',
+  'prematureVentricle',
+  'prematureAtrium',
   'atrialRhythm',
   'escape',
   'sense',
+  'oversensing',
   'secondSite',
   'ventricularPace',
   'atrialPace',
 ] as const;
 export type AgendaKind = (typeof agendaKinds)[number];
 
-/** What a sense comes from; kept until the sense is due. */
+/** What a sense comes from; kept until the sense is due. Times in µs. */
 export interface PendingSense {
   timeUs: number;
   chamber: 'atrium' | 'ventricle';
-  cause: 'depolarization' | 'crosstalk';
+  cause: SenseCause;
+  /** The depolarization behind it is a fibrillation wave, which a lead sees at half its signal. */
+  halfSignal?: boolean;
+  /** When the depolarization began, for sensing that counts from the surface. */
+  onsetUs?: number;
 }
 
 /**

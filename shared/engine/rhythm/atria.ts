@@ -1,12 +1,15 @@
 import type { AtrialLead } from '../../parameters/strip-parameters';
 import { msToUs, usToS } from '../../units';
-import type { AtrialDepolarization } from '../events';
+import type { AtrialDepolarization, AtrialOrigin } from '../events';
+import { refractoryMs } from './capture';
 import { atrialDelayMs } from './local-activation';
 
 /** The atria: when they were last activated, and when the wave reaches the lead. Times in µs. */
 export interface Atria {
   localUs(): number;
-  depolarize(origin: 'sinus' | 'paced', timeUs: number): AtrialDepolarization;
+  depolarize(origin: AtrialOrigin, timeUs: number): AtrialDepolarization;
+  /** Whether a wave that reaches the lead at `localUs` finds rested muscle. */
+  isRestedAt(localUs: number): boolean;
   /** A stimulus joins the P wave that is under way. */
   join(timeUs: number): void;
 }
@@ -16,8 +19,9 @@ export function createAtria(site: AtrialLead['site']): Atria {
   let localUs = -Infinity;
   return {
     localUs: () => localUs,
+    isRestedAt: (timeUs) => timeUs >= localUs + msToUs(refractoryMs.atrium),
     depolarize(origin, timeUs) {
-      const source = origin === 'paced' ? 'atrium' : 'sinus';
+      const source = origin === 'paced' ? 'atrium' : origin;
       localUs = timeUs + msToUs(atrialDelayMs(source, site));
       last = {
         type: 'depolarization',

@@ -1,4 +1,3 @@
-import type { PacingLead } from '../../parameters/strip-parameters';
 import { msToUs } from '../../units';
 import type { CaptureFailure } from '../events';
 
@@ -25,11 +24,32 @@ export function thresholdV(captureThresholdV: number, pulseWidthMs: number): num
   return (captureThresholdV * (1 + chronaxieMs / pulseWidthMs)) / (1 + chronaxieMs / thresholdWidthMs);
 }
 
-/** What a stimulus meets. `fresh`: a wave is under way, but has not reached this lead. */
+/** Chronaxie of transcutaneous pacing, ms, and the width at which its threshold is given (chosen; PP-43, PP-44). */
+const chestChronaxieMs = 5;
+const chestThresholdWidthMs = 20;
+
+/** Transcutaneous capture threshold in mA at a pulse width, by the same law. */
+export function chestThresholdMa(captureThresholdMa: number, pulseWidthMs: number): number {
+  return (
+    (captureThresholdMa * (1 + chestChronaxieMs / pulseWidthMs)) /
+    (1 + chestChronaxieMs / chestThresholdWidthMs)
+  );
+}
+
+/** Output and threshold of one stimulus in the same unit. */
+export interface StimulusStrength {
+  output: number;
+  threshold: number;
+  /** A fault keeps it from capturing, whatever its strength. */
+  fault: boolean;
+}
+
+/** What a stimulus meets. `capturedFresh`: a wave is under way, but has not reached this lead. */
 export type CaptureOutcome = 'captured' | 'capturedFresh' | CaptureFailure;
 
 /**
- * Whether a stimulus captures. Thresholds are inclusive.
+ * Whether a stimulus captures. Thresholds are inclusive; of several reasons the first in the order tissue, output,
+ * fault is given.
  *
  * @param stimulusUs time of the stimulus
  * @param localUs when the last depolarization reached, or will reach, this lead
@@ -38,16 +58,14 @@ export function captureOutcome(
   stimulusUs: number,
   localUs: number,
   chamber: 'atrium' | 'ventricle',
-  lead: Pick<PacingLead, 'amplitudeV' | 'pulseWidthMs' | 'captureThresholdV'>,
+  { output, threshold, fault }: StimulusStrength,
 ): CaptureOutcome {
   const fresh = stimulusUs < localUs - startOfOwnWaveUs;
   const restedUs = localUs + msToUs(refractoryMs[chamber]);
   if (!fresh && stimulusUs < restedUs) return 'refractoryTissue';
-  const threshold = thresholdV(lead.captureThresholdV, lead.pulseWidthMs);
-  if (lead.amplitudeV < threshold) return 'belowThreshold';
-  if (fresh) return 'capturedFresh';
-  if (stimulusUs < restedUs + relativeRefractoryUs && lead.amplitudeV < 2 * threshold) {
-    return 'refractoryTissue';
-  }
-  return 'captured';
+  if (output < threshold) return 'belowThreshold';
+  const relative = !fresh && stimulusUs < restedUs + relativeRefractoryUs;
+  if (relative && output < 2 * threshold) return 'refractoryTissue';
+  if (fault) return 'fault';
+  return fresh ? 'capturedFresh' : 'captured';
 }

@@ -4,7 +4,7 @@ import type {
   PatientParameters,
   RightVentricularLead,
 } from '../../parameters/strip-parameters';
-import type { SourceSite } from '../events';
+import type { AtrialSource, VentricularSourceSite } from '../events';
 
 /**
  * When a lead is reached after a source's onset, ms: rounded from the heart model (timing-cycles rules, section 4).
@@ -47,8 +47,11 @@ const conductedMs = {
 const acrossMs = { lateral: 135, posterolateral: 145, anterolateral: 110 } as const;
 /** From a ventricular escape or another ectopic focus, at any lead. */
 const ectopicMs = 60;
-/** From a sinus-like P wave. */
+/** From the chest pads, at the right lead. */
+const chestMs = 10;
+/** From a sinus-like P wave, and from one that comes up from the ventricles. */
 const atrialMs = { appendage: 30, septum: 40, lateral: 15 } as const;
+const retrogradeMs = { appendage: 45, septum: 15, lateral: 60 } as const;
 
 export interface VentricularLeadSites {
   right: RightVentricularLead['site'];
@@ -57,7 +60,7 @@ export interface VentricularLeadSites {
 
 /** Delay from a ventricular source to the right or left lead, ms; 0 at the lead that captured. */
 export function ventricularDelayMs(
-  source: SourceSite,
+  source: VentricularSourceSite,
   lead: 'right' | 'left',
   sites: VentricularLeadSites,
   bundleBranchBlock: PatientParameters['bundleBranchBlock'],
@@ -67,18 +70,19 @@ export function ventricularDelayMs(
     case 'junctionalEscape':
       return conductedMs[bundleBranchBlock][sites[lead]];
     case 'ventricularEscape':
+    case 'premature':
       return ectopicMs;
+    case 'chest':
+      return lead === 'right' ? chestMs : acrossMs[sites.left];
     case 'rightVentricle':
       return lead === 'right' ? 0 : acrossMs[sites.left];
     case 'leftVentricle':
       return lead === 'left' ? 0 : acrossMs[sites.left];
-    case 'sinus':
-    case 'atrium':
-      throw new Error(`${source} is not a ventricular source`);
   }
 }
 
 /** Delay from the onset of a P wave to the atrial lead, ms; 0 when the lead itself captured. */
-export function atrialDelayMs(source: SourceSite, site: AtrialLead['site']): number {
-  return source === 'atrium' ? 0 : atrialMs[site];
+export function atrialDelayMs(source: AtrialSource, site: AtrialLead['site']): number {
+  if (source === 'atrium') return 0;
+  return source === 'retrograde' ? retrogradeMs[site] : atrialMs[site];
 }

@@ -3,6 +3,7 @@ import { msToUs, usPerS } from '../../units';
 import type { StripEvent } from '../events';
 import { createAgenda, type AgendaKind } from './agenda';
 import { createDevice } from './device/create-device';
+import { createFaults } from './faults';
 import { createPatient } from './patient';
 
 /** A strip is cut from a run that began this long before it. */
@@ -25,14 +26,26 @@ export function createRhythm(parameters: Pick<StripParameters, 'seed' | 'patient
   const agenda = createAgenda();
   let held: StripEvent[] = [];
   const emit = (event: StripEvent): void => void held.push(event);
+  const faults = createFaults(parameters.pacing.faults, parameters.seed, startUs);
   const patient = createPatient(parameters, startUs, agenda, emit);
-  const device = createDevice(parameters, startUs, patient, agenda, emit);
+  const device = createDevice(parameters, startUs, faults, patient, agenda, emit);
 
+  const armOversensing = (): void => agenda.set('oversensing', faults.nextFalseSenseUs());
+  armOversensing();
   const handle: Record<AgendaKind, (timeUs: number) => void> = {
+    armPrematureVentricle: (timeUs) => patient.armPrematureVentricle(timeUs),
+    armPrematureAtrium: (timeUs) => patient.armPrematureAtrium(timeUs),
     nodeExit: (timeUs) => patient.nodeExit(timeUs),
+    retrograde: (timeUs) => patient.retrograde(timeUs),
+    prematureVentricle: (timeUs) => patient.prematureVentricle(timeUs),
+    prematureAtrium: (timeUs) => patient.prematureAtrium(timeUs),
     atrialRhythm: (timeUs) => patient.atrialDischarge(timeUs),
     escape: (timeUs) => patient.escape(timeUs),
     sense: () => device.sense(agenda.takeSense()),
+    oversensing: () => {
+      device.sense({ ...faults.takeFalseSense(), cause: 'oversensing' });
+      armOversensing();
+    },
     secondSite: (timeUs) => device.secondSite(timeUs),
     ventricularPace: (timeUs) => device.ventricularPace(timeUs),
     atrialPace: (timeUs) => device.atrialPace(timeUs),

@@ -1,6 +1,11 @@
 import type { PacingParameters, PatientParameters } from '../../parameters/strip-parameters';
 import { msToUs, usToS } from '../../units';
-import type { ActivationSource, SourceSite, VentricularDepolarization, VentricularOrigin } from '../events';
+import type {
+  ActivationSource,
+  VentricularDepolarization,
+  VentricularOrigin,
+  VentricularSourceSite,
+} from '../events';
 import { ventricularDelayMs } from './local-activation';
 import { refractoryMs } from './capture';
 
@@ -18,10 +23,10 @@ export interface Ventricles {
   /** Starts a new depolarization from one or two sources. */
   depolarize(
     origin: VentricularOrigin,
-    sources: readonly { site: SourceSite; timeUs: number }[],
+    sources: readonly { site: VentricularSourceSite; timeUs: number }[],
   ): VentricularDepolarization;
   /** A stimulus joins the wave that is under way: fusion unless that beat was paced. */
-  join(site: 'rightVentricle' | 'leftVentricle', timeUs: number): void;
+  join(site: VentricularSourceSite, timeUs: number): void;
   /** Whether a stimulus that captured nothing lies in the QRS of an intrinsic beat. */
   isPseudofusion(timeUs: number): boolean;
 }
@@ -32,9 +37,15 @@ export function createVentricles(patient: PatientParameters, pacing: PacingParam
   let last: VentricularDepolarization | null = null;
   const local = { right: -Infinity, left: -Infinity };
 
-  const arrival = (lead: 'right' | 'left', source: { site: SourceSite; timeUs: number }): number =>
+  const arrival = (lead: 'right' | 'left', source: { site: VentricularSourceSite; timeUs: number }): number =>
     source.timeUs + msToUs(ventricularDelayMs(source.site, lead, sites, patient.bundleBranchBlock));
-  const asSource = ({ site, timeUs }: { site: SourceSite; timeUs: number }): ActivationSource => ({
+  const asSource = ({
+    site,
+    timeUs,
+  }: {
+    site: VentricularSourceSite;
+    timeUs: number;
+  }): ActivationSource<VentricularSourceSite> => ({
     site,
     timeS: usToS(timeUs),
   });

@@ -1,9 +1,10 @@
-import type { PacingMode } from '../../../parameters/pacing';
-import type { PacingLead, StripParameters } from '../../../parameters/strip-parameters';
+import { basicMode, type BasicMode } from '../../../parameters/pacing-mode';
+import type { StripParameters } from '../../../parameters/strip-parameters';
 import { msToUs } from '../../../units';
 import type { StripEvent } from '../../events';
 import { randomStream } from '../../random';
 import type { Agenda } from '../agenda';
+import type { Faults } from '../faults';
 import type { Patient } from '../patient';
 import { createAsynchronousDevice } from './asynchronous';
 import { hasCrosstalk } from './crosstalk';
@@ -11,65 +12,88 @@ import { createDemandDevice } from './demand';
 import { noDevice, type Device } from './device';
 import { createDualChamberDevice } from './dual-chamber';
 import { deviceIntervals } from './intervals';
+import { outletsOf } from './outlet';
 import { createDeviceOutput } from './output';
+import { createSensing } from './sensing';
 
 /** A device listens this long before its first own pace, so that it starts from the patient's own rhythm. */
 const listenUs = msToUs(5000);
 
-/** Signals of at least the sensitivity are sensed. */
-function senses(lead: PacingLead): boolean {
-  return lead.signalMv >= lead.sensitivityMv;
-}
-
-/** The NBG code without its position for multisite pacing. */
-function basicMode(mode: PacingMode): string {
-  return mode.slice(0, 3);
-}
+/** Under a magnet a device paces without sensing, by the first letter of its mode (TM-36). */
+const underMagnet: Record<BasicMode, BasicMode> = {
+  AOO: 'AOO',
+  AAI: 'AOO',
+  VOO: 'VOO',
+  VVI: 'VOO',
+  VDD: 'VOO',
+  DOO: 'DOO',
+  DDI: 'DOO',
+  DDD: 'DOO',
+};
 
 /** The device these parameters describe, listening from `startUs` on. */
 export function createDevice(
   { seed, pacing }: Pick<StripParameters, 'seed' | 'pacing'>,
   startUs: number,
+  faults: Faults,
   patient: Patient,
   agenda: Agenda,
   emit: (event: StripEvent) => void,
 ): Device {
   if (pacing.source === 'none') return noDevice;
-  const intervals = deviceIntervals(pacing);
-  const output = createDeviceOutput(pacing, intervals.interventricularUs, patient, agenda, emit);
+  const magnet = pacing.magnetApplied && pacing.source === 'implanted';
+  const intervals = deviceIntervals(pacing, magnet);
+  const output = createDeviceOutput(
+    outletsOf(pacing),
+    intervals.interventricularUs,
+    faults,
+    patient,
+    agenda,
+    emit,
+  );
   const fraction = randomStream(seed, 'device').uniform();
   const endUs = startUs + listenUs;
   const listening = { endUs, firstPaceUs: endUs + Math.floor(fraction * intervals.lowerRateUs) };
   const asynchronous = (atrium: boolean, ventricles: boolean): Device =>
     createAsynchronousDevice({ atrium, ventricles }, intervals, agenda, output, listening.firstPaceUs);
-  const heard = { atrium: senses(pacing.atrialLead), ventricle: senses(pacing.rightVentricularLead) };
+  const set = basicMode(pacing.mode);
 
-  switch (basicMode(pacing.mode)) {
-    case 'AOO':
-      return asynchronous(true, false);
-    case 'VOO':
-      return asynchronous(false, true);
-    case 'DOO':
-      return asynchronous(true, true);
-    case 'AAI':
-      return createDemandDevice('atrium', heard.atrium, intervals, agenda, output, listening);
-    case 'VVI':
-      return createDemandDevice('ventricle', heard.ventricle, intervals, agenda, output, listening);
-    case 'DDD':
-      return createDualChamberDevice(
-        {
-          sensesAtrium: heard.atrium,
-          sensesVentricle: heard.ventricle,
-          crosstalk: hasCrosstalk(pacing),
-          trackingMode: pacing.mode,
-          switchedMode: pacing.mode.replace('DDD', 'DDI'),
-        },
-        intervals,
-        agenda,
-        output,
-        listening,
-      );
-    default:
-      throw new Error(`no device for the mode ${pacing.mode}`);
-  }
+  const build = (mode: BasicMode): Device => {
+    switch (mode) {
+      case 'AOO':
+        return asynchronous(true, false);
+      case 'VOO':
+        return asynchronous(false, true);
+      case 'DOO':
+        return asynchronous(true, true);
+      case 'AAI':
+        return createDemandDevice('atrium', intervals, agenda, output, listening);
+      case 'VVI':
+        return createDemandDevice('ventricle', intervals, agenda, output, listening);
+      case 'DDD':
+      case 'DDI':
+      case 'VDD':
+        return createDualChamberDevice(
+          {
+            mode,
+            crosstalk: mode !== 'VDD' && hasCrosstalk(pacing),
+            modeSwitchRateBpm: pacing.modeSwitching && mode !== 'DDI' ? pacing.modeSwitchRateBpm : null,
+            trackingMode: pacing.mode,
+            switchedMode: pacing.mode.replace(mode, mode === 'VDD' ? 'VVI' : 'DDI'),
+          },
+          intervals,
+          agenda,
+          output,
+          listening,
+        );
+    }
+  };
+  const device = build(magnet ? underMagnet[set] : set);
+  const sensing = createSensing(pacing, faults);
+  return {
+    ...device,
+    sense: (sense) => {
+      if (sensing.hears(sense)) device.sense(sense);
+    },
+  };
 }

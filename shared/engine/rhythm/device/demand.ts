@@ -12,7 +12,6 @@ export interface Listening {
 /** AAI and VVI: one chamber, inhibited by what is sensed in it. */
 export function createDemandDevice(
   chamber: 'atrium' | 'ventricle',
-  senses: boolean,
   intervals: DeviceIntervals,
   agenda: Agenda,
   output: DeviceOutput,
@@ -29,16 +28,16 @@ export function createDemandDevice(
   let lastEventUs = -Infinity;
   agenda.set(pace, listening.firstPaceUs);
 
-  const restart = (timeUs: number): void => {
+  const restart = (timeUs: number, intervalUs: number): void => {
     lastEventUs = timeUs;
-    agenda.set(pace, timeUs + intervals.lowerRateUs);
+    agenda.set(pace, timeUs + intervalUs);
   };
   const paceAt = (timeUs: number): void => {
     if (timeUs < listening.endUs) {
       agenda.set(pace, listening.firstPaceUs);
       return;
     }
-    restart(timeUs);
+    restart(timeUs, intervals.lowerRateUs);
     if (atrial) output.paceAtrium(timeUs);
     else output.paceVentricles(timeUs, 'ventricularPace');
   };
@@ -48,13 +47,13 @@ export function createDemandDevice(
     ventricularPace: paceAt,
     secondSite: (timeUs) => output.secondSite(timeUs),
     sense({ timeUs, chamber: where, cause }) {
-      if (where !== chamber || !senses || timeUs < lastEventUs + blankingUs) return;
+      if (where !== chamber || timeUs < lastEventUs + blankingUs) return;
       if (timeUs < lastEventUs + refractoryUs) {
         output.mark(timeUs, codes.refractory, { cause });
         return;
       }
       output.mark(timeUs, codes.sense, { cause });
-      restart(timeUs);
+      restart(timeUs, intervals.hysteresisUs);
     },
   };
 }

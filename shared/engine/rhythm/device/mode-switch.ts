@@ -1,7 +1,5 @@
 import { msToUs, rateToIntervalUs } from '../../../units';
 
-/** Atrial rate above which the device stops tracking, /min (default of the rules; TM-39: often 150 to 180). */
-const switchRateBpm = 170;
 /** Fast intervals counted up before it switches, slow ones in a row before it comes back. */
 const countToSwitch = 8;
 const slowToReturn = 5;
@@ -17,8 +15,9 @@ export interface ModeSwitch {
   ventricularEvent(timeUs: number): boolean;
 }
 
-export function createModeSwitch(): ModeSwitch {
-  const fastUs = rateToIntervalUs(switchRateBpm);
+/** A mode switch at an atrial rate (TM-39: often 150 to 180 /min); with null it never switches. */
+export function createModeSwitch(switchRateBpm: number | null): ModeSwitch {
+  const fastUs = switchRateBpm === null ? 0 : rateToIntervalUs(switchRateBpm);
   let switched = false;
   let count = 0;
   let slowInARow = 0;
