@@ -57,6 +57,11 @@ interface DepolarizationBase<Site extends SourceSite> {
   sources: ActivationSource<Site>[];
   /** The chamber was activated from an intrinsic and a paced source at once. */
   fusion: boolean;
+  /**
+   * Whether the device heard it: true or false when it reached the sensing lead in an alert window, absent when it did
+   * not have to be sensed (its own pace, blanking, refractory period, a mode that does not sense the chamber).
+   */
+  sensed?: boolean;
 }
 
 export interface AtrialDepolarization extends DepolarizationBase<AtrialSource> {

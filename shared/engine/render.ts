@@ -1,5 +1,6 @@
 import type { LeadName } from '../parameters/sheet';
 import type { StripParameters } from '../parameters/strip-parameters';
+import { reverseElectrodes } from './disturbance/electrode-reversal';
 import { engineVersion } from './engine-version';
 import type { StripEvent, VentricularDepolarization } from './events';
 import { measuredLeads } from './leads';
@@ -91,7 +92,8 @@ export function createStripStream(parameters: StripParameters): StripStream {
     const inputs = length * design.decimation;
     const channels = render(clock, nextSample * design.decimation, inputs);
     nextSample += length;
-    return source.toMeasured(limiter.process(channels, inputs));
+    const measured = source.toMeasured(limiter.process(channels, inputs));
+    return reverseElectrodes(measured, parameters.disturbance.electrodeReversal);
   };
 
   settle();

@@ -6,7 +6,7 @@ export type { ActivationPattern } from './activation';
 /** Something that starts ventricular activation, `timeMs` on the event's clock (surface onset or stimulus). */
 export type VentricularSource =
   | { kind: 'conducted' | 'junctionalEscape'; timeMs: number }
-  | { kind: 'ventricularEscape'; timeMs: number }
+  | { kind: 'ventricularEscape' | 'premature' | 'chest'; timeMs: number }
   | {
       kind: 'rightVentricle';
       site: 'apex' | 'septum' | 'outflow' | 'his' | 'leftBundle';
@@ -32,6 +32,8 @@ const leftSites = {
   anterolateral: 'lvAntlat',
 } as const satisfies Record<string, MuscleSite>;
 const escapeSite = 'lvInf' satisfies MuscleSite;
+const prematureSite = 'rvOt' satisfies MuscleSite;
+const chestSite = 'rvFree' satisfies MuscleSite;
 
 /** Spike to conducted onset when the bundle alone is captured, ms: the middle of 35–45 (from memory). */
 const selectiveHisDelayMs = 40;
@@ -56,6 +58,10 @@ function patternOf(source: VentricularSource): ActivationPattern {
       return { muscle: [], fascicles: startFascicles(allFascicles, timeMs) };
     case 'ventricularEscape':
       return fromMuscle(escapeSite);
+    case 'premature':
+      return fromMuscle(prematureSite);
+    case 'chest':
+      return fromMuscle(chestSite);
     case 'leftVentricle':
       return fromMuscle(leftSites[source.site]);
     case 'rightVentricle':

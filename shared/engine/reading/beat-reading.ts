@@ -1,5 +1,5 @@
 import { msPerS } from '../../units';
-import type { CaptureFailure, StimulusChamber } from '../events';
+import type { AtrialOrigin, CaptureFailure, StimulusChamber } from '../events';
 import {
   beatCaptured,
   beatOrigin,
@@ -32,7 +32,11 @@ export interface BeatReading {
   fusion: boolean;
   pseudofusion: boolean;
   /** What the atria did before this beat. */
-  atrialOrigin: 'sinus' | 'paced' | null;
+  atrialOrigin: AtrialOrigin | null;
+  /** Whether the atrial stimulus before this beat captured; null without one. */
+  atrialCaptured: boolean | null;
+  /** Whether the device heard this beat; null when it did not have to. */
+  sensed: boolean | null;
   /** Interval from the previous ventricular depolarization. */
   rrMs: number | null;
   prIntervalMs: number | null;
@@ -66,6 +70,8 @@ export function readBeat(
     fusion: depolarization?.fusion ?? false,
     pseudofusion: beat.stimuli.some((stimulus) => stimulus.pseudofusion === true),
     atrialOrigin: partner.depolarization?.origin ?? null,
+    atrialCaptured: partner.stimulus?.captured ?? null,
+    sensed: depolarization?.sensed ?? null,
     rrMs: rounded(rrMs, 1),
     prIntervalMs: rounded(prIntervalMs(beat, partner), 1),
     avIntervalMs: rounded(avIntervalMs(beat, partner), 1),

@@ -32,11 +32,9 @@ function captureState(stimuli: readonly StimulusEvent[]): CaptureState | null {
 
 /** Whether the stimuli of each chamber capture. */
 export function captureByChamber(events: readonly StripEvent[]): CaptureByChamber {
-  return {
-    atrium: captureState(stimuliOf(events, 'atrium')),
-    rightVentricle: captureState(stimuliOf(events, 'rightVentricle')),
-    leftVentricle: captureState(stimuliOf(events, 'leftVentricle')),
-  };
+  return Object.fromEntries(
+    stimulusChambers.map((chamber) => [chamber, captureState(stimuliOf(events, chamber))]),
+  ) as CaptureByChamber;
 }
 
 /** Chambers that are stimulated, captured or not. */

@@ -3,10 +3,13 @@ import { readBeat, type BeatReading } from './beat-reading';
 import { atrialPartners, findBeats, type BeatOrigin, type RawBeat } from './beats';
 import { captureByChamber, pacedChambers } from './capture';
 import type { ComplexMeasures } from './complex';
-import { findingsOf } from './findings';
+import { consistentModes } from './consistent-modes';
+import { findingsOf } from './findings/findings';
 import { onsetsS, rateBpm } from './intervals';
 import { qrsTRelations } from './qrs-t-relation';
 import type { Reading, ReadingFigures } from './reading';
+import { sensingByChamber } from './sensing';
+import { underlyingRhythm } from './underlying-rhythm';
 import { mean, meanAngleDeg, median, rounded } from './statistics';
 
 type Depolarized = Exclude<BeatOrigin, 'none'>;
@@ -70,6 +73,7 @@ export function readStrip(
   const figures: ReadingFigures = {
     pacedChambers: chambers,
     capture: captureByChamber(events),
+    sensing: sensingByChamber(events),
     atrialRateBpm: rounded(rateBpm(onsetsS(events, 'atrium')), 1),
     ventricularRateBpm: rounded(rateBpm(onsetsS(events, 'ventricle')), 1),
     pacedSharePercent: rounded(pacedShare(events, chambers), 1),
@@ -86,6 +90,8 @@ export function readStrip(
     ),
     frontalAxisDeg: rounded(meanAngleDeg(spoken.flatMap((beat) => beat.frontalAxisDeg ?? [])), 1),
     qrsTRelation: example?.complex ? qrsTRelations(example.complex) : null,
+    underlyingRhythm: underlyingRhythm(events, beats),
+    consistentModes: consistentModes(events, beats),
     beats,
   };
   return { ...figures, findings: findingsOf(events, figures) };

@@ -3,7 +3,9 @@ import type { StimulusChamber } from '../events';
 import type { BeatReading } from './beat-reading';
 import type { BeatOrigin } from './beats';
 import type { CaptureByChamber } from './capture';
+import type { BasicMode } from '../../parameters/pacing-mode';
 import type { QrsTRelation } from './qrs-t-relation';
+import type { SensingByChamber } from './sensing';
 
 /** A sentence an educator would sign, with the beats it speaks of. */
 export interface Finding {
@@ -22,6 +24,7 @@ export interface Reading {
   /** Chambers that are stimulated, whether or not they are captured. */
   pacedChambers: StimulusChamber[];
   capture: CaptureByChamber;
+  sensing: SensingByChamber;
   atrialRateBpm: number | null;
   ventricularRateBpm: number | null;
   /**
@@ -39,6 +42,10 @@ export interface Reading {
   interventricularIntervalMs: number | null;
   frontalAxisDeg: number | null;
   qrsTRelation: Record<LeadName, QrsTRelation | null> | null;
+  /** The rhythm under the pacing in words, as far as it shows. */
+  underlyingRhythm: string | null;
+  /** Modes that could have made this strip. */
+  consistentModes: BasicMode[];
   beats: BeatReading[];
   findings: Finding[];
 }

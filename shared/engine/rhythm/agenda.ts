@@ -1,4 +1,4 @@
-import type { SenseCause } from '../events';
+import type { DepolarizationEvent, SenseCause } from '../events';
 
 /**
  * Kinds of things that can be due, in the order in which they are handled when due at the same microsecond
@@ -28,8 +28,8 @@ export interface PendingSense {
   cause: SenseCause;
   /** The depolarization behind it is a fibrillation wave, which a lead sees at half its signal. */
   halfSignal?: boolean;
-  /** When the depolarization began, for sensing that counts from the surface. */
-  onsetUs?: number;
+  /** The depolarization that reaches the lead; absent for crosstalk and false senses. */
+  depolarization?: DepolarizationEvent;
 }
 
 /**

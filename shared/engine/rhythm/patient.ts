@@ -1,6 +1,12 @@
 import type { StripParameters } from '../../parameters/strip-parameters';
 import { msToUs, rateToIntervalUs } from '../../units';
-import type { AtrialOrigin, StripEvent, VentricularOrigin, VentricularSourceSite } from '../events';
+import type {
+  AtrialOrigin,
+  StripEvent,
+  VentricularDepolarization,
+  VentricularOrigin,
+  VentricularSourceSite,
+} from '../events';
 import { randomStream } from '../random';
 import type { Agenda } from './agenda';
 import { createAtria } from './atria';
@@ -88,9 +94,11 @@ export function createPatient(
   };
 
   const depolarizeAtria = (origin: AtrialOrigin, timeUs: number): void => {
-    emit(atria.depolarize(origin, timeUs));
+    const depolarization = atria.depolarize(origin, timeUs);
+    emit(depolarization);
     if (origin !== 'paced') {
       agenda.addSense({
+        depolarization,
         timeUs: atria.localUs(),
         chamber: 'atrium',
         cause: 'depolarization',
@@ -104,11 +112,15 @@ export function createPatient(
     if (origin !== 'retrograde') enterNode(timeUs);
   };
 
-  const scheduleVentricularSense = (site: VentricularSourceSite, onsetUs: number): void => {
+  const scheduleVentricularSense = (
+    depolarization: VentricularDepolarization,
+    site: VentricularSourceSite,
+    onsetUs: number,
+  ): void => {
     const chest = pacing.source === 'transcutaneous';
     if (site === (chest ? 'chest' : 'rightVentricle')) return;
     const timeUs = chest ? onsetUs + chestSenseUs : ventricles.localUs('right');
-    agenda.addSense({ timeUs, chamber: 'ventricle', cause: 'depolarization' });
+    agenda.addSense({ timeUs, chamber: 'ventricle', cause: 'depolarization', depolarization });
   };
 
   const enterNodeFromBelow = (timeUs: number): void => {
@@ -129,11 +141,12 @@ export function createPatient(
     const fuses = mayFuse && arrivalUs !== null && arrivalUs - timeUs <= fusionWindowUs;
     const sources = [{ site, timeUs }];
     if (fuses) sources.push({ site: 'conducted', timeUs: arrivalUs });
-    emit(ventricles.depolarize(origin, sources));
+    const depolarization = ventricles.depolarize(origin, sources);
+    emit(depolarization);
     armEscape(timeUs + escapeUs);
     if (origin !== 'premature') ventricularFocus.beat(timeUs);
     if (!fuses && site !== 'conducted') enterNodeFromBelow(timeUs);
-    scheduleVentricularSense(site, timeUs);
+    scheduleVentricularSense(depolarization, site, timeUs);
   };
 
   return {

@@ -31,7 +31,7 @@ export interface RenderedEvents {
 }
 
 export function createElectrodeSignal(
-  parameters: Pick<StripParameters, 'patient' | 'pacing' | 'waveform'>,
+  parameters: Pick<StripParameters, 'seed' | 'patient' | 'pacing' | 'waveform'>,
   rhythm: Rhythm,
 ): ElectrodeSignal {
   const heart = createHeartWaves(parameters);

@@ -1,9 +1,11 @@
 import type { AtrialLead, StripParameters } from '../../parameters/strip-parameters';
-import { msPerS } from '../../units';
+import { msPerMinute, msPerS } from '../../units';
 import type { AtrialDepolarization, DepolarizationEvent, VentricularDepolarization } from '../events';
 import { activationPattern, type VentricularSource } from '../heart/activation-pattern';
 import { atrialLoop, type AtrialSite } from '../heart/atrial-loop';
+import { fibrillationLoop, flutterLoop } from '../heart/atrial-waves';
 import { rateFactorForQt, ventricularLoop, type VentricularLoop } from '../heart/ventricular-loop';
+import { randomStream } from '../random';
 import type { SampledVector } from './wave-painter';
 
 /** Model site of each place an atrial lead can sit (engine contract). */
@@ -43,9 +45,10 @@ export interface HeartWaves {
 
 /** Starts at rest, with an RR of 1 s. */
 export function createHeartWaves(
-  parameters: Pick<StripParameters, 'patient' | 'pacing' | 'waveform'>,
+  parameters: Pick<StripParameters, 'seed' | 'patient' | 'pacing' | 'waveform'>,
 ): HeartWaves {
   const { patient, pacing, waveform } = parameters;
+  const fibrillation = randomStream(parameters.seed, 'fibrillationWaves');
   let followedRrS = firstRrS;
   let lastOnsetS: number | null = null;
 
@@ -70,13 +73,8 @@ export function createHeartWaves(
           };
         case 'leftVentricle':
           return { kind: 'leftVentricle', site: pacing.leftVentricularLead.site, timeMs };
-        case 'ventricularEscape':
-        case 'junctionalEscape':
-        case 'conducted':
+        default:
           return { kind: source.site, timeMs };
-        case 'sinus':
-        case 'atrium':
-          throw new Error(`a ventricular depolarization cannot start in the atrium (${source.site})`);
       }
     });
 
@@ -92,13 +90,33 @@ export function createHeartWaves(
     });
   };
 
+  const atrialWave = (event: AtrialDepolarization): SampledVector => {
+    const cycleMs = msPerMinute / patient.atrialRateBpm;
+    switch (event.origin) {
+      case 'paced':
+        return atrialLoop(atrialSiteOfLead[pacing.atrialLead.site], waveform);
+      case 'premature':
+        return atrialLoop('lowAtrial', waveform);
+      case 'retrograde':
+        return atrialLoop('retrograde', waveform);
+      case 'flutter':
+        return flutterLoop(cycleMs, waveform.pAmplitudeMv);
+      case 'fibrillation': {
+        const draw = (): number => fibrillation.uniform();
+        return fibrillationLoop(cycleMs, waveform.pAmplitudeMv, [draw(), draw(), draw(), draw()]);
+      }
+      case 'sinus':
+      case 'tachycardia':
+        return atrialLoop('sinus', waveform);
+    }
+  };
+
   return {
     waveOf(event) {
       if (event.chamber === 'ventricle') {
         return { chamber: 'ventricle', event, wave: ventricularWave(event) };
       }
-      const site = event.origin === 'paced' ? atrialSiteOfLead[pacing.atrialLead.site] : 'sinus';
-      return { chamber: 'atrium', event, wave: atrialLoop(site, waveform) };
+      return { chamber: 'atrium', event, wave: atrialWave(event) };
     },
   };
 }

@@ -22,6 +22,8 @@ const directions: Readonly<Record<StimulusChamber, readonly [number, number, num
   atrium: [third, -third, -third],
   rightVentricle: [-third, -third, third],
   leftVentricle: [-third, third, third],
+  // Between pads on back and chest: to the left, down and forward (common practice, no source).
+  chest: [third, third, -third],
 };
 
 /**

@@ -25,5 +25,6 @@ export function createAsynchronousDevice(
     },
     secondSite: (timeUs) => output.secondSite(timeUs),
     sense: () => undefined,
+    isAlert: () => false,
   };
 }

@@ -93,7 +93,10 @@ export function createDevice(
   return {
     ...device,
     sense: (sense) => {
-      if (sensing.hears(sense)) device.sense(sense);
+      const heard = sensing.hears(sense);
+      const { depolarization, chamber, timeUs } = sense;
+      if (depolarization && device.isAlert(chamber, timeUs)) depolarization.sensed = heard;
+      if (heard) device.sense(sense);
     },
   };
 }

@@ -46,6 +46,7 @@ export function createDemandDevice(
     atrialPace: paceAt,
     ventricularPace: paceAt,
     secondSite: (timeUs) => output.secondSite(timeUs),
+    isAlert: (where, timeUs) => where === chamber && timeUs >= lastEventUs + refractoryUs,
     sense({ timeUs, chamber: where, cause }) {
       if (where !== chamber || timeUs < lastEventUs + blankingUs) return;
       if (timeUs < lastEventUs + refractoryUs) {

@@ -6,6 +6,8 @@ export interface Device {
   ventricularPace(timeUs: number): void;
   secondSite(timeUs: number): void;
   sense(sense: PendingSense): void;
+  /** Whether a signal in a chamber would be taken for an event now: not blanked, not in a refractory period. */
+  isAlert(chamber: PendingSense['chamber'], timeUs: number): boolean;
 }
 
 /** No pacemaker: nothing is sensed and nothing is ever due. */
@@ -14,4 +16,5 @@ export const noDevice: Device = {
   ventricularPace: () => undefined,
   secondSite: () => undefined,
   sense: () => undefined,
+  isAlert: () => false,
 };

@@ -146,7 +146,13 @@ export function createDualChamberDevice(
     return true;
   };
 
+  const isAlert: Device['isAlert'] = (chamber, timeUs) =>
+    chamber === 'atrium'
+      ? timeUs >= atrialBlankUntilUs && atrialEventOfCycle === 'none' && timeUs >= pvarpEndUs
+      : timeUs >= ventricularBlankUntilUs && timeUs >= lastVentricularUs + intervals.ventricularRefractoryUs;
+
   return {
+    isAlert,
     atrialPace(timeUs) {
       if (stillListening(timeUs)) return;
       atrialEvent(timeUs, 'paced');
