@@ -15,11 +15,27 @@ function readValue(text: string): unknown {
   }
 }
 
-function withValue(target: PlainObject, path: readonly string[], value: unknown): PlainObject {
+/** An index of a list, or the one after its last. */
+function isIndex(list: readonly unknown[], key: string): boolean {
+  return /^\d{1,4}$/u.test(key) && Number(key) <= list.length;
+}
+
+/**
+ * A copy of a tree with the value at a path set. Objects on the way are made where there are none; a number in the
+ * path is an index of a list, where there is one.
+ */
+export function withValueAt(target: unknown, path: readonly string[], value: unknown): unknown {
   const [key, ...rest] = path;
-  if (rest.length === 0) return { ...target, [key]: value };
-  const child = Object.hasOwn(target, key) ? target[key] : undefined;
-  return { ...target, [key]: withValue(isPlainObject(child) ? child : {}, rest, value) };
+  if (key === undefined) return value;
+  if (Array.isArray(target) && isIndex(target, key)) {
+    const index = Number(key);
+    const copy: unknown[] = [...(target as unknown[])];
+    copy[index] = withValueAt(copy[index], rest, value);
+    return copy;
+  }
+  const object = isPlainObject(target) ? target : {};
+  const child = Object.hasOwn(object, key) ? object[key] : undefined;
+  return { ...object, [key]: withValueAt(child, rest, value) };
 }
 
 /**
@@ -40,5 +56,5 @@ export function assignPath(input: unknown, assignment: string): unknown {
     ]);
   }
   if (!isPlainObject(input)) return input;
-  return withValue(input, path, readValue(assignment.slice(equals + 1)));
+  return withValueAt(input, path, readValue(assignment.slice(equals + 1)));
 }

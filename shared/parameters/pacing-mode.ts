@@ -38,6 +38,18 @@ export function pacesBothVentricles(mode: PacingMode): boolean {
   return mode.charAt(4) === 'V';
 }
 
+/** What a device does under a magnet, by the first letter of its mode: it paces without sensing (TM-36). */
+export const modeUnderMagnet: Readonly<Record<BasicMode, BasicMode>> = {
+  AOO: 'AOO',
+  AAI: 'AOO',
+  VOO: 'VOO',
+  VVI: 'VOO',
+  VDD: 'VOO',
+  DOO: 'DOO',
+  DDI: 'DOO',
+  DDD: 'DOO',
+};
+
 export function pacesAtrium(mode: PacingMode): boolean {
   return mode.charAt(0) !== 'V';
 }

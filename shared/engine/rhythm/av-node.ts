@@ -25,6 +25,8 @@ type NodeParameters = Pick<
 export interface AvNode {
   /** When an impulse under way will reach the ventricles; null without one, or when it will stop below the node. */
   arrivalUs(): number | null;
+  /** An atrial impulse meets one from below: both end, and the way up is closed as by any impulse from above. */
+  collide(timeUs: number): void;
   /** An atrial impulse arrives; returns when it will leave the node, or null when it is blocked. */
   enter(timeUs: number): number | null;
   /** The impulse under way leaves the node; returns whether it reaches the ventricles. */
@@ -79,6 +81,7 @@ export function createAvNode(parameters: NodeParameters, random: RandomStream): 
 
   return {
     arrivalUs: () => (pending && !pending.stopsBelow ? pending.exitUs : null),
+    collide: (timeUs) => void (lastUseUs = timeUs),
     enter(timeUs) {
       lastUseUs = timeUs;
       if (isBlocked(timeUs)) return null;

@@ -16,8 +16,8 @@ export interface Faults {
   strikes(kind: Exclude<FaultKind, 'oversensing'>, chamber: FaultChamber, timeUs: number): boolean;
   /** When the next false sense comes; Infinity when none does. */
   nextFalseSenseUs(): number;
-  /** Takes that false sense. */
-  takeFalseSense(): { timeUs: number; chamber: 'atrium' | 'ventricle' };
+  /** Takes that false sense; null when the draw of its fault spares it. */
+  takeFalseSense(): { timeUs: number; chamber: 'atrium' | 'ventricle' } | null;
 }
 
 interface RunningFault extends Fault {
@@ -30,24 +30,24 @@ interface RunningFault extends Fault {
 interface FalseSenses {
   chamber: 'atrium' | 'ventricle';
   nextUs: number;
-  advance(): void;
+  /** Goes on to the next; returns whether this one is heard. */
+  take(): boolean;
 }
 
 function falseSenses(fault: RunningFault): FalseSenses {
   const everyUs = msToUs(fault.intervalMs);
   // A fault from 0 was there before the strip, on the same grid.
   const originUs = Math.round(fault.fromS * usPerS);
-  let timeUs = originUs + Math.ceil((fault.fromUs - originUs) / everyUs) * everyUs - everyUs;
+  const firstUs = originUs + Math.ceil((fault.fromUs - originUs) / everyUs) * everyUs;
+  const untilEnd = (timeUs: number): number => (timeUs < fault.toUs ? timeUs : Infinity);
   const senses: FalseSenses = {
     chamber: fault.chamber === 'atrium' ? 'atrium' : 'ventricle',
-    nextUs: Infinity,
-    advance() {
-      do timeUs += everyUs;
-      while (timeUs < fault.toUs && !fault.hits());
-      senses.nextUs = timeUs < fault.toUs ? timeUs : Infinity;
+    nextUs: untilEnd(firstUs),
+    take() {
+      senses.nextUs = untilEnd(senses.nextUs + everyUs);
+      return fault.hits();
     },
   };
-  senses.advance();
   return senses;
 }
 
@@ -83,8 +83,7 @@ export function createFaults(faults: readonly Fault[], seed: number, startUs: nu
       const next = first();
       if (!next || next.nextUs === Infinity) throw new Error('no false sense is due');
       const taken = { timeUs: next.nextUs, chamber: next.chamber };
-      next.advance();
-      return taken;
+      return next.take() ? taken : null;
     },
   };
 }

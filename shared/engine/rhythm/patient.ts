@@ -85,8 +85,8 @@ export function createPatient(
 
   const enterNode = (timeUs: number): void => {
     if (agenda.dueUs('retrograde') !== null) {
-      // Both impulses end where they meet.
       agenda.clear('retrograde');
+      node.collide(timeUs);
       return;
     }
     const exitUs = node.enter(timeUs);

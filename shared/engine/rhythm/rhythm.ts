@@ -43,7 +43,8 @@ export function createRhythm(parameters: Pick<StripParameters, 'seed' | 'patient
     escape: (timeUs) => patient.escape(timeUs),
     sense: () => device.sense(agenda.takeSense()),
     oversensing: () => {
-      device.sense({ ...faults.takeFalseSense(), cause: 'oversensing' });
+      const sense = faults.takeFalseSense();
+      if (sense) device.sense({ ...sense, cause: 'oversensing' });
       armOversensing();
     },
     secondSite: (timeUs) => device.secondSite(timeUs),

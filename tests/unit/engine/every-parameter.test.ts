@@ -36,6 +36,59 @@ const vvi: StripParametersInput = {
   pacing: { source: 'implanted', mode: 'VVI' },
 };
 
+const grouped: StripParametersInput = {
+  durationS: 8,
+  patient: { atrialRateBpm: 90, avConduction: 'wenckebach' },
+};
+const looping: StripParametersInput = {
+  durationS: 8,
+  patient: { atrialRateBpm: 62, prematureVentricularPerMinute: 20, prematureCouplingMs: 400 },
+  pacing: { source: 'implanted', pvarpMs: 200 },
+};
+const premature: StripParametersInput = { durationS: 8, patient: { prematureVentricularPerMinute: 30 } };
+const rateResponsive: StripParametersInput = {
+  ...short,
+  patient: { atrialRhythm: 'arrest' },
+  pacing: { source: 'implanted', mode: 'AAIR' },
+};
+const hearing: StripParametersInput = {
+  durationS: 8,
+  patient: { prematureVentricularPerMinute: 12, avConduction: 'complete' },
+  pacing: { source: 'implanted', mode: 'VVI' },
+};
+const tachycardia: StripParametersInput = {
+  durationS: 8,
+  patient: { atrialRhythm: 'tachycardia', atrialRateBpm: 175, avConduction: 'complete' },
+  pacing: { source: 'implanted', pvarpMs: 150 },
+};
+const transvenous: StripParametersInput = {
+  durationS: 6,
+  patient: { atrialRateBpm: 65 },
+  pacing: { source: 'transvenous', lowerRateBpm: 70 },
+};
+const transcutaneous: StripParametersInput = {
+  durationS: 6,
+  patient: { avConduction: 'complete' },
+  pacing: { source: 'transcutaneous', transcutaneous: { currentMa: 70 } },
+};
+const faulty: StripParametersInput = {
+  durationS: 8,
+  patient: { atrialRateBpm: 75, prIntervalMs: 240 },
+  pacing: {
+    source: 'implanted',
+    faults: [{ kind: 'failureToCapture', chamber: 'rightVentricle', fromS: 2, toS: 6 }],
+  },
+};
+const falseSenses: StripParametersInput = {
+  ...faulty,
+  pacing: {
+    source: 'implanted',
+    mode: 'VVI',
+    lowerRateBpm: 90,
+    faults: [{ kind: 'oversensing', intervalMs: 400 }],
+  },
+};
+
 const rows: [path: string, value: unknown, on: StripParametersInput][] = [
   ['seed', 9, {}],
   ['durationS', 5, {}],
@@ -76,6 +129,38 @@ const rows: [path: string, value: unknown, on: StripParametersInput][] = [
   ['pacing.atrialLead.signalMv', 0.1, { ...fast, durationS: 4 }],
   ['pacing.rightVentricularLead.sensitivityMv', 19, vvi],
   ['pacing.rightVentricularLead.signalMv', 1, vvi],
+  ['patient.conductedPerGroup', 2, grouped],
+  ['patient.retrogradeConductionMs', 260, looping],
+  ['patient.prematureVentricularPerMinute', 20, { ...short, durationS: 8 }],
+  ['patient.prematureAtrialPerMinute', 20, { ...short, durationS: 8 }],
+  ['patient.prematureCouplingMs', 350, premature],
+  ['pacing.sensorRateBpm', 100, rateResponsive],
+  ['pacing.hysteresisRateBpm', 40, hearing],
+  [
+    'pacing.pvarpAfterEctopic',
+    'lengthened',
+    { ...looping, patient: { ...looping.patient, retrogradeConductionMs: 260 } },
+  ],
+  ['pacing.safetyPacing', false, crosstalk],
+  ['pacing.modeSwitching', false, tachycardia],
+  ['pacing.modeSwitchRateBpm', 190, tachycardia],
+  ['pacing.magnetApplied', true, vvi],
+  ['pacing.magnetRateBpm', 100, { ...vvi, pacing: { ...vvi.pacing, magnetApplied: true } }],
+  ['pacing.transvenous.outputMa', 0.5, transvenous],
+  ['pacing.transvenous.captureThresholdMa', 9, transvenous],
+  ['pacing.transvenous.sensitivityMv', 15, transvenous],
+  ['pacing.transcutaneous.currentMa', 40, transcutaneous],
+  ['pacing.transcutaneous.captureThresholdMa', 90, transcutaneous],
+  ['pacing.transcutaneous.pulseWidthMs', 10, transcutaneous],
+  ['pacing.transcutaneous.artefactMv', 9, transcutaneous],
+  ['pacing.faults', [], faulty],
+  ['pacing.faults.0.kind', 'failureToPace', faulty],
+  ['pacing.faults.0.chamber', 'atrium', { ...faulty, patient: { atrialRateBpm: 40 } }],
+  ['pacing.faults.0.proportion', 0.3, faulty],
+  ['pacing.faults.0.fromS', 4, faulty],
+  ['pacing.faults.0.toS', 4, faulty],
+  ['pacing.faults.0.intervalMs', 900, falseSenses],
+  ['disturbance.electrodeReversal', 'RA-LA', short],
   ['waveform.pAmplitudeMv', 0.3, short],
   ['waveform.pDurationMs', 160, short],
   ['waveform.qrsDurationMs', 120, short],
@@ -121,6 +206,7 @@ describe('every parameter changes the strip', () => {
         !silent.includes(path) &&
         !/leftVentricularLead\.(sensitivityMv|signalMv)$/.test(path),
     );
-    expect(all.filter((path) => !rows.some(([covered]) => covered === path))).toEqual([]);
+    const fault = leaves(buildStrip({ pacing: { faults: [{}] } }).pacing.faults[0], 'pacing.faults.0.');
+    expect([...all, ...fault].filter((path) => !rows.some(([covered]) => covered === path))).toEqual([]);
   });
 });

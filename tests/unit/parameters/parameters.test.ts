@@ -23,6 +23,21 @@ describe('strip parameters', () => {
     });
   });
 
+  it.each([
+    [{ pacing: { source: 'transvenous' } }, { pacing: { mode: 'VVI' } }],
+    [{ pacing: { source: 'transcutaneous' } }, { pacing: { mode: 'VVI' } }],
+    [{ pacing: { mode: 'VVIRV' } }, { pacing: { ventricularChambers: 'both' } }],
+    [{ patient: { atrialRhythm: 'tachycardia' } }, { patient: { atrialRateBpm: 160 } }],
+    [{ patient: { atrialRhythm: 'flutter' } }, { patient: { atrialRateBpm: 300 } }],
+    [{ patient: { atrialRhythm: 'fibrillation' } }, { patient: { atrialRateBpm: 400 } }],
+    [
+      { pacing: { faults: [{}] } },
+      { pacing: { faults: [{ proportion: 1, fromS: 0, toS: null, intervalMs: 200 }] } },
+    ],
+  ])('fills what follows from %j', (input, expected) => {
+    expect(parseStripParameters(input)).toMatchObject(expected);
+  });
+
   it('reads its own output again, unchanged', () => {
     const strip = parseStripParameters({ pacing: { source: 'implanted', mode: 'DDDOV' } });
     expect(strip.pacing.ventricularChambers).toBe('both');
@@ -54,8 +69,9 @@ describe('strip parameters', () => {
 
   it.each([
     [{ nonsense: 1 }, 'nonsense'],
-    [{ patient: { retrogradeConductionMs: 200 } }, 'patient.retrogradeConductionMs'],
-    [{ pacing: { magnetApplied: true } }, 'pacing.magnetApplied'],
+    [{ patient: { retrogradeMs: 200 } }, 'patient.retrogradeMs'],
+    [{ pacing: { magnet: true } }, 'pacing.magnet'],
+    [{ pacing: { faults: [{ sort: 'oversensing' }] } }, 'pacing.faults.0.sort'],
     [{ pacing: { atrialLead: { impedance: 5 } } }, 'pacing.atrialLead.impedance'],
   ])('refuses the unknown key in %j and lists the known ones', (input, path) => {
     expect(problemOf(input)).toMatch(new RegExp(`^${path}: the key .* allowed: an object with the keys `));
@@ -68,6 +84,12 @@ describe('strip parameters', () => {
     [{ recorder: { sampleRateHz: 250 } }, 'recorder.sampleRateHz'],
     [{ recorder: { bandwidth: { lowHz: 0.05, highHz: 300 } } }, 'recorder.bandwidth.highHz'],
     [{ sheet: { leads: ['II', 'II'] } }, 'sheet.leads'],
+    [{ pacing: { hysteresisRateBpm: 60 } }, 'pacing.hysteresisRateBpm'],
+    [{ pacing: { source: 'transvenous', mode: 'DDD' } }, 'pacing.mode'],
+    [{ pacing: { source: 'transcutaneous', mode: 'VVIR' } }, 'pacing.mode'],
+    [{ pacing: { faults: [{ kind: 'undersensing', chamber: 'leftVentricle' }] } }, 'pacing.faults.0.chamber'],
+    [{ pacing: { faults: [{ kind: 'oversensing', chamber: 'leftVentricle' }] } }, 'pacing.faults.0.chamber'],
+    [{ pacing: { faults: [{ fromS: 4, toS: 4 }] } }, 'pacing.faults.0.toS'],
   ])('refuses what does not fit together: %j', (input, path) => {
     expect(problemOf(input).startsWith(`${path}: `)).toBe(true);
   });
@@ -118,6 +140,18 @@ describe('path assignments', () => {
       recorder: { bandwidth: { lowHz: 1, highHz: 20 } },
     });
     expect(given).toEqual({ pacing: { mode: 'VVI' } });
+  });
+
+  it('sets and adds an item of a list', () => {
+    const given = { pacing: { faults: [{ kind: 'oversensing' }] } };
+    expect(assignPath(given, 'pacing.faults.0.fromS=4')).toEqual({
+      pacing: { faults: [{ kind: 'oversensing', fromS: 4 }] },
+    });
+    expect(assignPath({ pacing: { faults: [] } }, 'pacing.faults.0.kind=undersensing')).toEqual({
+      pacing: { faults: [{ kind: 'undersensing' }] },
+    });
+    expect(given).toEqual({ pacing: { faults: [{ kind: 'oversensing' }] } });
+    expect(problemOf(assignPath(given, 'pacing.faults.x=1'))).toContain('pacing.faults');
   });
 
   it.each(['novalue', '=5', 'a..b=1', '__proto__.x=1'])('refuses %s', (assignment) => {

@@ -71,10 +71,12 @@ describe('shape', () => {
     rightVentricle: [-1, -1, 1],
     // Posterior, inferior, right.
     leftVentricle: [-1, 1, 1],
+    // Anterior, inferior, left (common practice, no source).
+    chest: [1, 1, -1],
   };
 
   it.each(Object.entries(octants) as [StimulusChamber, number[]][])(
-    '%s points as PP-22 says',
+    '%s points as PP-22 says, the chest along its pads',
     (chamber, octant) => {
       const one = { ...stimulus, chamber, widthMs: 2, timeS: 0.02 };
       const { x, y, z } = paint(8000, 0, 200, one);

@@ -1,4 +1,4 @@
-import { basicMode, type BasicMode } from '../../../parameters/pacing-mode';
+import { basicMode, modeUnderMagnet, type BasicMode } from '../../../parameters/pacing-mode';
 import type { StripParameters } from '../../../parameters/strip-parameters';
 import { msToUs } from '../../../units';
 import type { StripEvent } from '../../events';
@@ -18,18 +18,6 @@ import { createSensing } from './sensing';
 
 /** A device listens this long before its first own pace, so that it starts from the patient's own rhythm. */
 const listenUs = msToUs(5000);
-
-/** Under a magnet a device paces without sensing, by the first letter of its mode (TM-36). */
-const underMagnet: Record<BasicMode, BasicMode> = {
-  AOO: 'AOO',
-  AAI: 'AOO',
-  VOO: 'VOO',
-  VVI: 'VOO',
-  VDD: 'VOO',
-  DOO: 'DOO',
-  DDI: 'DOO',
-  DDD: 'DOO',
-};
 
 /** The device these parameters describe, listening from `startUs` on. */
 export function createDevice(
@@ -88,7 +76,7 @@ export function createDevice(
         );
     }
   };
-  const device = build(magnet ? underMagnet[set] : set);
+  const device = build(magnet ? modeUnderMagnet[set] : set);
   const sensing = createSensing(pacing, faults);
   return {
     ...device,

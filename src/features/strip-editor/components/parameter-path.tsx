@@ -1,5 +1,5 @@
 import { useId, useState } from 'react';
-import { pacesBothVentricles } from '../../../../shared/parameters/pacing';
+import { pacesBothVentricles } from '../../../../shared/parameters/pacing-mode';
 import { bandwidthLabel } from '../../../../shared/paper/bandwidth-label';
 import type { StripParameters } from '../../../../shared/parameters/strip-parameters';
 import { classNames } from '../../../lib/class-names';

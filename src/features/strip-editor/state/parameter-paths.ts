@@ -1,11 +1,12 @@
+import { withValueAt } from '../../../../shared/parameters/assign-path';
 import { fieldMeta, schemaAt } from '../../../../shared/parameters/allowed';
 import type { FieldMeta } from '../../../../shared/parameters/fields';
 import { problemLine, type Problem } from '../../../../shared/errors';
-import { pacesBothVentricles } from '../../../../shared/parameters/pacing';
 import { readStripParameters } from '../../../../shared/parameters/parse';
 import { stripParametersSchema, type StripParameters } from '../../../../shared/parameters/strip-parameters';
+import { withConsequences } from './consequences';
 
-/** Dotted path of one parameter. */
+/** Dotted path of one parameter; a number in it is an index. */
 export type ParameterPath = string;
 
 type Tree = { [key: string]: unknown };
@@ -22,17 +23,6 @@ export function parameterValue(parameters: StripParameters, path: ParameterPath)
   return path.split('.').reduce<unknown>((value, key) => (value as Tree)[key], parameters);
 }
 
-function withValue(tree: Tree, [key, ...rest]: string[], value: unknown): Tree {
-  return { ...tree, [key]: rest.length === 0 ? value : withValue(tree[key] as Tree, rest, value) };
-}
-
-/** What must change with a mode: both ventricles exactly when it has the fifth letter V. */
-function chambersFor(parameters: StripParameters): 'right' | 'left' | 'both' {
-  const { mode, ventricularChambers } = parameters.pacing;
-  if (pacesBothVentricles(mode)) return 'both';
-  return ventricularChambers === 'both' ? 'right' : ventricularChambers;
-}
-
 export type ParameterChange =
   { ok: true; parameters: StripParameters } | { ok: false; path: ParameterPath; words: string };
 
@@ -47,12 +37,8 @@ export function changeParameter(
   path: ParameterPath,
   value: unknown,
 ): ParameterChange {
-  let changed = withValue(parameters as unknown as Tree, path.split('.'), value);
-  if (path === 'pacing.mode') {
-    const chambers = chambersFor(changed as unknown as StripParameters);
-    changed = withValue(changed, ['pacing', 'ventricularChambers'], chambers);
-  }
-  const result = readStripParameters(changed);
+  const changed = withValueAt(parameters, path.split('.'), value) as StripParameters;
+  const result = readStripParameters(withConsequences(changed, path));
   if (result.ok) return { ok: true, parameters: result.parameters };
   return { ok: false, path, words: refusalWords(result.problems[0], path) };
 }
