@@ -64,14 +64,23 @@ interface DepolarizationBase<Site extends SourceSite> {
   sensed?: boolean;
 }
 
+/** Where an atrial impulse ended that never reached the ventricles: in the AV node, below it, or on an impulse from below. */
+export type AvBlock = 'inNode' | 'belowNode' | 'collision';
+
 export interface AtrialDepolarization extends DepolarizationBase<AtrialSource> {
   chamber: 'atrium';
   origin: AtrialOrigin;
+  /** Onset of the ventricular beat that was conducted up; present exactly on retrograde P waves. */
+  conductedFromS?: number;
+  /** Present when the node stopped this impulse as it came; one that meets a later beat from below has none. */
+  blocked?: AvBlock;
 }
 
 export interface VentricularDepolarization extends DepolarizationBase<VentricularSourceSite> {
   chamber: 'ventricle';
   origin: VentricularOrigin;
+  /** Onset of the P wave that was conducted; present exactly with a `conducted` source. */
+  conductedFromS?: number;
 }
 
 export type DepolarizationEvent = AtrialDepolarization | VentricularDepolarization;

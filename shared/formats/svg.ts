@@ -1,4 +1,14 @@
-import type { Drawing, DrawingItem, FontFamily, LineItem, PolylineItem, TextItem } from '../paper/drawing';
+import type {
+  CircleItem,
+  Drawing,
+  DrawingItem,
+  FontFamily,
+  LineItem,
+  PolygonItem,
+  PolylineItem,
+  RectItem,
+  TextItem,
+} from '../paper/drawing';
 import { colourValue } from '../paper/tokens';
 
 const fontStacks: Readonly<Record<FontFamily, string>> = {
@@ -30,7 +40,7 @@ function hundredths(value: number): string {
 }
 
 /** Steps from point to point in hundredths of a millimetre; rounding does not add up along the line. */
-function polylinePath({ pointsMm }: PolylineItem): string {
+function polylinePath({ pointsMm }: PolylineItem | PolygonItem): string {
   let x = Math.round(pointsMm[0] * 100);
   let y = Math.round(pointsMm[1] * 100);
   let path = `M${hundredths(x)} ${hundredths(y)}l`;
@@ -69,6 +79,34 @@ function textElement(item: TextItem): string {
   );
 }
 
+/** Fill and stroke of a closed shape. */
+function paintOf({ fill, stroke, weightMm }: CircleItem | PolygonItem): string {
+  const outline = stroke ? ` stroke="${colourValue(stroke)}" stroke-width="${number(weightMm)}"` : '';
+  return `fill="${fill ? colourValue(fill) : 'none'}"${outline}`;
+}
+
+function rectElement(item: RectItem): string {
+  const place = `x="${number(item.xMm)}" y="${number(item.yMm)}"`;
+  const size = `width="${number(item.widthMm)}" height="${number(item.heightMm)}"`;
+  return `<rect ${place} ${size} fill="${colourValue(item.fill)}"/>`;
+}
+
+/** Any item that is an element of its own. */
+function element(item: Exclude<DrawingItem, LineItem>): string {
+  switch (item.kind) {
+    case 'polyline':
+      return `<path ${strokeOf(item)} d="${polylinePath(item)}"/>`;
+    case 'polygon':
+      return `<path ${paintOf(item)} d="${polylinePath(item)}z"/>`;
+    case 'circle':
+      return `<circle cx="${number(item.cxMm)}" cy="${number(item.cyMm)}" r="${number(item.radiusMm)}" ${paintOf(item)}/>`;
+    case 'text':
+      return textElement(item);
+    case 'rect':
+      return rectElement(item);
+  }
+}
+
 /** Elements in painting order. Neighbouring lines of one stroke become one path; each polyline keeps its own. */
 function elements(items: readonly DrawingItem[]): string[] {
   const out: string[] = [];
@@ -87,13 +125,7 @@ function elements(items: readonly DrawingItem[]): string[] {
       continue;
     }
     closePath();
-    if (item.kind === 'polyline') out.push(`<path ${strokeOf(item)} d="${polylinePath(item)}"/>`);
-    else if (item.kind === 'text') out.push(textElement(item));
-    else {
-      const place = `x="${number(item.xMm)}" y="${number(item.yMm)}"`;
-      const size = `width="${number(item.widthMm)}" height="${number(item.heightMm)}"`;
-      out.push(`<rect ${place} ${size} fill="${colourValue(item.fill)}"/>`);
-    }
+    out.push(element(item));
   }
   closePath();
   return out;

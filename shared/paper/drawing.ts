@@ -16,6 +16,7 @@ export type DrawingRole =
   | 'trace'
   | 'leadName'
   | 'lineTime'
+  | 'ladder'
   | 'title'
   | 'caption'
   | 'settings'
@@ -55,6 +56,28 @@ export interface RectItem {
   fill: PaperColour;
 }
 
+export interface CircleItem {
+  kind: 'circle';
+  role: DrawingRole;
+  cxMm: number;
+  cyMm: number;
+  radiusMm: number;
+  fill: PaperColour | null;
+  stroke: PaperColour | null;
+  weightMm: number;
+}
+
+/** A closed shape. */
+export interface PolygonItem {
+  kind: 'polygon';
+  role: DrawingRole;
+  /** x0, y0, x1, y1, … in mm; at least three points. */
+  pointsMm: Float64Array;
+  fill: PaperColour | null;
+  stroke: PaperColour | null;
+  weightMm: number;
+}
+
 export type TextAnchor = 'start' | 'middle' | 'end';
 export type FontFamily = 'sans' | 'mono';
 export type FontWeight = 400 | 500 | 600;
@@ -76,7 +99,7 @@ export interface TextItem {
   colour: PaperColour;
 }
 
-export type DrawingItem = PolylineItem | LineItem | RectItem | TextItem;
+export type DrawingItem = PolylineItem | LineItem | RectItem | CircleItem | PolygonItem | TextItem;
 
 export interface Drawing {
   widthMm: number;
@@ -91,6 +114,7 @@ export interface Drawing {
 export function moveItem(item: DrawingItem, dxMm: number, dyMm: number): DrawingItem {
   switch (item.kind) {
     case 'polyline':
+    case 'polygon':
       return { ...item, pointsMm: item.pointsMm.map((value, i) => value + (i % 2 === 0 ? dxMm : dyMm)) };
     case 'line':
       return {
@@ -100,6 +124,8 @@ export function moveItem(item: DrawingItem, dxMm: number, dyMm: number): Drawing
         x2Mm: item.x2Mm + dxMm,
         y2Mm: item.y2Mm + dyMm,
       };
+    case 'circle':
+      return { ...item, cxMm: item.cxMm + dxMm, cyMm: item.cyMm + dyMm };
     case 'rect':
     case 'text':
       return { ...item, xMm: item.xMm + dxMm, yMm: item.yMm + dyMm };

@@ -1,16 +1,19 @@
+import { ladderOf } from '../ladder/ladder';
 import type { LeadName } from '../parameters/sheet';
 import type { SheetParameters } from '../parameters/strip-parameters';
 import { calibrationMv, calibrationPulse, calibrationWidthMm } from './calibration';
 import { moveItem, type DrawingItem, type LineItem, type PolylineItem, type TextItem } from './drawing';
 import { gridItems, type GridArea } from './grid';
+import { ladderHeightMm, ladderItems } from './ladder';
 import { leadLabels } from './lead-label';
 import { lineSpans, longestDrawnS, type TimeSpan } from './layout';
-import { mvToMm, sToMm } from './paper-scale';
+import { largeBoxMm, mvToMm, sToMm } from './paper-scale';
 import { stripDurationS, type PaperStrip } from './paper-strip';
 import {
   paperGapMm,
   paperWidthMm,
   segmentsAlongPaper,
+  traceInsetMm,
   type PlacedSegment,
   type RowSegment,
 } from './placed-segment';
@@ -37,6 +40,8 @@ export interface PanelOptions {
 
 /** Extra paper between the lines of a long strip, mm; only where a line has several rows. */
 const lineGapMm = 10;
+/** Room for a ladder under a line of paper: whole large boxes. */
+const bandMm = Math.ceil(ladderHeightMm / largeBoxMm) * largeBoxMm;
 /** The pen stops this far from the edge of the paper, mm. */
 const penStopMm = 0.5;
 /** Half the height of the stroke at a lead change, mm, and its dashes. */
@@ -153,14 +158,56 @@ function panelNotes(
   return notes;
 }
 
-/** y of each row's 0 mV line, from the upper edge of the paper, and the height of the paper. */
-function rowPlaces(rows: readonly Row[], sheet: SheetParameters): { baselines: number[]; heightMm: number } {
+/** Where rows and bands of a panel lie, from the upper edge of the paper. */
+interface RowPlaces {
+  /** y of each row's 0 mV line. */
+  baselines: number[];
+  /** Upper edge of the ladder's band under each line of paper. */
+  bandTops: number[];
+  heightMm: number;
+}
+
+/** Without a ladder all rows of all lines stand evenly; with one each line is a block with its band below. */
+function rowPlaces(rows: readonly Row[], sheet: SheetParameters): RowPlaces {
   const rowsPerLine = rows.filter((row) => row.line === 0).length;
   const profiles = rows.map((row) => row.profile);
-  const spacing = rowSpacing(profiles, rowsPerLine, sheet.gainMmPerMv);
-  const gapMm = rowsPerLine > 1 ? lineGapMm : 0;
-  const baselines = rows.map((row, i) => spacing.topMm + i * spacing.pitchMm + row.line * gapMm);
-  return { baselines, heightMm: baselines[baselines.length - 1] + spacing.bottomMm };
+  const { topMm, pitchMm, bottomMm } = rowSpacing(profiles, rowsPerLine, sheet.gainMmPerMv);
+  if (!sheet.ladder) {
+    const gapMm = rowsPerLine > 1 ? lineGapMm : 0;
+    const baselines = rows.map((row, i) => topMm + i * pitchMm + row.line * gapMm);
+    return { baselines, bandTops: [], heightMm: baselines[baselines.length - 1] + bottomMm };
+  }
+  const rowsMm = topMm + (rowsPerLine - 1) * pitchMm + bottomMm;
+  const lineMm = rowsMm + bandMm;
+  const lines = rows[rows.length - 1].line + 1;
+  return {
+    baselines: rows.map((row, i) => row.line * lineMm + topMm + (i - row.line * rowsPerLine) * pitchMm),
+    bandTops: Array.from({ length: lines }, (_, line) => line * lineMm + rowsMm),
+    heightMm: lines * lineMm,
+  };
+}
+
+/** The ladder under each line of paper, on a band without a grid. */
+function bandItems(
+  strip: PaperStrip,
+  sheet: SheetParameters,
+  lines: readonly TimeSpan[],
+  bandTops: readonly number[],
+  widthMm: number,
+): DrawingItem[] {
+  if (bandTops.length === 0) return [];
+  const marks = ladderOf(strip.events ?? []);
+  return bandTops.flatMap((topMm, line): DrawingItem[] => [
+    { kind: 'rect', role: 'page', xMm: 0, yMm: topMm, widthMm, heightMm: bandMm, fill: 'page' },
+    ...ladderItems(marks, [], {
+      ...lines[line],
+      xMm: traceInsetMm(sheet.speedMmPerS),
+      topMm: topMm + (bandMm - ladderHeightMm) / 2,
+      mmPerS: sheet.speedMmPerS,
+      names: ['Atria', 'AV', 'Ventricles'],
+      namesXMm: 0,
+    }),
+  ]);
 }
 
 /**
@@ -175,7 +222,7 @@ export function layoutPanel(strip: PaperStrip, sheet: SheetParameters, options: 
   const along = segmentsAlongPaper(sheet, drawnS, options.lineS);
   const widthMm = paperWidthMm(along, options.leastWidthMm);
   const rows = segmentsByRow(along).map((segments) => layRow(strip, sheet, segments, widthMm));
-  const { baselines, heightMm } = rowPlaces(rows, sheet);
+  const { baselines, bandTops, heightMm } = rowPlaces(rows, sheet);
   const area = { xMm: 0, yMm: 0, widthMm, heightMm };
   const segments = rows.flatMap((row, i) =>
     row.segments.map((segment) => ({ ...segment, baselineMm: baselines[i] })),
@@ -183,15 +230,16 @@ export function layoutPanel(strip: PaperStrip, sheet: SheetParameters, options: 
   const pulse = (baselineMm: number) =>
     calibrationPulse(paperGapMm, baselineMm, sheet.speedMmPerS, sheet.gainMmPerMv);
   const traces = segments.map((segment) => traceItems(strip, sheet, segment, heightMm));
+  const lines = lineSpans(sheet, drawnS, options.lineS);
   const items: DrawingItem[] = [
     ...gridItems(area, sheet.gridTint),
+    ...bandItems(strip, sheet, lines, bandTops, widthMm),
     ...segments.filter((segment) => segment.column > 0).map(leadChangeStroke),
     ...baselines.map(pulse),
     ...traces.flat(),
     ...rows.flatMap((row, i) => row.labels.map((label) => moveItem(label, 0, baselines[i]))),
   ];
   const stopped = stoppedLeads(segments, traces, heightMm);
-  const lines = lineSpans(sheet, drawnS, options.lineS);
   return { area, segments, items, notes: panelNotes(durationS, drawnS, lines, stopped) };
 }
 

@@ -1,3 +1,4 @@
+import type { StripEvent } from '../engine/events';
 import { leadNames, type LeadName } from '../parameters/sheet';
 import type { RecorderParameters } from '../parameters/strip-parameters';
 
@@ -7,6 +8,8 @@ export interface PaperStrip {
   /** mV; all twelve equally long, sample 0 at t = 0. NaN is a gap. */
   leads: Readonly<Record<LeadName, Float32Array>>;
   engineVersion: string;
+  /** For the ladder; a sheet without one needs none. */
+  events?: readonly StripEvent[];
   parameters: {
     title: string;
     seed: number;

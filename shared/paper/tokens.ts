@@ -23,6 +23,9 @@ export const inkColours = {
   ink: '#1f2a37',
   ink2: '#46515e',
   ink3: '#5d6672',
+  edge: '#867b68',
+  ruleStrong: '#cbc0ac',
+  copper: '#b4532a',
 } as const;
 
 type GridPart = keyof (typeof gridColours)[GridTint];
@@ -44,6 +47,11 @@ export const lineWeightsMm = {
   gridMajor: 0.18,
   gridMinor: 0.08,
   leadChange: 0.3,
+  ladderConduction: 0.4,
+  ladderStimulus: 0.5,
+  ladderSign: 0.3,
+  ladderLane: 0.15,
+  ladderHatch: 0.12,
 } as const;
 
 /** A size of type with its line height, mm. `caption` is the smallest and 9 pt high. */

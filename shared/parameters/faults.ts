@@ -36,6 +36,7 @@ const faultSchema = z
     }),
     toS: nullableNumberField({
       label: 'To',
+      emptyWords: 'it stays',
       unit: 's',
       min: 0,
       max: 86400,

@@ -13,6 +13,8 @@ export interface NumberFieldMeta {
   max: number;
   integer?: boolean;
   nullable?: boolean;
+  /** What null means, in a few words. */
+  emptyWords?: string;
   /** What practice usually sets; shown as a band on the ruler. */
   usual?: readonly [number, number];
   help: string;

@@ -56,6 +56,7 @@ function leadFields(defaults: LeadDefaults, usualSignalMv: readonly [number, num
     }),
     surfaceSpikeMv: nullableNumberField({
       label: 'Surface spike',
+      emptyWords: 'from output and polarity',
       unit: 'mV',
       min: 0,
       max: 50,

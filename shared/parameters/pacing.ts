@@ -68,6 +68,7 @@ const pacingObject = z.strictObject({
   }),
   sensorRateBpm: nullableNumberField({
     label: 'Sensor rate',
+    emptyWords: 'at rest',
     unit: '/min',
     min: 30,
     max: 200,
@@ -76,6 +77,7 @@ const pacingObject = z.strictObject({
   }),
   hysteresisRateBpm: nullableNumberField({
     label: 'Hysteresis rate',
+    emptyWords: 'off',
     unit: '/min',
     min: 20,
     max: 200,

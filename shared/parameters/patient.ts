@@ -80,6 +80,7 @@ export const patientSchema = z
     }),
     retrogradeConductionMs: nullableNumberField({
       label: 'Retrograde conduction',
+      emptyWords: 'none',
       unit: 'ms',
       min: 80,
       max: 450,

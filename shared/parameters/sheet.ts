@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { choiceField, section } from './fields';
+import { choiceField, flagField, section } from './fields';
 
 /** The twelve leads in the order in which everything lists them. */
 export const leadNames = ['I', 'II', 'III', 'aVR', 'aVL', 'aVF', 'V1', 'V2', 'V3', 'V4', 'V5', 'V6'] as const;
@@ -34,5 +34,9 @@ export const sheetSchema = section({
   gridTint: choiceField({ rose: 'Rose', sand: 'Sand', sage: 'Sage', slate: 'Slate', grey: 'Grey' }, 'rose', {
     label: 'Grid tint',
     help: 'Colour of the millimetre grid.',
+  }),
+  ladder: flagField(false, {
+    label: 'Ladder on sheets',
+    help: 'Draws the ladder diagram under each line of a sheet. It tells the answer.',
   }),
 });

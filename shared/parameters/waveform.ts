@@ -20,6 +20,7 @@ export const waveformSchema = section({
   }),
   qrsDurationMs: nullableNumberField({
     label: 'QRS duration',
+    emptyWords: 'as the heart model gives',
     unit: 'ms',
     min: 70,
     max: 240,

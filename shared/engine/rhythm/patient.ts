@@ -1,7 +1,8 @@
 import type { StripParameters } from '../../parameters/strip-parameters';
-import { msToUs, rateToIntervalUs } from '../../units';
+import { msToUs, rateToIntervalUs, usToS } from '../../units';
 import type {
   AtrialOrigin,
+  AvBlock,
   StripEvent,
   VentricularDepolarization,
   VentricularOrigin,
@@ -83,14 +84,22 @@ export function createPatient(
   if (rhythm) agenda.set('atrialRhythm', atrialStartUs);
   armEscape(startUs + startFraction(escapeUs));
 
-  const enterNode = (timeUs: number): void => {
+  /** Onset of the P wave whose impulse is in the node, and of the beat whose impulse is on its way up. */
+  let downFromUs = 0;
+  let upFromUs = 0;
+
+  /** Sends an atrial impulse into the node; returns where it is stopped at once, if it is. */
+  const enterNode = (timeUs: number): AvBlock | undefined => {
     if (agenda.dueUs('retrograde') !== null) {
       agenda.clear('retrograde');
       node.collide(timeUs);
-      return;
+      return 'collision';
     }
     const exitUs = node.enter(timeUs);
-    if (exitUs !== null) agenda.set('nodeExit', exitUs);
+    if (exitUs === null) return 'inNode';
+    agenda.set('nodeExit', exitUs);
+    downFromUs = timeUs;
+    return node.arrivalUs() === null ? 'belowNode' : undefined;
   };
 
   const depolarizeAtria = (origin: AtrialOrigin, timeUs: number): void => {
@@ -109,7 +118,11 @@ export function createPatient(
       agenda.set('atrialRhythm', timeUs + rhythm.cycleUs(timeUs));
     }
     if (origin !== 'premature') atrialFocus.beat(timeUs);
-    if (origin !== 'retrograde') enterNode(timeUs);
+    if (origin === 'retrograde') depolarization.conductedFromS = usToS(upFromUs);
+    else {
+      const blocked = enterNode(timeUs);
+      if (blocked) depolarization.blocked = blocked;
+    }
   };
 
   const scheduleVentricularSense = (
@@ -127,7 +140,9 @@ export function createPatient(
     const mayPass = retrogradeUs !== null && agenda.dueUs('retrograde') === null;
     const passes = node.enterFromBelow(timeUs, mayPass);
     agenda.clear('nodeExit');
-    if (passes && retrogradeUs !== null) agenda.set('retrograde', timeUs + retrogradeUs);
+    if (!passes || retrogradeUs === null) return;
+    upFromUs = timeUs;
+    agenda.set('retrograde', timeUs + retrogradeUs);
   };
 
   /** Starts a beat; one from below meets the conducted impulse within the fusion window, or cancels it. */
@@ -142,6 +157,7 @@ export function createPatient(
     const sources = [{ site, timeUs }];
     if (fuses) sources.push({ site: 'conducted', timeUs: arrivalUs });
     const depolarization = ventricles.depolarize(origin, sources);
+    if (fuses || site === 'conducted') depolarization.conductedFromS = usToS(downFromUs);
     emit(depolarization);
     armEscape(timeUs + escapeUs);
     if (origin !== 'premature') ventricularFocus.beat(timeUs);

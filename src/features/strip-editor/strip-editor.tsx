@@ -9,7 +9,7 @@ import { copyPicture } from './commands/copy-picture';
 import { useEditorShortcuts } from './commands/use-editor-shortcuts';
 import { DetailsDialog } from './components/details-dialog';
 import { LoadingStrip } from './components/loading-strip';
-import { ParameterPath } from './components/parameter-path';
+import { ParameterPath } from './groups/parameter-path';
 import { ReadingPanel } from './components/reading-panel';
 import { StaleDialog } from './components/stale-dialog';
 import { StartingPoint } from './components/starting-point';
@@ -77,6 +77,8 @@ export function StripEditor({ strip, initial, origin, onSavedAs, onDuplicate }: 
     (chosenBeats: readonly number[]) => changeView({ chosenBeats }),
     [changeView],
   );
+
+  const hoverBeat = useCallback((beat: number | null) => changeView({ hoverBeat: beat }), [changeView]);
 
   const finish = (done: Strip, words: string): void => {
     setSaved(done);
@@ -184,7 +186,7 @@ export function StripEditor({ strip, initial, origin, onSavedAs, onDuplicate }: 
         </div>
       )}
       {preview ? (
-        <StripView preview={preview} view={view} onChooseBeats={chooseBeats} />
+        <StripView preview={preview} view={view} onChooseBeats={chooseBeats} onHoverBeat={hoverBeat} />
       ) : (
         <LoadingStrip durationS={parameters.durationS} tint={parameters.sheet.gridTint} />
       )}
@@ -198,6 +200,7 @@ export function StripEditor({ strip, initial, origin, onSavedAs, onDuplicate }: 
             <ReadingPanel
               reading={preview.recorded.reading}
               chosenBeats={view.chosenBeats}
+              hoverBeat={view.hoverBeat}
               onChooseBeats={chooseBeats}
             />
           )}

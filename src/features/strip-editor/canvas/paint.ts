@@ -4,6 +4,7 @@ import { stimulusLeadMv } from '../../../../shared/engine/stimulus/stimulus-arte
 import { gridColours, type GridTint } from '../../../../shared/paper/tokens';
 import type { LeadName } from '../../../../shared/parameters/sheet';
 import type { TraceChoice } from '../state/view-state';
+import type { TintedColumn } from './beat-columns';
 import type { Row } from './rows';
 import { pxToTime, timeToPx, type ScreenScale } from './scale';
 
@@ -166,15 +167,15 @@ export function paintRow(
   }
 }
 
-/** Columns behind the trace for the chosen beats, teal at 11 %. */
+/** Columns behind the trace: teal at 11 % for chosen beats, at half of it under the pointer. */
 export function paintColumns(
   context: CanvasRenderingContext2D,
   scale: ScreenScale,
   window: ScreenWindow,
-  columns: readonly { fromS: number; toS: number }[],
+  columns: readonly TintedColumn[],
 ): void {
-  context.fillStyle = 'rgb(15 107 102 / 0.11)';
-  for (const { fromS, toS } of columns) {
+  for (const { fromS, toS, hovered } of columns) {
+    context.fillStyle = hovered ? 'rgb(15 107 102 / 0.055)' : 'rgb(15 107 102 / 0.11)';
     const x = timeToPx(scale, fromS) - window.scrollPx;
     context.fillRect(x, 0, (toS - fromS) * scale.pxPerS, window.heightPx);
   }

@@ -6,6 +6,7 @@ import { beatRanges, rangeWords } from './beat-ranges';
 interface ReadingPanelProps {
   reading: Reading;
   chosenBeats: readonly number[];
+  hoverBeat: number | null;
   onChooseBeats(beats: readonly number[]): void;
 }
 
@@ -36,6 +37,7 @@ function FindingRow({
   finding,
   reading,
   chosenBeats,
+  hoverBeat,
   onChooseBeats,
 }: ReadingPanelProps & { finding: Finding }) {
   const all = finding.beats.length === reading.beats.length && finding.beats.length > 1;
@@ -44,7 +46,7 @@ function FindingRow({
     beats.length > 0 &&
     beats.length === chosenBeats.length &&
     beats.every((beat) => chosenBeats.includes(beat));
-  const touched = finding.beats.some((beat) => chosenBeats.includes(beat)) && !all;
+  const touched = !all && finding.beats.some((beat) => chosenBeats.includes(beat) || beat === hoverBeat);
   const toggle = (beats: readonly number[]): void => onChooseBeats(isChosen(beats) ? [] : beats);
   return (
     <li className={classNames('flex gap-3 border-t border-rule px-3 py-2.5', touched && 'bg-teal-tint')}>

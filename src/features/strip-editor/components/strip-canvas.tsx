@@ -1,8 +1,9 @@
 import { useLayoutEffect, useRef, type KeyboardEvent, type PointerEvent } from 'react';
 import type { GridTint } from '../../../../shared/paper/tokens';
-import type { BeatColumn } from '../canvas/beat-columns';
+import type { TintedColumn } from '../canvas/beat-columns';
 import { paintCalipers } from '../canvas/calipers';
 import { paintColumns, paintGrid, paintRow, type ScreenWindow } from '../canvas/paint';
+import { prepareCanvas } from '../canvas/prepare-canvas';
 import type { RowLayout } from '../canvas/rows';
 import { pxToTime, type ScreenScale } from '../canvas/scale';
 import type { TraceChoice } from '../state/view-state';
@@ -17,29 +18,18 @@ export interface StripCanvasProps {
   speedMmPerS: number;
   tint: GridTint;
   trace: TraceChoice;
-  columns: readonly BeatColumn[];
+  columns: readonly TintedColumn[];
   /** null when the calipers are put away. */
   calipers: Calipers | null;
   label: string;
   onBeatStep(step: -1 | 1): void;
   onTimePicked(timeS: number): void;
+  /** null: the pointer left. */
+  onTimeHovered(timeS: number | null): void;
 }
 
 /** One px of the strip as a step of the calipers' arrow keys; ten with Shift. */
 const bigStep = 10;
-
-function prepare(
-  canvas: HTMLCanvasElement,
-  widthPx: number,
-  heightPx: number,
-): CanvasRenderingContext2D | null {
-  const ratio = window.devicePixelRatio || 1;
-  canvas.width = Math.round(widthPx * ratio);
-  canvas.height = Math.round(heightPx * ratio);
-  const context = canvas.getContext('2d');
-  context?.setTransform(ratio, 0, 0, ratio, 0, 0);
-  return context;
-}
 
 /** The strip in layers: paper, traces, then columns and calipers; each is repainted only when it changes. */
 export function StripCanvas(props: StripCanvasProps) {
@@ -53,7 +43,7 @@ export function StripCanvas(props: StripCanvasProps) {
   // In the commit itself, not after it: a passive effect would cost the preview a frame.
   useLayoutEffect(() => {
     if (!base.current || widthPx === 0) return;
-    const context = prepare(base.current, widthPx, heightPx);
+    const context = prepareCanvas(base.current, widthPx, heightPx);
     if (!context) return;
     const window: ScreenWindow = { scrollPx, widthPx, heightPx };
     paintGrid(context, scale, window, tint);
@@ -63,7 +53,7 @@ export function StripCanvas(props: StripCanvasProps) {
 
   useLayoutEffect(() => {
     if (!overlay.current || widthPx === 0) return;
-    const context = prepare(overlay.current, widthPx, heightPx);
+    const context = prepareCanvas(overlay.current, widthPx, heightPx);
     if (!context) return;
     const window: ScreenWindow = { scrollPx, widthPx, heightPx };
     paintColumns(context, scale, window, columns);
@@ -102,6 +92,8 @@ export function StripCanvas(props: StripCanvasProps) {
           if (calipers) calipers.mark(timeAt(event));
           else props.onTimePicked(timeAt(event));
         }}
+        onPointerMove={(event) => event.pointerType === 'mouse' && props.onTimeHovered(timeAt(event))}
+        onPointerLeave={() => props.onTimeHovered(null)}
         onKeyDown={onKeyDown}
       />
     </div>

@@ -3,12 +3,14 @@ import type { StripRecording } from '../../../../shared/engine/render';
 import { bandwidthLabel } from '../../../../shared/paper/bandwidth-label';
 import { leadNames, type LeadName } from '../../../../shared/parameters/sheet';
 import { BeatChip } from '../../../components/chip';
-import { beatColumns } from '../canvas/beat-columns';
+import { beatColumns, columnAt, tintedColumns } from '../canvas/beat-columns';
 import { caliperWords } from '../canvas/calipers';
 import { layoutRows, type Row } from '../canvas/rows';
 import { desktopPxPerMm, phonePxPerMm, screenScale, timeToPx } from '../canvas/scale';
 import type { Preview } from '../state/use-preview';
 import type { ViewState } from '../state/view-state';
+import { BeatStepper } from './beat-stepper';
+import { LadderCanvas } from './ladder-canvas';
 import { StripCanvas } from './strip-canvas';
 import { TimeAxis } from './time-axis';
 import { useCalipers } from './use-calipers';
@@ -20,6 +22,8 @@ interface StripViewProps {
   preview: Preview;
   view: ViewState;
   onChooseBeats(beats: readonly number[]): void;
+  /** The beat under the pointer; null for none. */
+  onHoverBeat(beat: number | null): void;
 }
 
 function rowsOf(preview: Preview, view: ViewState, leads: readonly LeadName[]): Omit<Row, 'baselinePx'>[] {
@@ -35,8 +39,8 @@ function rowsOf(preview: Preview, view: ViewState, leads: readonly LeadName[]): 
   return leads.flatMap((lead) => [row(lead, recorded), ...(compared ? [row(lead, compared)] : [])]);
 }
 
-/** Beats, strip and seconds on one time axis, in one window that scrolls sideways. */
-export function StripView({ preview, view, onChooseBeats }: StripViewProps) {
+/** Beats, strip, seconds and ladder on one time axis, in one window that scrolls sideways. */
+export function StripView({ preview, view, onChooseBeats, onHoverBeat }: StripViewProps) {
   const frame = useRef<HTMLDivElement>(null);
   const widthPx = useElementWidth(frame);
   const [scrollPx, setScrollPx] = useState(0);
@@ -53,9 +57,9 @@ export function StripView({ preview, view, onChooseBeats }: StripViewProps) {
     [preview, view, leads, scale],
   );
   const columns = useMemo(() => beatColumns(reading.beats, durationS), [reading, durationS]);
-  const chosen = useMemo(
-    () => columns.filter((column) => view.chosenBeats.includes(column.number)),
-    [columns, view.chosenBeats],
+  const tinted = useMemo(
+    () => tintedColumns(columns, view.chosenBeats, view.hoverBeat),
+    [columns, view.chosenBeats, view.hoverBeat],
   );
   const contentPx = Math.max(widthPx, Math.ceil(timeToPx(scale, durationS) + 4 * scale.pxPerMm));
 
@@ -76,8 +80,12 @@ export function StripView({ preview, view, onChooseBeats }: StripViewProps) {
     if (columns[number - 1]) choose(number);
   };
   const pick = (timeS: number): void => {
-    const column = columns.find(({ fromS, toS }) => timeS >= fromS && timeS < toS);
+    const column = columnAt(columns, timeS);
     onChooseBeats(column ? [column.number] : []);
+  };
+  const hover = (timeS: number | null): void => {
+    const number = timeS === null ? null : (columnAt(columns, timeS)?.number ?? null);
+    if (number !== view.hoverBeat) onHoverBeat(number);
   };
 
   const readout = calipers.marks && caliperWords(calipers.marks, sheet.speedMmPerS);
@@ -117,17 +125,36 @@ export function StripView({ preview, view, onChooseBeats }: StripViewProps) {
               speedMmPerS={sheet.speedMmPerS}
               tint={sheet.gridTint}
               trace={view.trace}
-              columns={chosen}
+              columns={tinted}
               calipers={view.calipers ? calipers : null}
               label={label}
               onBeatStep={stepBeat}
               onTimePicked={pick}
+              onTimeHovered={hover}
             />
           </div>
           <TimeAxis scale={scale} durationS={durationS} />
+          <div className="sticky left-0" style={{ width: widthPx }}>
+            <LadderCanvas
+              recording={recorded}
+              scale={scale}
+              pxPerMm={base}
+              scrollPx={scrollPx}
+              widthPx={widthPx}
+              windows={view.windows}
+              columns={tinted}
+              onTimePicked={pick}
+              onTimeHovered={hover}
+            />
+          </div>
         </div>
       </div>
-      <p role="status" className={view.calipers ? 'px-4 pb-1 text-dense text-plum tablet:px-6' : 'sr-only'}>
+      <BeatStepper beats={reading.beats} chosenBeats={view.chosenBeats} onStep={stepBeat} />
+      <p
+        role="status"
+        aria-label="Calipers"
+        className={view.calipers ? 'px-4 pb-1 text-dense text-plum tablet:px-6' : 'sr-only'}
+      >
         {view.calipers &&
           (readout ??
             'Set two marks on the strip; a third repeats their interval. Keys: arrows move, Enter sets, Escape clears.')}

@@ -1,3 +1,5 @@
+import { actingMode } from '../../../../shared/parameters/applies';
+import type { PacingParameters } from '../../../../shared/parameters/strip-parameters';
 import { leadNames, type LeadName } from '../../../../shared/parameters/sheet';
 import { Popover } from 'radix-ui';
 import { Button, buttonClass } from '../../../components/button';
@@ -25,6 +27,11 @@ const compareOptions = [
   { value: 'slowWave', label: 'Beside slow-wave' },
   { value: 'unfiltered', label: 'Beside unfiltered' },
 ] as const;
+
+/** A device without an open ear has no windows to show. */
+function sensesAnything(pacing: PacingParameters): boolean {
+  return pacing.source !== 'none' && !actingMode(pacing).endsWith('OO');
+}
 
 const durations = [6, 10, 30, 60];
 
@@ -156,6 +163,16 @@ export function ToolRow({ editor, view, onView }: ToolRowProps) {
       >
         Calipers
       </Button>
+      {sensesAnything(editor.parameters.pacing) && (
+        <Button
+          small
+          aria-pressed={view.windows}
+          onClick={() => onView({ windows: !view.windows })}
+          kind={view.windows ? 'primary' : 'plain'}
+        >
+          Sensing windows
+        </Button>
+      )}
     </div>
   );
 }

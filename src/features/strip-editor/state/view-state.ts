@@ -15,6 +15,10 @@ export interface ViewState {
   zoom: number;
   /** Numbers of the beats that are chosen. */
   chosenBeats: readonly number[];
+  /** The beat under the pointer. */
+  hoverBeat: number | null;
+  /** The device's sensing windows behind the ladder. */
+  windows: boolean;
 }
 
 export const startView: ViewState = {
@@ -24,6 +28,8 @@ export const startView: ViewState = {
   calipers: false,
   zoom: 1,
   chosenBeats: [],
+  hoverBeat: null,
+  windows: false,
 };
 
 export const zoomSteps = [0.5, 0.75, 1, 1.5, 2, 3] as const;

@@ -1,0 +1,89 @@
+import type { ParameterPath } from '../state/parameter-paths';
+
+/** Fields of a group that belong together, under one small heading. */
+export interface Section {
+  /** null: no heading, for the first fields of a group. */
+  title: string | null;
+  paths: readonly ParameterPath[];
+}
+
+const at = (prefix: string, ...keys: string[]): ParameterPath[] => keys.map((key) => `${prefix}.${key}`);
+
+export const patientSections: readonly Section[] = [
+  {
+    title: 'Atria',
+    paths: at('patient', 'atrialRhythm', 'atrialRateBpm', 'rateVariabilityPercent', 'respiratoryRateBpm'),
+  },
+  {
+    title: 'Conduction',
+    paths: at(
+      'patient',
+      'avConduction',
+      'prIntervalMs',
+      'conductedPerGroup',
+      'bundleBranchBlock',
+      'retrogradeConductionMs',
+    ),
+  },
+  {
+    title: 'Escape and premature beats',
+    paths: at(
+      'patient',
+      'escapeSite',
+      'escapeRateBpm',
+      'prematureVentricularPerMinute',
+      'prematureAtrialPerMinute',
+      'prematureCouplingMs',
+    ),
+  },
+];
+
+export const pacingSections: readonly Section[] = [
+  { title: null, paths: at('pacing', 'source', 'mode', 'ventricularChambers', 'magnetApplied') },
+  {
+    title: 'Rates',
+    paths: at(
+      'pacing',
+      'lowerRateBpm',
+      'magnetRateBpm',
+      'upperTrackingRateBpm',
+      'hysteresisRateBpm',
+      'sensorRateBpm',
+    ),
+  },
+  {
+    title: 'Atrium to ventricles',
+    paths: at('pacing', 'pacedAvDelayMs', 'sensedAvDelayMs', 'interventricularDelayMs'),
+  },
+  {
+    title: 'Refractory and blanking',
+    paths: at('pacing', 'pvarpMs', 'pvarpAfterEctopic', 'ventricularRefractoryMs', 'ventricularBlankingMs'),
+  },
+  { title: 'Safeguards', paths: at('pacing', 'safetyPacing', 'modeSwitching', 'modeSwitchRateBpm') },
+];
+
+export const waveformSections: readonly Section[] = [
+  { title: 'P wave', paths: at('waveform', 'pAmplitudeMv', 'pDurationMs') },
+  { title: 'QRS', paths: at('waveform', 'qrsDurationMs', 'qrsScale', 'axisRotationDeg') },
+  { title: 'Repolarization', paths: at('waveform', 'tScale', 'qtcMs') },
+];
+
+export const disturbanceSections: readonly Section[] = [
+  {
+    title: null,
+    paths: [
+      ...at(
+        'disturbance',
+        'baselineWanderMv',
+        'muscleMv',
+        'motionPerMinute',
+        'mainsMv',
+        'mainsHz',
+        'electrodeReversal',
+      ),
+      'seed',
+    ],
+  },
+];
+
+export const sheetSection: Section = { title: 'On the sheet', paths: at('sheet', 'gridTint', 'ladder') };
