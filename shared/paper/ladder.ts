@@ -1,7 +1,7 @@
 import { ladderLevels, type LadderMark } from '../ladder/ladder';
 import type { SensingWindow } from '../ladder/sensing-windows';
 import type { DrawingItem, LineItem, PolygonItem } from './drawing';
-import { textItem, textWidthMm } from './text';
+import { textItem, textWidthMm, type TextStyle } from './text';
 import { textStyles } from './text-styles';
 import { capHeightEm, lineWeightsMm, type PaperColour } from './tokens';
 
@@ -37,12 +37,15 @@ export interface LadderPlace {
   /** Names of the lanes, and where they begin. */
   names: readonly [atria: string, junction: string, ventricles: string];
   namesXMm: number;
+  /** Size of its type; that of captions on paper when absent. */
+  captionMm?: number;
 }
 
 interface Frame extends LadderPlace {
   x(timeS: number): number;
   y(level: number): number;
   shows(timeS: number): boolean;
+  style(name: 'ladderName' | 'ladderLetter' | 'ladderWindow'): TextStyle;
 }
 
 function frameOf(place: LadderPlace): Frame {
@@ -51,6 +54,12 @@ function frameOf(place: LadderPlace): Frame {
     x: (timeS) => place.xMm + (timeS - place.fromS) * place.mmPerS,
     y: (level) => place.topMm + outsideMm + level * laneMm,
     shows: (timeS) => timeS >= place.fromS && timeS < place.toS,
+    style: (name) => {
+      const style: TextStyle = textStyles[name];
+      return place.captionMm === undefined
+        ? style
+        : { ...style, size: { ...style.size, sizeMm: place.captionMm } };
+    },
   };
 }
 
@@ -81,7 +90,7 @@ function laneItems(frame: Frame): DrawingItem[] {
   const edges = [0, 1, 2, 3].map((level) =>
     stroke([left, frame.y(level)], [right, frame.y(level)], 'edge', lineWeightsMm.ladderLane),
   );
-  const style = textStyles.ladderName;
+  const style = frame.style('ladderName');
   const names = frame.names.map((name, lane) =>
     textItem(name, style, frame.namesXMm, frame.y(lane + 0.5) + (style.size.sizeMm * capHeightEm) / 2),
   );
@@ -147,7 +156,7 @@ function stimulusItems(mark: Extract<LadderMark, { kind: 'stimulus' }>, frame: F
     );
   }
   if (mark.label) {
-    items.push(textItem(mark.label, textStyles.ladderLetter, x + 0.7, edge + labelDropMm));
+    items.push(textItem(mark.label, frame.style('ladderLetter'), x + 0.7, edge + labelDropMm));
   }
   return items;
 }
@@ -232,11 +241,13 @@ function windowItems(window: SensingWindow, frame: Frame): DrawingItem[] {
           ),
           ...(window.kind === 'crosstalk' ? outline(left, right, top, bottom) : []),
         ];
-  const style = textStyles.ladderWindow;
+  const style = frame.style('ladderWindow');
   const width = textWidthMm(window.label, style);
   if (width + 1 > right - left) return box;
   const middle = (left + right) / 2;
   const baseline = (top + bottom) / 2 + (style.size.sizeMm * capHeightEm) / 2;
+  const words = textItem(window.label, style, middle, baseline, 'middle');
+  if (window.kind === 'alert') return [...box, words];
   return [
     ...box,
     {
@@ -248,7 +259,7 @@ function windowItems(window: SensingWindow, frame: Frame): DrawingItem[] {
       heightMm: style.size.sizeMm * 1.1,
       fill: 'page',
     },
-    textItem(window.label, style, middle, baseline, 'middle'),
+    words,
   ];
 }
 

@@ -53,6 +53,9 @@ function rangeError(
   return null;
 }
 
+/** Words for an empty field up to this length fit into a field of the usual width. */
+const shortWords = 9;
+
 /** Where the words for the usual range stand: under their band, but clear of the ruler's ends. */
 function usualAt([from, to]: readonly [number, number], min: number, max: number): string {
   const middle = (100 * ((from + to) / 2 - min)) / (max - min);
@@ -117,7 +120,7 @@ export function NumberField(props: NumberFieldProps) {
             onKeyDown={onKeyDown}
             className={classNames(
               'h-full rounded-chip bg-transparent pr-1 pl-2 text-right font-mono text-body placeholder:font-sans placeholder:text-dense placeholder:text-ink-3',
-              value === null && typed === null ? 'w-44' : 'w-20',
+              value === null && typed === null && (emptyWords?.length ?? 0) > shortWords ? 'w-44' : 'w-20',
             )}
           />
           {unit && <span className="text-dense text-ink-3">{unit}</span>}

@@ -52,6 +52,31 @@ const states: State[] = [
     act: (page) => openGroup(page, group),
   })),
   {
+    name: 'fault, sensing windows and a chosen beat',
+    path: '/strips/av-sequential-pacing',
+    ready: (page) => seen(page, 'stimulated in sequence'),
+    async act(page) {
+      await page.getByRole('button', { name: 'Beat 5', exact: true }).click();
+      await page.getByRole('button', { name: 'Sensing windows' }).click();
+      await openGroup(page, 'Leads and capture');
+      await page.getByRole('tab', { name: 'Faults' }).click();
+      await page.getByRole('button', { name: 'Add a fault' }).click();
+      await seen(page, 'a fault, with output enough');
+    },
+  },
+  {
+    name: 'chest pads',
+    path: '/strips/new',
+    ready: (page) => seen(page, 'No stimulus is given.'),
+    async act(page) {
+      await openGroup(page, 'Pacing');
+      await page.getByRole('combobox', { name: 'Pacing', exact: true }).click();
+      await page.getByRole('option', { name: 'Transcutaneous' }).click();
+      await openGroup(page, 'Leads and capture');
+      await seen(page, 'Size of the stimulus on the trace');
+    },
+  },
+  {
     name: 'twelve leads with an error at a field',
     path: '/strips/new',
     ready: (page) => seen(page, 'No stimulus is given.'),

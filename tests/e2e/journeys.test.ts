@@ -38,6 +38,10 @@ describe.skipIf(!hasBrowser())('in the browser', () => {
     await field.fill(value);
     await field.press('Enter');
   };
+  const choose = async (page: Page, label: string, option: string): Promise<void> => {
+    await page.getByRole('combobox', { name: label, exact: true }).click();
+    await page.getByRole('option', { name: option, exact: true }).click();
+  };
   async function saveAs(page: Page, title: string): Promise<void> {
     await page.getByRole('button', { name: 'Save strip' }).click();
     const dialog = page.getByRole('dialog');
@@ -52,10 +56,10 @@ describe.skipIf(!hasBrowser())('in the browser', () => {
     await signInAs(page, 'educator');
     await page.getByRole('link', { name: 'New strip' }).click();
     await reading(page).getByText('No stimulus is given.').waitFor();
-    await page.getByRole('radio', { name: 'Complete block' }).click();
+    await choose(page, 'AV conduction', 'Complete block');
     await type(page, 'Atrial rate', '42');
     await openGroup(page, 'Pacing');
-    await page.getByRole('radio', { name: 'Implanted' }).click();
+    await choose(page, 'Pacing', 'Implanted');
     await type(page, 'Lower rate', '66');
     await reading(page)
       .getByText('Atrium and right ventricle are stimulated in sequence, 180 ms apart.')
@@ -91,6 +95,7 @@ describe.skipIf(!hasBrowser())('in the browser', () => {
     await signInAs(page, 'educator');
     await page.goto('/strips/new');
     await openGroup(page, 'Pacing');
+    await choose(page, 'Pacing', 'Implanted');
     await type(page, 'Paced AV delay', '400');
     await page.getByText('400 ms is above 350 ms, the most allowed. The strip still shows 180 ms.').waitFor();
     await type(page, 'Lower rate', 'fast');
@@ -131,6 +136,117 @@ describe.skipIf(!hasBrowser())('in the browser', () => {
       .getByRole('list', { name: 'Beats' })
       .getByRole('button', { name: 'Beat 2', exact: true });
     expect(await chip.getAttribute('aria-pressed')).toBe('true');
+    // The sentence that names the beat is tinted with it, and the line under the ladder says what it is.
+    const line = page.getByRole('status', { name: 'Chosen beat' });
+    const tinted = reading(page).locator('li.bg-teal-tint');
+    const lost = reading(page).getByText('No stimulus in the right ventricle captures');
+    const words: string[] = [];
+    for (let step = 0; step < 12; step++) {
+      words.push(await line.innerText());
+      if (words.at(-1)?.includes('captures nothing')) break;
+      await strip.press('ArrowRight');
+    }
+    expect(words.at(-1)).toContain('stimulus from right ventricle captures nothing');
+    await expect
+      .poll(() => tinted.allInnerTexts())
+      .toContainEqual(expect.stringContaining(await lost.innerText()));
+    // The ladder is tinted in the same column: pointing at it there names the same beat.
+    const ladder = page.getByRole('img', { name: /^Ladder diagram/ });
+    const chosen = await page.locator('button[aria-pressed=true][aria-label^="Beat "]').first().boundingBox();
+    const box = await ladder.boundingBox();
+    if (!chosen || !box) throw new Error('not drawn');
+    const middle = chosen.x + chosen.width / 2;
+    await page.getByRole('button', { name: 'Previous beat' }).click();
+    await page.mouse.click(middle, box.y + box.height / 2);
+    expect(await line.innerText()).toBe(words.at(-1));
+    expect(Math.abs(box.x - ((await strip.boundingBox())?.x ?? 0))).toBeLessThan(0.01);
+  });
+
+  it('finds undersensing when the sensitivity is turned past the signal, and a stimulus on the T wave', async () => {
+    const page = await visit();
+    await signInAs(page, 'educator');
+    await page.goto('/strips/new');
+    await openGroup(page, 'Pacing');
+    await choose(page, 'Pacing', 'Implanted');
+    await choose(page, 'Mode', 'VVI');
+    await reading(page).getByText('Ventricular sensing is appropriate.').waitFor();
+    await openGroup(page, 'Leads and capture');
+    await page.getByRole('tab', { name: 'Right atrium, no lead' }).click();
+    await page.getByText('With the mode VVI there is no lead here').waitFor();
+    await page.getByRole('tab', { name: 'Right ventricle' }).click();
+    await type(page, 'Sensitivity', '12');
+    await reading(page)
+      .getByText(/Ventricular undersensing: .* QRS complexes are not sensed\./)
+      .waitFor();
+    await type(page, 'Sensitivity', '8');
+    await reading(page).getByText('Ventricular sensing is appropriate.').waitFor();
+    await page.getByRole('tab', { name: 'Faults' }).click();
+    await page.getByRole('button', { name: 'Add a fault' }).click();
+    await choose(page, 'Fault', 'Undersensing');
+    await reading(page)
+      .getByText(/Ventricular undersensing/)
+      .waitFor();
+    await page.getByRole('button', { name: 'Remove fault 1' }).click();
+    await reading(page).getByText('Ventricular sensing is appropriate.').waitFor();
+  });
+
+  it('finds the transcutaneous threshold as at the bedside, down and up again', async () => {
+    const page = await visit();
+    await signInAs(page, 'technician');
+    await page.goto('/strips/new');
+    await choose(page, 'AV conduction', 'Complete block');
+    await openGroup(page, 'Pacing');
+    await choose(page, 'Pacing', 'Transcutaneous');
+    await page.getByText('Confirm capture with a pulse.').waitFor();
+    const modes = page.getByRole('radiogroup', { name: 'Mode' }).getByRole('radio');
+    expect(await modes.allInnerTexts()).toEqual(['VOO', 'VVI']);
+    await openGroup(page, 'Leads and capture');
+    const every = reading(page).getByText('Every stimulus through the chest pads captures.');
+    const none = reading(page).getByText(
+      'No stimulus through the chest pads captures: the output is below the threshold.',
+    );
+    await every.waitFor();
+    for (const [current, outcome] of [
+      ['61', every],
+      ['60', every],
+      ['59', none],
+      ['40', none],
+      ['60', every],
+    ] as const) {
+      await type(page, 'Current', current);
+      await outcome.waitFor();
+    }
+    // A narrower pulse needs more: 60 mA at 10 ms is below the threshold of 72 mA.
+    await type(page, 'Pulse width', '10');
+    await none.waitFor();
+    await type(page, 'Current', '72');
+    await every.waitFor();
+  });
+
+  it('says why a combination is refused, and shows only what applies', async () => {
+    const page = await visit();
+    await signInAs(page, 'educator');
+    await page.goto('/strips/new');
+    await openGroup(page, 'Leads and capture');
+    await page.getByText('There is no pacemaker on this strip.').waitFor();
+    await openGroup(page, 'Pacing');
+    await choose(page, 'Pacing', 'Implanted');
+    await type(page, 'Lower rate', '130');
+    await page
+      .getByText(/upperTrackingRateBpm: 120 is not allowed; allowed: at least the lower rate/)
+      .waitFor();
+    await type(page, 'Lower rate', '60');
+    await type(page, 'Hysteresis rate', '70');
+    await page.getByText(/Allowed: null or below the lower rate/).waitFor();
+    expect(await page.getByText('Sensor rate').count()).toBe(0);
+    await choose(page, 'Mode', 'DDDR');
+    await page.getByText('Sensor rate').waitFor();
+    await page.getByRole('radiogroup', { name: 'Magnet applied' }).getByRole('radio', { name: 'On' }).click();
+    await page.getByText('A magnet lies on the device.').waitFor();
+    expect(await page.getByText('PVARP').count()).toBe(0);
+    await openGroup(page, 'Patient');
+    await choose(page, 'Atrial rhythm', 'Atrial flutter');
+    expect(await page.getByRole('textbox', { name: 'Atrial rate', exact: true }).inputValue()).toBe('300');
   });
 
   it('keeps a draft through a reload, and carries one in the address', async () => {

@@ -1,14 +1,16 @@
 import type { StimulusChamber, StimulusEvent, StripEvent } from '../events';
 
-export const stimulusChambers = [
-  'atrium',
-  'rightVentricle',
-  'leftVentricle',
-] as const satisfies StimulusChamber[];
+const leadChambers = ['atrium', 'rightVentricle', 'leftVentricle'] as const satisfies StimulusChamber[];
+const stimulusChambers = [...leadChambers, 'chest'] as const satisfies StimulusChamber[];
 
 export type CaptureState = 'all' | 'intermittent' | 'none' | 'notPaced';
-/** null: every stimulus met refractory tissue, so capture cannot be assessed. */
-export type CaptureByChamber = Record<StimulusChamber, CaptureState | null>;
+/**
+ * null: every stimulus met refractory tissue, so capture cannot be assessed. The chest is there only where it is
+ * stimulated.
+ */
+export type CaptureByChamber = Record<(typeof leadChambers)[number], CaptureState | null> & {
+  chest?: CaptureState | null;
+};
 
 export function stimuliOf(events: readonly StripEvent[], chamber: StimulusChamber): StimulusEvent[] {
   return events.filter(
@@ -32,9 +34,11 @@ function captureState(stimuli: readonly StimulusEvent[]): CaptureState | null {
 
 /** Whether the stimuli of each chamber capture. */
 export function captureByChamber(events: readonly StripEvent[]): CaptureByChamber {
-  return Object.fromEntries(
-    stimulusChambers.map((chamber) => [chamber, captureState(stimuliOf(events, chamber))]),
+  const state = (chamber: StimulusChamber): CaptureState | null => captureState(stimuliOf(events, chamber));
+  const byLead = Object.fromEntries(
+    leadChambers.map((chamber) => [chamber, state(chamber)]),
   ) as CaptureByChamber;
+  return stimuliOf(events, 'chest').length > 0 ? { ...byLead, chest: state('chest') } : byLead;
 }
 
 /** Chambers that are stimulated, captured or not. */

@@ -16,18 +16,23 @@ export function onsetsS(events: readonly StripEvent[], chamber: 'atrium' | 'vent
     .map((event) => event.timeS);
 }
 
-/** P onset to the onset of a QRS that came through the AV node; null for any other beat. */
+/**
+ * P onset to the onset of a QRS that came through the AV node; null for any other beat, and in flutter and fibrillation,
+ * which have no P wave to measure from.
+ */
 export function prIntervalMs(beat: RawBeat, partner: AtrialPartner): number | null {
   const event = beat.depolarization;
   const conducted = event?.sources.find((source) => source.site === 'conducted');
-  if (!conducted || !partner.depolarization) return null;
-  return (conducted.timeS - partner.depolarization.timeS) * msPerS;
+  if (!conducted || event?.conductedFromS === undefined) return null;
+  const origin = partner.depolarization?.origin;
+  if (origin === 'flutter' || origin === 'fibrillation') return null;
+  return (conducted.timeS - event.conductedFromS) * msPerS;
 }
 
-/** Atrial stimulus, or P onset where the atrium was not paced, to the first ventricular stimulus. */
+/** Atrial stimulus, or the onset of a P wave that the device sensed, to the first ventricular stimulus. */
 export function avIntervalMs(beat: RawBeat, partner: AtrialPartner): number | null {
   const ventricular = beat.stimuli[0];
-  const atrial = partner.stimulus ?? partner.depolarization;
+  const atrial = partner.stimulus ?? (partner.depolarization?.sensed ? partner.depolarization : null);
   if (!ventricular || !atrial) return null;
   return (ventricular.timeS - atrial.timeS) * msPerS;
 }

@@ -190,7 +190,7 @@ export function StripEditor({ strip, initial, origin, onSavedAs, onDuplicate }: 
       ) : (
         <LoadingStrip durationS={parameters.durationS} tint={parameters.sheet.gridTint} />
       )}
-      <div className="grid grow content-start desk:grid-cols-[minmax(0,1fr)_minmax(320px,30%)]">
+      <div className="grid grow grid-cols-[minmax(0,1fr)] content-start desk:grid-cols-[minmax(0,1fr)_minmax(320px,30%)]">
         <div className="pt-3.5">
           <StartingPoint onApply={(start) => editor.replace({ ...start, sheet: parameters.sheet })} />
           <ParameterPath editor={editor} />

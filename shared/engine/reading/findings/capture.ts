@@ -32,7 +32,7 @@ function lossFinding(
       : `${capitalised(numberWord(lost))} of ${numberWord(judged.length)} stimuli ${where} ${lost === 1 ? 'captures' : 'capture'} nothing`;
   return [
     {
-      id: `captureLost.${chamber}`,
+      id: reason === 'fault' ? `captureFault.${chamber}` : `captureLost.${chamber}`,
       text: `${subject}: ${reasonWords[reason]}.`,
       beats: beatsOf(reading, chamber, reason),
     },

@@ -2,7 +2,7 @@ import type { DepolarizationEvent, MarkerEvent, StripEvent } from '../../events'
 import type { BeatReading } from '../beat-reading';
 import type { Finding, ReadingFigures } from '../reading';
 import { isOversensed } from '../sensing';
-import { countOf } from '../words';
+import { countOf, numberWord } from '../words';
 import { numbersOf } from './chamber-words';
 
 type Chamber = 'atrium' | 'ventricle';
@@ -37,7 +37,7 @@ function missedFinding(
   const unheard = missed(events, chamber);
   if (unheard.length === 0) return [];
   const { signal, signals, title } = names[chamber];
-  const text = `${title} undersensing: ${countOf(unheard.length, signal, signals).toLowerCase().replace('qrs', 'QRS').replace('p wave', 'P wave')} ${unheard.length === 1 ? 'is' : 'are'} not sensed.`;
+  const text = `${title} undersensing: ${unheard.length === 1 ? `one ${signal} is` : `${numberWord(unheard.length)} ${signals} are`} not sensed.`;
   return [{ id: `undersensing.${chamber}`, text, beats: beatsAt(beats, unheard) }];
 }
 

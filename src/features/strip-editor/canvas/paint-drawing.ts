@@ -12,8 +12,6 @@ const usualLeastPx = 1;
 
 const families = { sans: '"IBM Plex Sans"', mono: '"IBM Plex Mono"' } as const;
 const textAligns = { start: 'left', middle: 'center', end: 'right' } as const;
-/** Text on a screen is never smaller, px. */
-const leastTextPx = 12;
 
 function trace(context: CanvasRenderingContext2D, points: Float64Array, pxPerMm: number): void {
   context.beginPath();
@@ -79,7 +77,7 @@ export function paintDrawing(
         break;
       case 'text':
         context.fillStyle = colourValue(item.colour);
-        context.font = `${item.weight} ${Math.max(leastTextPx, item.sizeMm * pxPerMm)}px ${families[item.family]}`;
+        context.font = `${item.weight} ${item.sizeMm * pxPerMm}px ${families[item.family]}`;
         context.textAlign = textAligns[item.anchor];
         context.textBaseline = 'alphabetic';
         context.fillText(item.text, item.xMm * pxPerMm, item.yMm * pxPerMm);

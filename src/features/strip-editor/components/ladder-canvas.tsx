@@ -25,6 +25,8 @@ interface LadderCanvasProps {
 
 const fullNames = ['Atria', 'AV junction', 'Ventricles'] as const;
 const shortNames = ['A', 'AV', 'V'] as const;
+/** Size of captions on a screen, px. */
+const captionPx = 12;
 /** Room that the full names need, px. */
 const namesPx = 78;
 
@@ -53,6 +55,7 @@ export function LadderCanvas(props: LadderCanvasProps) {
       toS: durationS,
       mmPerS: scale.pxPerS / pxPerMm,
       names: scale.leftPx > namesPx ? fullNames : shortNames,
+      captionMm: captionPx / pxPerMm,
       namesXMm: (Math.min(16, scale.leftPx * 0.2) - scrollPx) / pxPerMm,
     });
     paintDrawing(context, items, pxPerMm);

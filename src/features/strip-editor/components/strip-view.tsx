@@ -149,6 +149,12 @@ export function StripView({ preview, view, onChooseBeats, onHoverBeat }: StripVi
           </div>
         </div>
       </div>
+      {view.windows && (
+        <p className="px-4 text-caption text-ink-3 tablet:px-6">
+          Sensing windows: hatched, refractory (atria: AV interval and PVARP; ventricles: refractory period);
+          closely hatched, blanking; dotted outline, alert.
+        </p>
+      )}
       <BeatStepper beats={reading.beats} chosenBeats={view.chosenBeats} onStep={stepBeat} />
       <p
         role="status"

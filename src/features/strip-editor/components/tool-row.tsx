@@ -94,7 +94,7 @@ export function ToolRow({ editor, view, onView }: ToolRowProps) {
     <div
       role="toolbar"
       aria-label="View"
-      className="flex items-center gap-x-3 gap-y-2 overflow-x-auto px-4 py-2 tablet:flex-wrap tablet:overflow-x-visible tablet:px-6"
+      className="flex items-center gap-x-2 gap-y-2 overflow-x-auto px-4 py-2 tablet:flex-wrap tablet:overflow-x-visible tablet:px-6"
     >
       <LeadChoice editor={editor} view={view} onView={onView} />
       <Segments
@@ -132,7 +132,7 @@ export function ToolRow({ editor, view, onView }: ToolRowProps) {
         ]}
         onChange={(value) => editor.set('sheet.gainMmPerMv', Number(value))}
       />
-      <Segments
+      <SelectField
         small
         label="Duration"
         value={String(durationS)}

@@ -54,7 +54,7 @@ function FaultRow({ editor, index }: FaultProps) {
           {`With the mode ${mode} this fault strikes nothing: choose another chamber.`}
         </p>
       )}
-      <div className="grid gap-x-9 gap-y-5 tablet:grid-cols-2 wide:grid-cols-3">
+      <div className="grid grid-cols-[minmax(0,1fr)] gap-x-9 gap-y-5 tablet:grid-cols-2 wide:grid-cols-3">
         <ParameterField editor={editor} path={at('kind')} />
         <ParameterField editor={editor} path={at('chamber')} />
         <ParameterField editor={editor} path={at('proportion')} />

@@ -6,7 +6,11 @@ import type { Section } from './sections';
 
 /** Fields side by side, as many as the width allows. */
 export function FieldGrid({ children }: { children: ReactNode }) {
-  return <div className="grid gap-x-9 gap-y-5 tablet:grid-cols-2 wide:grid-cols-3">{children}</div>;
+  return (
+    <div className="grid grid-cols-[minmax(0,1fr)] gap-x-9 gap-y-5 tablet:grid-cols-2 wide:grid-cols-3">
+      {children}
+    </div>
+  );
 }
 
 interface FieldSectionProps {

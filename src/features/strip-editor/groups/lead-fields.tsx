@@ -82,7 +82,7 @@ function markersOf(parameters: StripParameters): Record<ParameterPath, Marker> {
 function Fields({ editor, paths }: GroupProps & { paths: readonly ParameterPath[] }) {
   const markers = markersOf(editor.parameters);
   return (
-    <div className="grid content-start gap-x-9 gap-y-5 tablet:grid-cols-2">
+    <div className="grid grid-cols-[minmax(0,1fr)] content-start gap-x-9 gap-y-5 tablet:grid-cols-2">
       {paths.map((path) => (
         <ParameterField key={path} editor={editor} path={path} marker={markers[path]} />
       ))}
@@ -102,7 +102,7 @@ function PermanentLead({ editor, lead }: GroupProps & { lead: LeadKey }) {
   }
   const paces = parameterApplies(parameters, path('amplitudeV'));
   return (
-    <div className="grid gap-9 pt-4 wide:grid-cols-[2fr_1fr]">
+    <div className="grid grid-cols-[minmax(0,1fr)] gap-9 pt-4 wide:grid-cols-[2fr_1fr]">
       <Fields
         editor={editor}
         paths={[

@@ -1,5 +1,6 @@
 import { useId, useState } from 'react';
 import { classNames } from '../../../lib/class-names';
+import { tabletQuery, useMediaQuery } from '../../../lib/use-media-query';
 import type { ParametersEditor } from '../state/use-parameters';
 import { stops } from './stops';
 
@@ -7,10 +8,12 @@ import { stops } from './stops';
 export function ParameterPath({ editor }: { editor: ParametersEditor }) {
   const [open, setOpen] = useState('patient');
   const panelId = useId();
+  const isTablet = useMediaQuery(tabletQuery);
   const current = stops.find((stop) => stop.id === open) ?? stops[0];
   return (
     <section aria-label="Parameters" className="px-4 pb-8 tablet:px-6">
-      <ol className="grid tablet:grid-cols-3 desk:grid-cols-6">
+      <h2 className="sr-only">Parameters</h2>
+      <ol className="grid grid-cols-[minmax(0,1fr)] tablet:grid-cols-3 desk:grid-cols-6">
         {stops.map((stop) => {
           const chosen = stop.id === current.id;
           const [first, second] = stop.lines(editor.parameters);
@@ -19,7 +22,7 @@ export function ParameterPath({ editor }: { editor: ParametersEditor }) {
               <button
                 type="button"
                 aria-expanded={chosen}
-                aria-controls={panelId}
+                aria-controls={chosen ? panelId : undefined}
                 onClick={() => setOpen(stop.id)}
                 className={classNames(
                   'group flex w-full flex-col border-b border-rule py-2.5 text-left desk:border-b-0 desk:pt-0',
@@ -46,8 +49,8 @@ export function ParameterPath({ editor }: { editor: ParametersEditor }) {
                 <span className="pr-3 text-dense text-ink-2">{first}</span>
                 <span className="min-h-4.5 pr-3 text-dense text-ink-2">{second}</span>
               </button>
-              {chosen && (
-                <div className="border-b border-rule py-4 tablet:hidden">
+              {chosen && !isTablet && (
+                <div id={panelId} className="border-b border-rule py-4">
                   <stop.Fields editor={editor} />
                 </div>
               )}
@@ -55,9 +58,11 @@ export function ParameterPath({ editor }: { editor: ParametersEditor }) {
           );
         })}
       </ol>
-      <div id={panelId} className="mt-4 hidden border-t border-rule pt-5 tablet:block">
-        <current.Fields editor={editor} />
-      </div>
+      {isTablet && (
+        <div id={panelId} className="mt-4 border-t border-rule pt-5">
+          <current.Fields editor={editor} />
+        </div>
+      )}
     </section>
   );
 }

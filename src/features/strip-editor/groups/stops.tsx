@@ -39,16 +39,13 @@ const conductionWords = ({ avConduction, prIntervalMs }: PatientParameters): str
     wenckebach: 'Wenckebach',
     mobitzTwo: 'Mobitz II',
     twoToOne: '2:1',
-    complete: 'complete block',
+    complete: 'Complete block',
   })[avConduction];
 
 function focusWords(patient: PatientParameters): string {
   const premature = patient.prematureVentricularPerMinute + patient.prematureAtrialPerMinute;
-  const escape =
-    patient.escapeSite === 'none'
-      ? 'No escape'
-      : `Escape ${patient.escapeSite}, ${patient.escapeRateBpm} /min`;
-  return premature > 0 ? `${escape}, premature beats` : escape;
+  if (premature > 0) return 'premature beats';
+  return patient.escapeSite === 'none' ? 'no escape' : `${patient.escapeSite} ${patient.escapeRateBpm} /min`;
 }
 
 const sourceWords: Record<PacingParameters['source'], string> = {
@@ -98,7 +95,7 @@ export const stops: readonly Stop[] = [
   {
     id: 'patient',
     title: 'Patient',
-    lines: ({ patient }) => [`${atriaWords(patient)}, ${conductionWords(patient)}`, focusWords(patient)],
+    lines: ({ patient }) => [atriaWords(patient), `${conductionWords(patient)}, ${focusWords(patient)}`],
     Fields: ({ editor }) => <FieldSections editor={editor} sections={patientSections} />,
   },
   { id: 'pacing', title: 'Pacing', lines: pacingLines, Fields: PacingFields },
