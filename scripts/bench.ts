@@ -28,7 +28,7 @@ if (process.argv.includes('--json')) {
     [
       `10 s, twelve leads, diagnostic: ${strip12Lead10s.medianMs.toFixed(2)} ms without pre-roll; ${ratioWords()}`,
       `pre-roll of 30 s: ${strip12Lead10s.preRollMs.toFixed(2)} ms more per strip`,
-      `one hour streamed: ${hourStreamed.timesRealTime.toFixed(0)} × real time, at most ${hourStreamed.peakMb.toFixed(0)} MB`,
+      `one hour of a difficult DDD patient streamed: ${hourStreamed.timesRealTime.toFixed(0)} × real time; resident memory at most ${hourStreamed.peakFirstQuarterMb.toFixed(0)} MB in its first quarter, ${hourStreamed.peakLastQuarterMb.toFixed(0)} MB in its last`,
       previewWords(),
       '',
     ].join('\n'),

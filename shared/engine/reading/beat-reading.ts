@@ -25,6 +25,8 @@ export interface BeatReading {
   origin: BeatOrigin;
   /** Ventricular chambers stimulated. */
   stimuli: StimulusChamber[];
+  /** When each was given, in the same order. */
+  stimulusTimesS: number[];
   /** Whether a ventricular stimulus captured; null without one. */
   captured: boolean | null;
   /** Why stimuli that captured nothing did not. */
@@ -65,6 +67,7 @@ export function readBeat(
     timeS: beat.timeS,
     origin: beatOrigin(beat),
     stimuli: beat.stimuli.map((stimulus) => stimulus.chamber),
+    stimulusTimesS: beat.stimuli.map((stimulus) => stimulus.timeS),
     captured: beatCaptured(beat),
     reasons: captureFailures(beat),
     fusion: depolarization?.fusion ?? false,

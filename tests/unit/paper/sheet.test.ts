@@ -6,6 +6,9 @@ import { textWidthMm } from '../../../shared/paper/text';
 import { typeSizes } from '../../../shared/paper/tokens';
 import { parseStripParameters } from '../../../shared/parameters/parse';
 import type { SheetParameters, StripParametersInput } from '../../../shared/parameters/strip-parameters';
+import { renderStrip } from '../../../shared/engine/render';
+import { ladderHeightMm } from '../../../shared/paper/ladder';
+import { buildStrip } from '../../support/strips';
 import { coordinates, lines, polylines, texts } from './items';
 import { pacedShape, stripOf, type Shape } from './synthetic-strip';
 
@@ -258,5 +261,46 @@ describe('refusals and repeatability', () => {
 
   it('gives the same drawing again', () => {
     expect(sheetOf({ sheet: { layout: '3x4+3' } })).toEqual(sheetOf({ sheet: { layout: '3x4+3' } }));
+  });
+});
+
+describe('ladder on request', () => {
+  const recording = (ladder: boolean, durationS = 10) =>
+    renderStrip(
+      buildStrip({
+        durationS,
+        patient: { avConduction: 'complete' },
+        pacing: { source: 'implanted' },
+        sheet: { ladder, layout: 'single' },
+      }),
+    );
+
+  it('stands below the trace, each stroke at the x of its stimulus, and is absent otherwise', () => {
+    const strip = recording(true);
+    const sheet = layoutStripSheet(strip, strip.parameters.sheet);
+    const plain = layoutStripSheet(recording(false), recording(false).parameters.sheet);
+    expect(lines(plain, 'ladder')).toEqual([]);
+    expect(sheet.heightMm).toBeGreaterThanOrEqual(plain.heightMm + ladderHeightMm);
+    const strokes = lines(sheet, 'ladder').filter(
+      (item) => item.colour === 'copper' && item.x1Mm === item.x2Mm,
+    );
+    const [segment] = sheet.segments;
+    const stimuli = strip.events.filter((event) => event.type === 'stimulus');
+    expect(strokes.map((item) => item.x1Mm)).toEqual(
+      stimuli.map((stimulus) => expect.closeTo(segment.xMm + 25 * stimulus.timeS, 9) as number),
+    );
+    for (const stroke of strokes) expect(stroke.y1Mm).toBeGreaterThan(segment.baselineMm);
+    expect(texts(sheet, 'ladder').map((item) => item.text)).toEqual(['Atria', 'AV', 'Ventricles']);
+  });
+
+  it('stands under every line of a long strip, and no line runs over its edge', () => {
+    const strip = recording(true, 25);
+    const sheet = layoutStripSheet(strip, strip.parameters.sheet);
+    expect(texts(sheet, 'ladder').filter((item) => item.text === 'AV')).toHaveLength(3);
+    const left = sheet.segments[0].xMm;
+    for (const line of lines(sheet, 'ladder')) {
+      expect(Math.min(line.x1Mm, line.x2Mm)).toBeGreaterThanOrEqual(left - 1.01);
+      expect(Math.max(line.x1Mm, line.x2Mm)).toBeLessThanOrEqual(left + 250 + 1.01);
+    }
   });
 });
