@@ -38,6 +38,26 @@ export function Component() {
           share a beat. When the stimulus comes too late to change anything, the beat is pseudofusion.
         </p>
       </Section>
+      <Section title="The ladder">
+        <p>
+          Three lanes in the order of the impulse: atria, AV junction, ventricles. A copper stroke from
+          outside is a stimulus; a copper dot on the lane is capture, a ring with a bar is none. Ink dots are
+          the heart’s own beats, filled diamonds escapes. Lines are conduction, upwards when it is retrograde;
+          two bars end a blocked impulse; a hollow diamond is fusion, facing bars are impulses that meet
+          without it.
+        </p>
+        <p>
+          Sensing windows show when the pacemaker listens: dotted where it acts on what it hears, hatched
+          where it only notes it, closely hatched where it is deaf.
+        </p>
+      </Section>
+      <Section title="Finding a threshold">
+        <p>
+          Turn the output down until capture is lost, and up until it is regained. With chest pads the
+          artefact can hide a QRS or look like one: confirm capture with a pulse. Which output to leave is for
+          local protocols and licensed practice.
+        </p>
+      </Section>
       <Section title="What bandwidth does">
         <p>
           A 0.4 ms spike holds little below 150 Hz. A diagnostic recorder (0.05–150 Hz) leaves about a seventh
@@ -49,8 +69,9 @@ export function Component() {
         <p>
           The groups follow the impulse: patient, pacing, leads and capture, waveform, disturbance, recorder.
           Drag a ruler or type a value, also with a unit (“1.2 s”, “800 uV”); for rates an interval will do.
-          Arrow keys on the strip walk the beats. With the calipers, a third mark repeats the measured
-          interval. Ctrl Z undoes, Ctrl S saves.
+          Only what acts on this strip is shown. Arrow keys on the strip walk the beats, in the ladder and the
+          reading too. With the calipers, a third mark repeats the measured interval. Ctrl Z undoes, Ctrl S
+          saves.
         </p>
       </Section>
       <Section title="Cautions">

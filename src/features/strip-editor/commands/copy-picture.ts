@@ -1,9 +1,13 @@
 import type { StripRecording } from '../../../../shared/engine/render';
 import { bandwidthLabel } from '../../../../shared/paper/bandwidth-label';
+import type { DrawingItem } from '../../../../shared/paper/drawing';
+import { ladderHeightMm, ladderItems } from '../../../../shared/paper/ladder';
+import { ladderOf } from '../../../../shared/ladder/ladder';
 import { leadNames } from '../../../../shared/parameters/sheet';
 import { paintGrid, paintRow, ink, type ScreenWindow } from '../canvas/paint';
+import { paintDrawing } from '../canvas/paint-drawing';
 import { layoutRows } from '../canvas/rows';
-import { screenScale, timeToPx } from '../canvas/scale';
+import { screenScale, timeToPx, type ScreenScale } from '../canvas/scale';
 
 /** Pixels a mm: 203 dots per inch, sharp on slides. */
 const pxPerMm = 8;
@@ -33,6 +37,20 @@ function paintTexts(
   context.fillText('Synthetic teaching strip, not a patient recording', marginPx, heightPx - 16);
 }
 
+/** The ladder under the strip, when the sheet asks for it. */
+function pictureLadder({ events, parameters }: StripRecording, scale: ScreenScale): DrawingItem[] {
+  return ladderItems(ladderOf(events), [], {
+    xMm: scale.leftPx / pxPerMm,
+    topMm: 0,
+    fromS: 0,
+    toS: parameters.durationS,
+    mmPerS: scale.pxPerS / pxPerMm,
+    names: ['Atria', 'AV', 'Ventricles'],
+    namesXMm: 0,
+    captionMm: 18 / pxPerMm,
+  });
+}
+
 function drawPicture(recording: StripRecording, twelve: boolean): HTMLCanvasElement {
   const { sheet, durationS } = recording.parameters;
   const scale = screenScale(sheet, pxPerMm, 1);
@@ -46,9 +64,10 @@ function drawPicture(recording: StripRecording, twelve: boolean): HTMLCanvasElem
     widthPx: Math.ceil(timeToPx(scale, durationS) + 4 * pxPerMm),
     heightPx: layout.heightPx,
   };
+  const ladderPx = sheet.ladder ? ladderHeightMm * pxPerMm : 0;
   const canvas = document.createElement('canvas');
   canvas.width = window.widthPx + 2 * marginPx;
-  canvas.height = window.heightPx + headPx + footPx;
+  canvas.height = window.heightPx + ladderPx + headPx + footPx;
   const context = canvas.getContext('2d');
   if (!context) throw new Error('no canvas');
   context.fillStyle = '#ffffff';
@@ -62,6 +81,10 @@ function drawPicture(recording: StripRecording, twelve: boolean): HTMLCanvasElem
   paintGrid(context, scale, window, sheet.gridTint);
   for (const row of layout.rows) paintRow(context, scale, window, row, 'recorded');
   context.restore();
+  if (sheet.ladder) {
+    context.translate(marginPx, headPx + window.heightPx);
+    paintDrawing(context, pictureLadder(recording, scale), pxPerMm);
+  }
   return canvas;
 }
 
