@@ -9,7 +9,10 @@ interface LeadDefaults {
 }
 
 /** The electrical fields that every pacing lead has. Defaults: timing-cycles rules; usual ranges: common practice, no source. */
-function leadFields(defaults: LeadDefaults, usualSignalMv: readonly [number, number]) {
+function leadFields(
+  defaults: LeadDefaults,
+  usual: { signalMv: readonly [number, number]; sensitivityMv: readonly [number, number] },
+) {
   return {
     polarity: choiceField({ bipolar: 'Bipolar', unipolar: 'Unipolar' }, 'bipolar', {
       label: 'Polarity',
@@ -44,6 +47,7 @@ function leadFields(defaults: LeadDefaults, usualSignalMv: readonly [number, num
       unit: 'mV',
       min: 0.1,
       max: 20,
+      usual: usual.sensitivityMv,
       help: 'Signals of at least this size are sensed; a smaller number senses more.',
     }),
     signalMv: numberField(defaults.signalMv, {
@@ -51,7 +55,7 @@ function leadFields(defaults: LeadDefaults, usualSignalMv: readonly [number, num
       unit: 'mV',
       min: 0,
       max: 30,
-      usual: usualSignalMv,
+      usual: usual.signalMv,
       help: 'Size of the electrogram at this lead.',
     }),
     surfaceSpikeMv: nullableNumberField({
@@ -72,7 +76,7 @@ export const atrialLeadSchema = section({
   }),
   ...leadFields(
     { amplitudeV: 2.5, pulseWidthMs: 0.4, captureThresholdV: 0.75, sensitivityMv: 0.5, signalMv: 3 },
-    [1.5, 5],
+    { signalMv: [1.5, 5], sensitivityMv: [0.3, 1] },
   ),
 });
 
@@ -90,7 +94,7 @@ export const rightVentricularLeadSchema = section({
   ),
   ...leadFields(
     { amplitudeV: 2.5, pulseWidthMs: 0.4, captureThresholdV: 0.75, sensitivityMv: 2.5, signalMv: 10 },
-    [5, 15],
+    { signalMv: [5, 15], sensitivityMv: [2, 3] },
   ),
 });
 
@@ -102,6 +106,6 @@ export const leftVentricularLeadSchema = section({
   ),
   ...leadFields(
     { amplitudeV: 3, pulseWidthMs: 0.5, captureThresholdV: 1.25, sensitivityMv: 2.5, signalMv: 10 },
-    [5, 15],
+    { signalMv: [5, 15], sensitivityMv: [2, 3] },
   ),
 });

@@ -7,6 +7,7 @@ import type { ParameterPath } from '../state/parameter-paths';
 import type { ParametersEditor } from '../state/use-parameters';
 import { FaultFields } from './fault-fields';
 import { ParameterField } from './parameter-field';
+import { chestPaths, leadPaths, temporaryLeadPaths } from './sections';
 import { StrengthDuration } from './strength-duration';
 
 interface GroupProps {
@@ -92,7 +93,6 @@ function Fields({ editor, paths }: GroupProps & { paths: readonly ParameterPath[
 
 function PermanentLead({ editor, lead }: GroupProps & { lead: LeadKey }) {
   const { parameters } = editor;
-  const path = (key: string): ParameterPath => `pacing.${lead}.${key}`;
   if (!hasLead(parameters, lead)) {
     return (
       <p className="pt-4 text-body text-ink-2">
@@ -100,45 +100,14 @@ function PermanentLead({ editor, lead }: GroupProps & { lead: LeadKey }) {
       </p>
     );
   }
-  const paces = parameterApplies(parameters, path('amplitudeV'));
+  const paces = parameterApplies(parameters, `pacing.${lead}.amplitudeV`);
   return (
     <div className="grid grid-cols-[minmax(0,1fr)] gap-9 pt-4 wide:grid-cols-[2fr_1fr]">
-      <Fields
-        editor={editor}
-        paths={[
-          path('site'),
-          ...(lead === 'rightVentricularLead' ? ['pacing.hisCapture'] : []),
-          path('polarity'),
-          path('amplitudeV'),
-          path('pulseWidthMs'),
-          path('captureThresholdV'),
-          path('sensitivityMv'),
-          path('signalMv'),
-          path('surfaceSpikeMv'),
-        ]}
-      />
+      <Fields editor={editor} paths={leadPaths(lead)} />
       {paces && <StrengthDuration lead={parameters.pacing[lead]} />}
     </div>
   );
 }
-
-const temporaryLeadPaths: readonly ParameterPath[] = [
-  'pacing.transvenous.outputMa',
-  'pacing.transvenous.captureThresholdMa',
-  'pacing.transvenous.sensitivityMv',
-  'pacing.rightVentricularLead.signalMv',
-  'pacing.rightVentricularLead.site',
-  'pacing.hisCapture',
-  'pacing.rightVentricularLead.polarity',
-  'pacing.rightVentricularLead.pulseWidthMs',
-  'pacing.rightVentricularLead.surfaceSpikeMv',
-];
-const chestPaths: readonly ParameterPath[] = [
-  'pacing.transcutaneous.currentMa',
-  'pacing.transcutaneous.captureThresholdMa',
-  'pacing.transcutaneous.pulseWidthMs',
-  'pacing.transcutaneous.artefactMv',
-];
 
 function TabPage({ editor, tab }: GroupProps & { tab: TabKey }) {
   switch (tab) {

@@ -87,3 +87,48 @@ export const disturbanceSections: readonly Section[] = [
 ];
 
 export const sheetSection: Section = { title: 'On the sheet', paths: at('sheet', 'gridTint', 'ladder') };
+
+/** Fields of a permanent lead. */
+export function leadPaths(
+  lead: 'atrialLead' | 'rightVentricularLead' | 'leftVentricularLead',
+): ParameterPath[] {
+  return [
+    `pacing.${lead}.site`,
+    ...(lead === 'rightVentricularLead' ? ['pacing.hisCapture'] : []),
+    ...at(
+      `pacing.${lead}`,
+      'polarity',
+      'amplitudeV',
+      'pulseWidthMs',
+      'captureThresholdV',
+      'sensitivityMv',
+      'signalMv',
+      'surfaceSpikeMv',
+    ),
+  ];
+}
+
+export const temporaryLeadPaths: readonly ParameterPath[] = [
+  ...at('pacing.transvenous', 'outputMa', 'captureThresholdMa', 'sensitivityMv'),
+  'pacing.rightVentricularLead.signalMv',
+  'pacing.rightVentricularLead.site',
+  'pacing.hisCapture',
+  ...at('pacing.rightVentricularLead', 'polarity', 'pulseWidthMs', 'surfaceSpikeMv'),
+];
+
+export const chestPaths: readonly ParameterPath[] = at(
+  'pacing.transcutaneous',
+  'currentMa',
+  'captureThresholdMa',
+  'pulseWidthMs',
+  'artefactMv',
+);
+
+/** Fields of the recorder, which have controls of their own. */
+export const recorderPaths: readonly ParameterPath[] = at(
+  'recorder',
+  'bandwidth',
+  'mainsNotchHz',
+  'sampleRateHz',
+  'resolutionUv',
+);
