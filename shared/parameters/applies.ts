@@ -77,6 +77,8 @@ const rules: Readonly<Record<string, Rule>> = {
   'patient.prematureCouplingMs': ({ patient }) =>
     patient.prematureVentricularPerMinute > 0 || patient.prematureAtrialPerMinute > 0,
 
+  'patient.injury.stElevationMv': ({ patient }) => patient.injury.territory !== 'none',
+
   'pacing.mode': paced,
   'pacing.ventricularChambers': all(ventricularPacing, ({ pacing }) => !pacesBothVentricles(pacing.mode)),
   'pacing.lowerRateBpm': (parameters) => paced(parameters) && !underMagnet(parameters),

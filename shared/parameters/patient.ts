@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { injurySchema } from './injury';
 import { choiceField, dependentNumberField, nullableNumberField, numberField } from './fields';
 
 const atrialRhythms = {
@@ -127,6 +128,7 @@ export const patientSchema = z
       usual: [400, 600],
       help: 'From a beat to the premature one; at most 0.65 of the last interval.',
     }),
+    injury: injurySchema,
   })
   .transform((patient) => ({
     ...patient,

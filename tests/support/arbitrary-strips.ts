@@ -36,6 +36,12 @@ const patient = fc.record({
   prematureVentricularPerMinute: some(fc.oneof(fc.constant(0), between(1, 60))),
   prematureAtrialPerMinute: some(fc.oneof(fc.constant(0), between(1, 60))),
   prematureCouplingMs: some(between(250, 800)),
+  injury: some(
+    fc.record({
+      territory: fc.constantFrom(...(['none', 'anterior', 'inferior', 'lateral', 'posterior'] as const)),
+      stElevationMv: real(0, 0.5),
+    }),
+  ),
 });
 
 const fault = fc

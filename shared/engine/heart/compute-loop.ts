@@ -2,6 +2,7 @@ import { degToRad } from '../../units';
 import { activate, type Activation, type ActivationPattern } from './activation';
 import { sumDepolarization } from './depolarization';
 import { sumDipole } from './dipole';
+import { injuredVentricles } from './injury';
 import type { DipoleTrace } from './dipole-trace';
 import { measureLoop, measureQrs, measureTEnd, type VentricularMeasures } from './loop-measures';
 import { actionPotentialDurations } from './repolarization';
@@ -70,7 +71,7 @@ export function activateToDuration(
 /** Ventricular complex that follows an activation. */
 export function loopFromActivation(
   activation: Activation,
-  { rateFactor, qrsScale, tScale, axisRotationDeg }: VentricularShape,
+  { rateFactor, qrsScale, tScale, axisRotationDeg, injury }: VentricularShape,
   ventricles: Ventricles = fittedVentricles(),
 ): VentricularLoop {
   const durations = actionPotentialDurations(ventricles, activation, rateFactor);
@@ -79,7 +80,13 @@ export function loopFromActivation(
   // Both start at the same sample; depolarization is zero after its own end.
   const depolarizationAt = (at: number): number => depolarization.values[at] ?? 0;
   const repolarizationAt = (at: number): number => total.values[at] - depolarizationAt(at);
-  const loop = toLoop(total, (at) => qrsScale * (depolarizationAt(at) + tScale * repolarizationAt(at)));
+  // Muscle that lost part of its plateau: what is missing is the same for any scale of T.
+  const hurt = injury && sumDipole(injuredVentricles(injury), activation, durations, rateFactor);
+  const injuryAt = (at: number): number => (hurt ? hurt.values[at] - total.values[at] : 0);
+  const loop = toLoop(
+    total,
+    (at) => qrsScale * (depolarizationAt(at) + tScale * repolarizationAt(at) + injuryAt(at)),
+  );
   if (axisRotationDeg !== 0) rotateFrontal(loop, axisRotationDeg);
   const qrs = measureDepolarization(depolarization, activation, qrsScale);
   const tEndMs = measureTEnd(toLoop(total, repolarizationAt), qrs.offsetMs);

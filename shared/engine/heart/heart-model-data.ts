@@ -156,5 +156,20 @@ export const apdModel = {
   },
 } as const satisfies { depth: Record<Wall, number> } & Record<string, unknown>;
 
+/**
+ * Transmural injury: muscle around a centre loses part of its plateau, as a bell with this radius. Centres were chosen by
+ * scanning the surface for the expected native ST pattern (LAD, RCA, LCX and the inferobasal wall).
+ */
+export const injuryModel = {
+  radiusMm: 24,
+  centres: {
+    anterior: [24.9, -5.4, -30.2],
+    inferior: [40.9, 4.5, 23.7],
+    lateral: [4.3, 22.1, -25.7],
+    posterior: [-5.7, 32.1, 10.7],
+  },
+} as const satisfies { radiusMm: number; centres: Record<string, Vector3> };
+export type InjuredTerritory = keyof (typeof injuryModel)['centres'];
+
 /** mV per 1000 mm² of unbalanced surface; set so that the normal R in lead II is 1.15 mV. */
 export const dipoleScale = 0.67436;

@@ -14,6 +14,8 @@ export interface VentricularLeadMeasures {
   netMv: number;
   /** Value at the QRS offset. */
   jMv: number;
+  /** Value 20 ms after it. */
+  stMv: number;
   /** Value of largest magnitude from 40 ms after the QRS offset on. */
   tMv: number;
   /** Largest negative value before the peak of R; absent when there is none. */
@@ -42,6 +44,8 @@ const qrsSpeedMvPerMs = 0.003;
 /** … looked for from this long before the first to this long after the last activation, ms. */
 const qrsLeadInMs = 20;
 const qrsLeadOutMs = 25;
+/** ST is read this long after the QRS offset, ms (engine contract). */
+export const stDelayMs = 20;
 /** T is looked for from here on after the QRS offset, ms. */
 const tSearchDelayMs = 40;
 /**
@@ -124,6 +128,7 @@ function measureLead(
     sMv,
     netMv: rMv + sMv,
     jMv: value(offsetMs - startMs),
+    stMv: value(Math.min(x.length - 1, offsetMs + stDelayMs - startMs)),
     tMv,
   };
   return rMv > 0 && qMv < 0 ? { ...measures, qMv } : measures;

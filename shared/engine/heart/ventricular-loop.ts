@@ -42,6 +42,10 @@ function roundShape(shape: VentricularShape): VentricularShape {
     qrsScale: rounded(shape.qrsScale, shapeDecimals),
     axisRotationDeg: rounded(shape.axisRotationDeg, shapeDecimals),
     tScale: rounded(shape.tScale, shapeDecimals),
+    injury: shape.injury && {
+      ...shape.injury,
+      stElevationMv: rounded(shape.injury.stElevationMv, shapeDecimals),
+    },
   };
 }
 

@@ -1,3 +1,5 @@
+import type { Injury } from './injury';
+
 /** What a strip may change of the ventricular complex without moving its sources. */
 export interface VentricularShape {
   /** Multiplies every action potential duration; recovery slopes stretch with its square root. 0.2 … 2.2. */
@@ -10,6 +12,8 @@ export interface VentricularShape {
   axisRotationDeg: number;
   /** Multiplies repolarization only. */
   tScale: number;
+  /** null: healthy. */
+  injury: Injury | null;
 }
 
 /** The model as fitted. */
@@ -19,4 +23,5 @@ export const nativeShape: VentricularShape = {
   qrsScale: 1,
   axisRotationDeg: 0,
   tScale: 1,
+  injury: null,
 };

@@ -12,6 +12,11 @@ export interface ComplexMeasures {
 export interface LeadMeasures {
   /** Largest positive deflection plus largest negative one, mV. */
   netMv: number;
+  /** Height of R (at least 0) and depth of S (at most 0), mV. */
+  rMv: number;
+  sMv: number;
+  /** ST 20 ms after the end of the QRS, against the line before it, mV. */
+  stMv: number;
   /** Largest deflection between 40 and 400 ms after the QRS, signed, mV. */
   tMv: number;
 }

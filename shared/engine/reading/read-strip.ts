@@ -1,6 +1,7 @@
 import type { StimulusChamber, StripEvent, VentricularDepolarization } from '../events';
 import { readBeat, type BeatReading } from './beat-reading';
 import { atrialPartners, findBeats, type BeatOrigin, type RawBeat } from './beats';
+import { injuryCriteria, wideQrsMs, type Criterion } from './criteria';
 import { captureByChamber, pacedChambers } from './capture';
 import type { ComplexMeasures } from './complex';
 import { consistentModes } from './consistent-modes';
@@ -51,6 +52,15 @@ function readBeats(events: readonly StripEvent[], raw: readonly RawBeat[]): Beat
   });
 }
 
+/** Injury criteria over the beats that have a complex; fused ones are neither paced nor native, and are left out. */
+function criteriaOf(raw: readonly RawBeat[], beats: readonly BeatReading[]): Criterion[] | null {
+  const judged = raw.flatMap(({ complex }, i) => {
+    const { number, fusion, qrsDurationMs } = beats[i];
+    return complex && !fusion ? [{ number, wide: (qrsDurationMs ?? 0) >= wideQrsMs, complex }] : [];
+  });
+  return judged.length > 0 ? injuryCriteria(judged) : null;
+}
+
 /**
  * Reads a strip.
  *
@@ -92,6 +102,7 @@ export function readStrip(
     qrsTRelation: example?.complex ? qrsTRelations(example.complex) : null,
     underlyingRhythm: underlyingRhythm(events, beats),
     consistentModes: consistentModes(events, beats),
+    criteria: criteriaOf(raw, beats),
     beats,
   };
   return { ...figures, findings: findingsOf(events, figures) };

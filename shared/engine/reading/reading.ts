@@ -4,6 +4,7 @@ import type { BeatReading } from './beat-reading';
 import type { BeatOrigin } from './beats';
 import type { CaptureByChamber } from './capture';
 import type { BasicMode } from '../../parameters/pacing-mode';
+import type { Criterion } from './criteria';
 import type { QrsTRelation } from './qrs-t-relation';
 import type { SensingByChamber } from './sensing';
 
@@ -46,6 +47,8 @@ export interface Reading {
   underlyingRhythm: string | null;
   /** Modes that could have made this strip. */
   consistentModes: BasicMode[];
+  /** Criteria of acute injury, each with its figure and limit; null without a complex. */
+  criteria: Criterion[] | null;
   beats: BeatReading[];
   findings: Finding[];
 }

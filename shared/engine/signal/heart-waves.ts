@@ -1,8 +1,9 @@
-import type { AtrialLead, StripParameters } from '../../parameters/strip-parameters';
+import type { AtrialLead, PatientParameters, StripParameters } from '../../parameters/strip-parameters';
 import { msPerMinute, msPerS } from '../../units';
 import type { AtrialDepolarization, DepolarizationEvent, VentricularDepolarization } from '../events';
 import { activationPattern, type VentricularSource } from '../heart/activation-pattern';
 import { atrialLoop, type AtrialSite } from '../heart/atrial-loop';
+import type { Injury } from '../heart/injury';
 import { fibrillationLoop, flutterLoop } from '../heart/atrial-waves';
 import { rateFactorForQt, ventricularLoop, type VentricularLoop } from '../heart/ventricular-loop';
 import { randomStream } from '../random';
@@ -30,6 +31,11 @@ const qtStepMs = 5;
  */
 function targetQtMs(qtcMs: number, rrS: number): number {
   return Math.round((qtcMs - 154 * (1 - rrS)) / qtStepMs) * qtStepMs;
+}
+
+/** The model's injury; none without a territory or a deviation. */
+function injuryOf({ territory, stElevationMv }: PatientParameters['injury']): Injury | null {
+  return territory === 'none' || stElevationMv === 0 ? null : { territory, stElevationMv };
 }
 
 /** A depolarization's wave, from its event on. */
@@ -87,6 +93,7 @@ export function createHeartWaves(
       qrsScale: waveform.qrsScale,
       axisRotationDeg: waveform.axisRotationDeg,
       tScale: waveform.tScale,
+      injury: injuryOf(patient.injury),
     });
   };
 

@@ -129,6 +129,8 @@ const rows: [path: string, value: unknown, on: StripParametersInput][] = [
   ['pacing.atrialLead.signalMv', 0.1, { ...fast, durationS: 4 }],
   ['pacing.rightVentricularLead.sensitivityMv', 19, vvi],
   ['pacing.rightVentricularLead.signalMv', 1, vvi],
+  ['patient.injury.territory', 'anterior', { ...short, patient: { injury: { stElevationMv: 0.2 } } }],
+  ['patient.injury.stElevationMv', 0.4, { ...short, patient: { injury: { territory: 'inferior' } } }],
   ['patient.conductedPerGroup', 2, grouped],
   ['patient.retrogradeConductionMs', 260, looping],
   ['patient.prematureVentricularPerMinute', 20, { ...short, durationS: 8 }],

@@ -30,7 +30,12 @@ const describesPatient = (path: string): boolean =>
   path === 'pacing.atrialLead.site' || path === 'pacing.rightVentricularLead.site';
 
 const plain = conditionalPaths.filter(
-  (path) => !path.includes('*') && path !== 'pacing.faults' && !path.startsWith('disturbance.'),
+  (path) =>
+    !path.includes('*') &&
+    path !== 'pacing.faults' &&
+    !path.startsWith('disturbance.') &&
+    // Injury changes the shape of a beat, never an event.
+    !path.startsWith('patient.injury.'),
 );
 
 describe('what does not apply', () => {

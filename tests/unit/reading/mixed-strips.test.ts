@@ -17,7 +17,7 @@ const complex: ComplexMeasures = {
   tEndMs: 420,
   frontalAxisDeg: 60,
   leads: Object.fromEntries(
-    leadNames.map((lead) => [lead, { netMv: 1, tMv: 0.3 }]),
+    leadNames.map((lead) => [lead, { netMv: 1, rMv: 1.2, sMv: -0.2, stMv: 0, tMv: 0.3 }]),
   ) as ComplexMeasures['leads'],
 };
 const read = (input: StripParametersInput): Reading => renderStrip(steadyStrip(input)).reading;

@@ -14,7 +14,7 @@ const complex: ComplexMeasures = {
   tEndMs: 462,
   frontalAxisDeg: -70,
   leads: Object.fromEntries(
-    leadNames.map((lead) => [lead, { netMv: 1, tMv: -0.4 }]),
+    leadNames.map((lead) => [lead, { netMv: 1, rMv: 1.2, sMv: -0.2, stMv: 0, tMv: -0.4 }]),
   ) as ComplexMeasures['leads'],
 };
 
@@ -110,11 +110,12 @@ describe('figures', () => {
   });
 
   it('calls T concordant, discordant, or says nothing where either is small', () => {
+    const lead = complex.leads.V6;
     const leads = {
       ...complex.leads,
-      I: { netMv: 1, tMv: 0.3 },
-      II: { netMv: 0.05, tMv: 0.3 },
-      V1: { netMv: -1, tMv: 0.02 },
+      I: { ...lead, netMv: 1, tMv: 0.3 },
+      II: { ...lead, netMv: 0.05, tMv: 0.3 },
+      V1: { ...lead, netMv: -1, tMv: 0.02 },
     };
     const relations = qrsTRelations({ ...complex, leads });
     expect([relations.I, relations.II, relations.V1, relations.V6]).toEqual([

@@ -2,6 +2,7 @@ import type { Finding, Reading } from '../../../../shared/engine/reading/reading
 import { BeatChip } from '../../../components/chip';
 import { classNames } from '../../../lib/class-names';
 import { beatRanges, rangeWords } from './beat-ranges';
+import { CriteriaList } from './criteria-list';
 
 interface ReadingPanelProps {
   reading: Reading;
@@ -100,6 +101,7 @@ export function ReadingPanel(props: ReadingPanelProps) {
           <FindingRow key={finding.id} finding={finding} {...props} />
         ))}
       </ul>
+      {reading.criteria && <CriteriaList criteria={reading.criteria} onChooseBeats={props.onChooseBeats} />}
     </section>
   );
 }

@@ -36,6 +36,7 @@ export const patientSections: readonly Section[] = [
       'prematureCouplingMs',
     ),
   },
+  { title: 'Injury', paths: at('patient.injury', 'territory', 'stElevationMv') },
 ];
 
 export const pacingSections: readonly Section[] = [
