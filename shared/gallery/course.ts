@@ -5,6 +5,9 @@ export const courseGroups = [
   { id: 'two-ventricles', title: 'Two ventricles' },
   { id: 'capture', title: 'Capture' },
   { id: 'sensing', title: 'Sensing' },
+  { id: 'upper-rate', title: 'Upper rate' },
+  { id: 'temporary-pacing', title: 'Temporary pacing' },
+  { id: 'infarct-in-paced-rhythm', title: 'Infarct in paced rhythm' },
   { id: 'traps-and-artefacts', title: 'Traps and artefacts' },
 ] as const;
 

@@ -1,5 +1,6 @@
 import type { StripParametersInput } from '../parameters/strip-parameters';
 import type { CourseGroupId } from './course';
+import type { PresetCriterion } from './criterion';
 
 /** A strip that ships with the product. */
 export interface GalleryPreset {
@@ -11,4 +12,6 @@ export interface GalleryPreset {
   tags: readonly string[];
   group: CourseGroupId;
   parameters: StripParametersInput;
+  /** What makes the strip what its title says, checked on what is rendered. At least two. */
+  criteria: readonly PresetCriterion[];
 }

@@ -2,15 +2,27 @@ import { InvalidInputError } from '../errors';
 import { parseStripParameters } from '../parameters/parse';
 import type { StripParameters } from '../parameters/strip-parameters';
 import type { GalleryPreset } from './gallery-preset';
-import { captureAndSensing } from './presets/capture-and-sensing';
+import { capture } from './presets/capture';
+import { infarctInPacedRhythm } from './presets/infarct-in-paced-rhythm';
 import { recogniseTheChamber } from './presets/recognise-the-chamber';
-import { twoChambersAndVentricles } from './presets/two-chambers-and-ventricles';
+import { sensing } from './presets/sensing';
+import { temporaryPacing } from './presets/temporary-pacing';
+import { trapsAndArtefacts } from './presets/traps-and-artefacts';
+import { twoChambers } from './presets/two-chambers';
+import { twoVentricles } from './presets/two-ventricles';
+import { upperRate } from './presets/upper-rate';
 
 /** Every preset that ships, in the order of the course. */
 export const gallery: readonly GalleryPreset[] = [
   ...recogniseTheChamber,
-  ...twoChambersAndVentricles,
-  ...captureAndSensing,
+  ...twoChambers,
+  ...twoVentricles,
+  ...capture,
+  ...sensing,
+  ...upperRate,
+  ...temporaryPacing,
+  ...infarctInPacedRhythm,
+  ...trapsAndArtefacts,
 ];
 
 /** The preset with this id; throws `InvalidInputError` listing the ids there are. */
