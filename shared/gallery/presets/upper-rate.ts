@@ -116,7 +116,6 @@ export const upperRate: readonly GalleryPreset[] = [
     tags: ['DDD', 'mode switch', 'atrial tachycardia'],
     group,
     parameters: {
-      durationS: 12,
       patient: {
         atrialRhythm: 'tachycardia',
         atrialRateBpm: 200,
