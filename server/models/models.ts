@@ -52,6 +52,8 @@ export interface StripRow extends Row<StripRow> {
   parameters: string;
   searchText: string;
   version: number;
+  /** The engine that it was last saved with. */
+  engineVersion: CreationOptional<string>;
   shippedStamp: CreationOptional<string | null>;
   createdAt: string;
   updatedAt: string;
@@ -117,6 +119,7 @@ export function defineModels(sequelize: Sequelize): Models {
       parameters: text(),
       searchText: text(),
       version: integer(),
+      engineVersion: { ...text(), defaultValue: '1.0.0' },
       shippedStamp: optionalText(),
       createdAt: text(),
       updatedAt: text(),

@@ -1,4 +1,5 @@
 import type { Transaction } from 'sequelize';
+import { engineVersion } from '../../shared/engine/engine-version';
 import type { Visibility } from '../../shared/api/strips';
 import { foldText } from '../../shared/api/text';
 import type { Database } from './database';
@@ -18,6 +19,8 @@ export interface StripRecord {
   /** JSON as stored. */
   parameters: string;
   version: number;
+  /** The engine that it was last saved with. */
+  engineVersion: string;
   createdAt: string;
   updatedAt: string;
   deletedAt: string | null;
@@ -43,6 +46,7 @@ export function contentColumns(content: StripContent) {
     groupId: content.groupId,
     visibility: content.visibility,
     parameters: JSON.stringify(content.parameters),
+    engineVersion,
     searchText: searchTextOf([
       content.title,
       content.teachingPoint,
@@ -66,7 +70,7 @@ export async function writeTags(
 
 function toRecord(row: StripRow, ownerNames: Map<string, string>, tags: string[]): StripRecord {
   const { id, departmentId, visibility, title, teachingPoint, groupId, parameters } = row;
-  const { version, createdAt, updatedAt, deletedAt } = row;
+  const { version, engineVersion: savedWith, createdAt, updatedAt, deletedAt } = row;
   return {
     id,
     owner: row.ownerId === null ? null : { id: row.ownerId, name: ownerNames.get(row.ownerId) ?? '' },
@@ -78,6 +82,7 @@ function toRecord(row: StripRow, ownerNames: Map<string, string>, tags: string[]
     groupId,
     parameters,
     version,
+    engineVersion: savedWith,
     createdAt,
     updatedAt,
     deletedAt,

@@ -86,6 +86,8 @@ export const stripSchema = z.object({
   owner: z.object({ id: z.string(), name: z.string() }).nullable(),
   /** Goes up by one with every save. */
   version: z.number().int(),
+  /** The engine that it was last saved with. */
+  engineVersion: z.string(),
   /** ISO 8601, UTC. */
   createdAt: z.string(),
   updatedAt: z.string(),

@@ -3,3 +3,8 @@
  * the same strip; saved strips carry the version that made them.
  */
 export const engineVersion = '1.1.0';
+
+/** Whether two engines draw the same parameters differently: their first numbers differ. */
+export function drawsDifferently(savedWith: string, current: string = engineVersion): boolean {
+  return savedWith.split('.')[0] !== current.split('.')[0];
+}

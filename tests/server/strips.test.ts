@@ -1,6 +1,7 @@
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
 import type { ApiErrorBody } from '../../shared/api/errors';
 import { stripResponseSchema, stripSchema, type StripResponse } from '../../shared/api/strips';
+import { drawsDifferently, engineVersion } from '../../shared/engine/engine-version';
 import { parseStripParameters } from '../../shared/parameters/parse';
 import { errorIdOf, updateOf, type ApiClient } from '../support/server/api-client';
 import { startTestServer, type TestServer } from '../support/server/test-server';
@@ -47,6 +48,17 @@ describe('keeping a strip', () => {
   it('says where the new strip is', async () => {
     const answer = await educator.send<StripResponse>('POST', '/api/strips', strip);
     expect(answer.headers.get('location')).toBe(`/api/strips/${answer.body.strip.id}`);
+  });
+
+  it('says which engine each strip was saved with, and takes the new one with the next save', async () => {
+    const kept = await educator.keep(strip);
+    expect(kept.engineVersion).toBe(engineVersion);
+    await server.database.strips.update({ engineVersion: '0.9.0' }, { where: { id: kept.id } });
+    const old = await educator.read(kept.id);
+    expect(old.engineVersion).toBe('0.9.0');
+    expect(drawsDifferently(old.engineVersion)).toBe(true);
+    const again = await educator.send<StripResponse>('PUT', `/api/strips/${kept.id}`, updateOf(old));
+    expect(again.body.strip.engineVersion).toBe(engineVersion);
   });
 
   it('brings parameters that were saved under an older schema up to date', async () => {

@@ -11,7 +11,8 @@ function keeperOf(strip: StripRecord, account: Account): Keeper {
 
 /** A strip as the API gives it to this account. A group that the course no longer has counts as none. */
 export function presentStrip(strip: StripRecord, account: Account): Strip {
-  const { id, title, teachingPoint, tags, visibility, owner, version, createdAt, updatedAt } = strip;
+  const { id, title, teachingPoint, tags, visibility, owner, version, createdAt, updatedAt, engineVersion } =
+    strip;
   const group = courseGroupIdSchema.safeParse(strip.groupId);
   return {
     id,
@@ -23,6 +24,7 @@ export function presentStrip(strip: StripRecord, account: Account): Strip {
     keptBy: keeperOf(strip, account),
     owner,
     version,
+    engineVersion,
     createdAt,
     updatedAt,
     parameters: readKeptParameters(strip),

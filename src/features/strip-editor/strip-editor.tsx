@@ -1,5 +1,6 @@
 import { useCallback, useEffect, useMemo, useState } from 'react';
 import type { Strip } from '../../../shared/api/strips';
+import { drawsDifferently, engineVersion } from '../../../shared/engine/engine-version';
 import type { StripParameters } from '../../../shared/parameters/strip-parameters';
 import { Button } from '../../components/button';
 import { ConfirmDialog } from '../../components/dialog';
@@ -38,12 +39,17 @@ export interface StripEditorProps {
 
 type OpenDialog = 'none' | 'saveNew' | 'details';
 
+/** A strip laid out in columns opens with all its leads. */
+function viewOf({ sheet }: StripParameters): ViewState {
+  return { ...startView, twelve: sheet.layout !== 'single' && sheet.layout !== 'stacked' };
+}
+
 const same = (a: StripParameters, b: StripParameters): boolean => JSON.stringify(a) === JSON.stringify(b);
 
 /** The strip editor: strip on top, parameters under it, reading beside them. */
 export function StripEditor({ strip, initial, origin, onSavedAs, onDuplicate }: StripEditorProps) {
   const editor = useParameters(initial);
-  const [view, setView] = useState<ViewState>(startView);
+  const [view, setView] = useState<ViewState>(() => viewOf(initial));
   const [saved, setSaved] = useState<Strip | null>(strip);
   const [dialog, setDialog] = useState<OpenDialog>('none');
   const [stale, setStale] = useState<Strip | null>(null);
@@ -56,6 +62,7 @@ export function StripEditor({ strip, initial, origin, onSavedAs, onDuplicate }: 
 
   const base = saved?.parameters ?? (origin === 'saved' ? fresh : null);
   const unsaved = base === null || !same(parameters, base);
+  const outdated = saved !== null && saved.keptBy !== 'gallery' && drawsDifferently(saved.engineVersion);
   const { blocker, letGo } = useUnsavedGuard(unsaved);
   const stripId = saved?.id ?? null;
   useEffect(() => {
@@ -140,6 +147,7 @@ export function StripEditor({ strip, initial, origin, onSavedAs, onDuplicate }: 
         strip={saved}
         editor={editor}
         unsaved={unsaved}
+        outdated={outdated}
         busy={saving.busy}
         onSave={() => void saveVersion()}
         onSaveAs={() => setDialog('saveNew')}
@@ -172,6 +180,13 @@ export function StripEditor({ strip, initial, origin, onSavedAs, onDuplicate }: 
           <Button small kind="quiet" onClick={() => setShowOrigin(false)}>
             Hide
           </Button>
+        </div>
+      )}
+      {saved && outdated && (
+        <div className="px-4 pt-3 tablet:px-6">
+          <Notice kind="amber" title={`This strip was saved with engine ${saved.engineVersion}.`}>
+            {`Engine ${engineVersion} draws it anew: shapes differ, parameters and timing do not. Look it over; saving keeps it with the new engine.`}
+          </Notice>
         </div>
       )}
       <ToolRow editor={editor} view={view} onView={changeView} />

@@ -9,6 +9,8 @@ interface TitleBarProps {
   strip: Strip | null;
   editor: ParametersEditor;
   unsaved: boolean;
+  /** Saved with an engine that drew it differently: worth saving again as it is. */
+  outdated: boolean;
   busy: boolean;
   onSave(): void;
   onSaveAs(): void;
@@ -41,7 +43,7 @@ function Undo({ flipped }: { flipped?: boolean }) {
 
 /** Title, what is saved of it, undo and redo, save. */
 export function TitleBar(props: TitleBarProps) {
-  const { strip, editor, unsaved, busy } = props;
+  const { strip, editor, unsaved, outdated, busy } = props;
   const canSave = strip === null || strip.canEdit;
   return (
     <header className="flex flex-wrap items-center gap-x-4 gap-y-2 border-b border-rule px-4 py-3 tablet:px-6">
@@ -80,7 +82,11 @@ export function TitleBar(props: TitleBarProps) {
         </Menu>
         <Button onClick={props.onCopyPicture}>Copy picture</Button>
         {canSave ? (
-          <Button kind="primary" disabled={busy || (strip !== null && !unsaved)} onClick={props.onSave}>
+          <Button
+            kind="primary"
+            disabled={busy || (strip !== null && !unsaved && !outdated)}
+            onClick={props.onSave}
+          >
             {busy ? 'Saving …' : strip ? 'Save version' : 'Save strip'}
           </Button>
         ) : (
