@@ -58,6 +58,18 @@ export function Component() {
           local protocols and licensed practice.
         </p>
       </Section>
+      <Section title="Infarct in paced rhythm">
+        <p>
+          An injured territory changes ST in every beat that crosses it. In wide beats the reading gives the
+          Sgarbossa points, the modified rule with its ST/S ratio and the Barcelona rule, each with figure,
+          limit, leads and source; in narrow beats, ST elevation in leads beside each other. ST is read 20 ms
+          after the QRS.
+        </p>
+        <p>
+          Criteria support a suspicion. A strip that meets none of them rules nothing out, and one that meets
+          them is not a diagnosis: local practice decides.
+        </p>
+      </Section>
       <Section title="What bandwidth does">
         <p>
           A 0.4 ms spike holds little below 150 Hz. A diagnostic recorder (0.05–150 Hz) leaves about a seventh
@@ -92,6 +104,10 @@ export function Component() {
             Leads: Dower et al. 1980, Clin Cardiol 3:87; Edenbrandt and Pahlm 1988, J Electrocardiol 21:361.
           </li>
           <li>Bundle branch block criteria: Surawicz et al. 2009, AHA/ACCF/HRS recommendations, part III.</li>
+          <li>
+            Infarct in a wide QRS: Sgarbossa et al. 1996; Smith et al. 2012; Meyers et al. 2015; Di Marco et
+            al. 2020.
+          </li>
           <li>Paced QRS width: Alhous et al. 2011, Europace 13:1738; Gupta et al. 2018, IPEJ 18:210.</li>
           <li>Spike directions: Koenig et al. 2011, J Electrocardiol.</li>
         </ul>

@@ -17,6 +17,8 @@ export interface AcceptanceCheck {
 }
 
 interface Fixture {
+  /** Of the model that the figures come from. */
+  version: number;
   checks: AcceptanceCheck[];
   golden: {
     values: Record<
@@ -51,10 +53,17 @@ interface Fixture {
   spectrumDb: Record<string, number>;
 }
 
-/** Acceptance ranges, golden vectors and prototype figures of model version 2. */
-export const fixture = JSON.parse(
-  readFileSync(new URL('../fixtures/heart-model-checks.json', import.meta.url), 'utf8'),
-) as Fixture;
+const read = (name: string): object =>
+  JSON.parse(readFileSync(new URL(`../fixtures/${name}`, import.meta.url), 'utf8')) as object;
+
+/**
+ * Acceptance ranges with their sources (heart-model-checks.json, from the model's design), and the figures of this
+ * version of the model, which guard against drift and validate nothing (heart-model-figures.json).
+ */
+export const fixture = {
+  ...read('heart-model-checks.json'),
+  ...read('heart-model-figures.json'),
+} as Fixture;
 
 function muscle(...sources: [MuscleSite, number][]): ActivationPattern {
   return { muscle: sources.map(([site, timeMs]) => ({ site, timeMs })), fascicles: [] };

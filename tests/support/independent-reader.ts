@@ -38,7 +38,11 @@ const qrsVelocity = 0.055;
 const boundShare = 0.04;
 const boundVelocity = 0.01;
 const quietMs = 12;
-const pacedQuietMs = 60;
+const pacedQuietMs = 30;
+/** A fast stretch begins at most this long after the spike that starts it, ms. */
+const pacedReachMs = 70;
+/** After a spike nothing but the QRS moves, so that a smaller velocity counts. */
+const pacedShare = 0.8;
 /** Complexes that begin closer than this are one, ms: no ventricle answers sooner. */
 const refractoryMs = 235;
 
@@ -190,12 +194,16 @@ export function findQrs(trace: Trace, spikes: readonly FoundSpike[]): FoundQrs[]
     for (let ms = from; ms <= to; ms++) if (velocity[ms] > velocity[peak]) peak = ms;
     const bound = Math.max(boundVelocity, boundShare * velocity[peak]);
     const edge = lastAbove(velocity, from, -1, bound, quietMs);
-    // After a stimulus the first slow stretch of muscle may be hardly seen: its start is looked for back to the spike.
+    // After a stimulus the first slow stretch of muscle may be hardly seen: its start is looked for back to the spike,
+    // and not beyond it, where a P wave may run.
     const spike = spikes.find(
       ({ chamber, timeS }) =>
-        chamber !== 'atrium' && edge - 1000 * timeS > 0 && edge - 1000 * timeS < pacedQuietMs,
+        chamber !== 'atrium' && 1000 * timeS < from && from - 1000 * timeS < pacedReachMs,
     );
-    const onset = spike ? lastAbove(velocity, edge, -1, bound, pacedQuietMs, 1000 * spike.timeS) : edge;
+    const spikeMs = spike ? 1000 * spike.timeS : -Infinity;
+    const slow =
+      edge > spikeMs ? lastAbove(velocity, edge, -1, pacedShare * bound, pacedQuietMs, spikeMs) : spikeMs;
+    const onset = spike ? slow : edge;
     const next = stretches.at(i + 1)?.from ?? Infinity;
     const offset = Math.min(lastAbove(velocity, to, 1, bound, quietMs), next - quietMs);
     return { onsetS: onset / 1000, offsetS: offset / 1000, peakS: peak / 1000 };

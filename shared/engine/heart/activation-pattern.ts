@@ -41,7 +41,7 @@ const selectiveHisDelayMs = 40;
 const nonselectiveHisDelayMs = 35;
 /** Left fascicles, and right bundle by the long way round, after a left bundle area stimulus, ms (tuned). */
 const leftBundleDelayMs = 16;
-const rightAfterLeftBundleMs = 33.5;
+const rightAfterLeftBundleMs = 33.01;
 
 type FascicleStart = ActivationPattern['fascicles'][number];
 

@@ -1,5 +1,5 @@
 /**
- * The numbers of the ventricular and atrial model, version 2. Heart coordinates are millimetres along (u, l, p):
+ * The numbers of the ventricular and atrial model, version 3. Heart coordinates are millimetres along (u, l, p):
  * u from base to apex, l from septum to left free wall, p toward the inferior wall; the origin is the centre of
  * the left ventricular ellipsoid. Times are ms, speeds mm/ms (= m/s), voltages mV.
  *
@@ -10,7 +10,7 @@
  */
 
 /** Golden heart vectors bind this version only. */
-export const heartModelVersion = 2;
+export const heartModelVersion = 3;
 
 /** A point or direction, heart or body axes as said at the place of use. */
 export type Vector3 = readonly [number, number, number];
@@ -23,7 +23,7 @@ export interface Ellipsoid {
 }
 
 /** Angles that place the heart in the body (Frank axes), degrees; tuned. */
-export const orientation = { azimuthDeg: 47.809, elevationDeg: 43, rollDeg: 1.98 } as const;
+export const orientation = { azimuthDeg: 38.054, elevationDeg: 46.525, rollDeg: 3.971 } as const;
 
 /** The five surfaces that carry nodes, in node order. */
 export const shellNames = ['lvEndo', 'lvMid', 'lvEpi', 'rvEndo', 'rvEpi'] as const;
@@ -78,15 +78,15 @@ export const graphRules = {
  * 2–4 m/s measured in Purkinje fibres (from memory).
  */
 export const conduction = {
-  tangentialSpeed: 0.712,
-  transmuralSpeed: 0.421,
-  septalTransmuralSpeed: 0.5,
-  rvFreeWallSpeedFactor: 1.193,
-  purkinjeSpeed: 1.329,
-  purkinjeCrossTerritoryFactor: 0.398,
+  tangentialSpeed: 0.696,
+  transmuralSpeed: 0.401,
+  septalTransmuralSpeed: 0.536,
+  rvFreeWallSpeedFactor: 1.314,
+  purkinjeSpeed: 1.311,
+  purkinjeCrossTerritoryFactor: 0.515,
   anterogradeMs: 3,
-  retrogradeLvMs: 57.76,
-  retrogradeRvMs: 43.681,
+  retrogradeLvMs: 7.21,
+  retrogradeRvMs: 39.88,
   muscleSeedRadiusMm: 12,
   purkinjeSeedRadiusMm: 10,
 } as const;
@@ -97,28 +97,28 @@ export type Network = 'lv' | 'rv';
 
 /** Exits of the left anterior, septal and posterior fascicle and of the right bundle, and their native delays (tuned). */
 export const fascicles: Readonly<Record<Fascicle, { exit: Vector3; delayMs: number; network: Network }>> = {
-  LAF: { exit: [4.6, -8.5, -21.3], delayMs: 0, network: 'lv' },
-  LSF: { exit: [19.6, -19.1, -8.6], delayMs: 15.4, network: 'lv' },
-  LPF: { exit: [23.2, 13.4, 15], delayMs: 9.9, network: 'lv' },
-  RBB: { exit: [31.7, -44.5, -11.5], delayMs: 3.4, network: 'rv' },
+  LAF: { exit: [2.95, -7.85, -23.15], delayMs: -1.08, network: 'lv' },
+  LSF: { exit: [20.49, -20.89, -5.9], delayMs: 16.98, network: 'lv' },
+  LPF: { exit: [26.35, 14.33, 14.16], delayMs: 8.38, network: 'lv' },
+  RBB: { exit: [37.1, -46.47, -10.16], delayMs: 3.89, network: 'rv' },
 };
 
 /** Places where muscle is stimulated or a focus sits. */
 export const muscleSites = {
-  rvApex: [34.9, -38.7, -12],
-  rvSept: [12.6, -33.1, 1.7],
-  rvOt: [-12, -28.4, -17.3],
+  rvApex: [36.29, -44.42, -10.9],
+  rvSept: [15.96, -32.65, 7.39],
+  rvOt: [-12.75, -21.68, -13.92],
   rvFree: [-1, -57.3, -5],
-  lvLat: [11.9, 33.2, 1.7],
-  lvPostlat: [4.8, 31.8, 11.6],
+  lvLat: [18.32, 29.79, -2.43],
+  lvPostlat: [12.51, 34.45, 13.8],
   lvAnt: [5, 7.6, -33],
   lvAntlat: [5, 24, -24],
   lvApex: [58, 0, 0],
   lvBasalPost: [-15, 19.8, 26.2],
   lvInf: [5, 3.5, 33.7],
   lvSummit: [-18, 14.2, -29.1],
-  hisSept: [-18, -32.1, -3.4],
-  lbb: [-14.4, -27.4, -1.9],
+  hisSept: [-17.98, -36.07, 1.75],
+  lbb: [-20.0, -30.74, -3.65],
 } as const satisfies Record<string, Vector3>;
 export type MuscleSite = keyof typeof muscleSites;
 
@@ -132,14 +132,14 @@ export const actionPotential = {
 
 /** Action potential duration over the heart, ms (tuned). `depth` is the transmural coordinate of each wall. */
 export const apdModel = {
-  baseMs: 328.653,
-  transmural: 12.9202,
-  apical: -10.2031,
-  lateral: -16.7902,
-  inferior: 4.2345,
-  rvFreeWall: -14.1396,
+  baseMs: 327.912,
+  transmural: 18.658,
+  apical: -9.553,
+  lateral: -13.043,
+  inferior: 4.224,
+  rvFreeWall: -16.117,
   /** Shortening per ms of later activation. */
-  activationSlope: 0.319,
+  activationSlope: 0.29,
   /** The intrinsic gradient fades when activation is dispersed: a tuned device, not physiology. */
   gradientMin: 0.1,
   dispersionOnsetMs: 18,

@@ -74,7 +74,7 @@ export const twoVentricles: readonly GalleryPreset[] = [
       exactly('captured.leftVentricle', 1, sources.nbg),
       exactly('stimuli.rightVentricle', 0, sources.nbg),
       atLeast('net.V1', 0.4, sources.leftVentricle),
-      atMost('net.I', -0.3, sources.leftVentricle),
+      atMost('net.I', -0.25, sources.leftVentricle),
       atMost('net.aVL', 0, sources.leftVentricle),
     ],
   },
@@ -120,7 +120,7 @@ export const twoVentricles: readonly GalleryPreset[] = [
       exactly('captured.rightVentricle', 0, sources.strength),
       exactly('captured.leftVentricle', 1, sources.nbg),
       atLeast('net.V1', 0.4, sources.leftVentricle),
-      atMost('net.I', -0.3, sources.leftVentricle),
+      atMost('net.I', -0.25, sources.leftVentricle),
     ],
   },
   {

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { activationPattern, type VentricularSource } from '../../../shared/engine/heart/activation-pattern';
+import { fascicles } from '../../../shared/engine/heart/heart-model-data';
 
 const right = (
   site: 'apex' | 'septum' | 'outflow' | 'his' | 'leftBundle',
@@ -7,8 +8,8 @@ const right = (
   timeMs = 0,
 ): VentricularSource => ({ kind: 'rightVentricle', site, hisCapture, timeMs });
 
-/** The recipe's fascicle delays at 0. */
-const native = { LAF: 0, LSF: 15.4, LPF: 9.9, RBB: 3.4 };
+/** The model's own fascicle delays. */
+const native = Object.fromEntries(Object.entries(fascicles).map(([name, { delayMs }]) => [name, delayMs]));
 
 function times(pattern: ReturnType<typeof activationPattern>): Record<string, number> {
   return Object.fromEntries(
