@@ -111,7 +111,15 @@ module.exports = {
       severity: 'error',
       comment: 'A worker thread has the engine and the encoders, no database and no requests.',
       from: { path: '^server/workers/' },
-      to: { path: '^server/(?!workers/)' },
+      to: { path: '^server/(?!workers/|exports/)' },
+    },
+    {
+      name: 'exports-make-files',
+      severity: 'error',
+      comment:
+        'Writers that need Node or a format library: recordings in, files out; no services, no tables.',
+      from: { path: '^server/exports/' },
+      to: { path: '^server/(?!exports/)' },
     },
     {
       name: 'scripts-and-tests-are-leaves',

@@ -11,7 +11,7 @@ import type { GalleryPreset } from '../shared/gallery/gallery-preset';
 import { judgeCriterion } from '../shared/gallery/measure-strip';
 import { layoutContactSheet } from '../shared/paper/contact-sheet';
 import type { SheetParameters } from '../shared/parameters/strip-parameters';
-import { svgToPng } from './render/svg-to-png';
+import { svgToPng } from '../server/exports/svg-to-png';
 
 const { values } = parseArgs({
   options: { out: { type: 'string', default: 'output/gallery' }, dpi: { type: 'string', default: '100' } },

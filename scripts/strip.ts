@@ -7,14 +7,18 @@ import { writeStrip } from './strip/write-strip';
 /** Exit code for input that was refused. */
 const refused = 2;
 
-function run(args: string[]): void {
+async function run(args: string[]): Promise<void> {
   const command = readCommand(args);
-  if (command === 'help') process.stdout.write(help);
-  else writeStrip(readParameters(command), command.outDirectory, command.formats);
+  if (command === 'help') {
+    process.stdout.write(help);
+    return;
+  }
+  const warnings = await writeStrip(readParameters(command), command.outDirectory, command.formats);
+  for (const warning of warnings) process.stderr.write(`warning, ${warning}\n`);
 }
 
 try {
-  run(process.argv.slice(2));
+  await run(process.argv.slice(2));
 } catch (error) {
   if (!(error instanceof InvalidInputError)) throw error;
   process.stderr.write(`${error.message}\n`);

@@ -1,8 +1,6 @@
 import { parseArgs, type ParseArgsConfig } from 'node:util';
 import { InvalidInputError, type Problem } from '../../shared/errors';
-
-export const stripFormats = ['csv', 'events', 'reading', 'svg', 'png'] as const;
-export type StripFormat = (typeof stripFormats)[number];
+import { exportFormats, type ExportFormat } from '../../shared/formats/export-format';
 
 export interface StripCommand {
   /** A file, `-` for standard input, or a preset of the gallery. */
@@ -10,7 +8,7 @@ export interface StripCommand {
   /** `path=value` assignments, in the order given. */
   assignments: string[];
   outDirectory: string;
-  formats: StripFormat[];
+  formats: ExportFormat[];
 }
 
 const defaultFormats = 'csv,events,reading';
@@ -32,7 +30,7 @@ npm run --silent strip -- --preset NAME --out DIR [--formats LIST] [--set path=v
   --in FILE       parameters as JSON; - reads standard input
   --preset NAME   a preset of the shipped gallery
   --out DIR       folder for the files; made when it is not there
-  --formats LIST  of ${stripFormats.join(',')} (default ${defaultFormats})
+  --formats LIST  of ${exportFormats.join(',')} (default ${defaultFormats})
   --set path=value  changes one parameter, such as pacing.lowerRateBpm=70; may be repeated
 
 Exit code 0, or 2 with one line per problem (path, value, allowed range) on standard error.
@@ -56,11 +54,11 @@ function parse(args: string[]) {
   }
 }
 
-function readFormats(list: string): StripFormat[] {
+function readFormats(list: string): ExportFormat[] {
   const names = list.split(',').map((name) => name.trim());
-  const unknown = names.filter((name) => !stripFormats.some((format) => format === name));
-  if (unknown.length > 0) refuse('--formats', unknown.join(','), `a list of ${stripFormats.join(',')}`);
-  return stripFormats.filter((format) => names.includes(format));
+  const unknown = names.filter((name) => !exportFormats.some((format) => format === name));
+  if (unknown.length > 0) refuse('--formats', unknown.join(','), `a list of ${exportFormats.join(',')}`);
+  return exportFormats.filter((format) => names.includes(format));
 }
 
 function readSource(file: string | undefined, preset: string | undefined): StripCommand['source'] {

@@ -1,5 +1,5 @@
 import { beforeAll, describe, expect, it } from 'vitest';
-import { svgToPng } from '../../../scripts/render/svg-to-png';
+import { svgToPng } from '../../../server/exports/svg-to-png';
 import { drawingToSvg } from '../../../shared/formats/svg';
 import { layoutStripSheet, type StripSheet } from '../../../shared/paper/sheet';
 import { parseStripParameters } from '../../../shared/parameters/parse';

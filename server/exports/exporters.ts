@@ -1,0 +1,56 @@
+import { InvalidInputError } from '../../shared/errors';
+import type { StripRecording } from '../../shared/engine/render';
+import { csvHeader, stripCsvRows } from '../../shared/formats/csv';
+import type { Exporter, ExportFormat } from '../../shared/formats/export-format';
+import { drawingToSvg } from '../../shared/formats/svg';
+import { longestDrawnS } from '../../shared/paper/layout';
+import { layoutStripSheet } from '../../shared/paper/sheet';
+import type { StripParameters } from '../../shared/parameters/strip-parameters';
+import { svgToPng } from './svg-to-png';
+
+/** Resolution of PNG files, dots per inch. */
+const pngDpi = 150;
+/** Rows of CSV made at a time. */
+const csvRowsAtOnce = 50_000;
+
+function json(value: unknown): string {
+  return `${JSON.stringify(value, null, 2)}\n`;
+}
+
+function* csvParts(recording: StripRecording): Generator<string> {
+  yield `${csvHeader}\n`;
+  const length = recording.leads.I.length;
+  for (let from = 0; from < length; from += csvRowsAtOnce) {
+    yield stripCsvRows(recording, from, Math.min(length, from + csvRowsAtOnce));
+  }
+}
+
+function svg(recording: StripRecording): string {
+  return drawingToSvg(layoutStripSheet(recording, recording.parameters.sheet));
+}
+
+/** Formats that hold pictures; one of more than five minutes would be metres long. */
+const pictures: readonly ExportFormat[] = ['svg', 'png'];
+
+/** Throws `InvalidInputError` when a format cannot hold such a strip; asked before anything is rendered. */
+export function checkExport({ durationS }: StripParameters, formats: readonly ExportFormat[]): void {
+  const picture = formats.find((format) => pictures.includes(format));
+  if (!picture || durationS <= longestDrawnS) return;
+  throw new InvalidInputError([
+    { path: 'durationS', value: String(durationS), allowed: `at most ${longestDrawnS} s for ${picture}` },
+  ]);
+}
+
+/** One file without warnings. */
+function oneFile(name: string, mediaType: string, parts: Iterable<string | Uint8Array>) {
+  return { files: [{ name, mediaType, parts }], warnings: [] };
+}
+
+/** The exporter of every format; the one list that the command line and the server share. */
+export const exporters: Readonly<Record<ExportFormat, Exporter>> = {
+  csv: (recording) => oneFile('strip.csv', 'text/csv', csvParts(recording)),
+  events: ({ events }) => oneFile('events.json', 'application/json', [json(events)]),
+  reading: ({ reading }) => oneFile('reading.json', 'application/json', [json(reading)]),
+  svg: (recording) => oneFile('strip.svg', 'image/svg+xml', [svg(recording)]),
+  png: (recording) => oneFile('strip.png', 'image/png', [svgToPng(svg(recording), pngDpi)]),
+};
