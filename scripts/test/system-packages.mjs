@@ -13,6 +13,44 @@ const needed = [
     checks: 'the recorder against SciPy on a real ECG record',
     present: () => succeeds('/usr/bin/python3', ['-c', 'import scipy.signal, scipy.misc']),
   },
+  {
+    name: 'python3-mne',
+    checks: 'EDF+ files read back',
+    present: () => succeeds('/usr/bin/python3', ['-c', 'import mne']),
+  },
+  {
+    name: 'libedf1',
+    checks: 'EDF+ files under a strict reader',
+    present: () => succeeds('/usr/bin/python3', ['-c', "import ctypes; ctypes.CDLL('libedf.so.1')"]),
+  },
+  {
+    name: 'biosig-tools',
+    checks: 'EDF+ and aECG files under a second reader',
+    present: () => existsSync('/usr/bin/save2gdf'),
+  },
+  {
+    name: 'python3-pydicom',
+    checks: 'DICOM waveforms read back',
+    present: () => succeeds('/usr/bin/python3', ['-c', 'import pydicom']),
+  },
+  { name: 'dcmtk', checks: 'DICOM files under a reader', present: () => existsSync('/usr/bin/dcmftest') },
+  {
+    name: 'dicom3tools',
+    checks: 'DICOM files under a validator',
+    present: () => existsSync('/usr/bin/dciodvfy'),
+  },
+  {
+    name: 'libxml2-utils',
+    checks: 'aECG and SVG files under an XML parser',
+    present: () => existsSync('/usr/bin/xmllint'),
+  },
+  {
+    name: 'poppler-utils',
+    checks: 'PDF sheets measured as painted',
+    present: () => existsSync('/usr/bin/pdftoppm'),
+  },
+  { name: 'qpdf', checks: 'PDF sheets checked for soundness', present: () => existsSync('/usr/bin/qpdf') },
+  { name: 'sox', checks: 'WAV files read back', present: () => existsSync('/usr/bin/sox') },
 ];
 
 function succeeds(command, args) {
