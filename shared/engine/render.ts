@@ -9,11 +9,12 @@ import { readStrip } from './reading/read-strip';
 import type { Reading } from './reading/reading';
 import { createBandLimiter } from './recorder/band-limiter';
 import { quantiseLeads } from './recorder/quantiser';
-import { designRecorder } from './recorder/recorder-design';
+import { designRecorder, type RecorderDesign } from './recorder/recorder-design';
 import { createRhythm, preRollS } from './rhythm/rhythm';
 import { createChannelSource, type MeasuredSamples } from './signal/channel-source';
 import { createElectrodeSignal } from './signal/electrode-signal';
 import { createEventQueue } from './signal/event-queue';
+import { createMarkerTrack } from './signal/marker-track';
 import type { SampleClock } from './signal/wave-painter';
 
 export type { MeasuredSamples } from './signal/channel-source';
@@ -27,6 +28,11 @@ export interface StripRecording {
   /** durationS × sampleRateHz samples a lead, mV, quantised; sample k is at k / sampleRateHz s. */
   leads: Record<LeadName, Float32Array>;
   events: StripEvent[];
+  /**
+   * Where stimuli were found in the wide-band signal, s; null unless `recorder.stimulusMarker` is on. What truly was
+   * given stands in `events`.
+   */
+  stimulusMarkersS: number[] | null;
   reading: Reading;
   parameters: StripParameters;
   engineVersion: string;
@@ -41,6 +47,8 @@ export interface StripChunk {
   measured: MeasuredSamples;
   /** Events with times inside the chunk. */
   events: StripEvent[];
+  /** Markers found up to the chunk's end; null when they are off. */
+  stimulusMarkersS: number[] | null;
   /** Measured complex of each ventricular depolarization among them. */
   complexes: Map<VentricularDepolarization, ComplexMeasures>;
 }
@@ -65,14 +73,23 @@ function emptyMeasured(length: number): MeasuredSamples {
   return Object.fromEntries(measuredLeads.map((lead) => [lead, new Float64Array(length)])) as MeasuredSamples;
 }
 
-/** The whole pipeline as a stream: rhythm, heart, stimuli, disturbance, recorder. */
-export function createStripStream(parameters: StripParameters): StripStream {
-  const design = designRecorder(parameters.recorder);
+/**
+ * The whole pipeline as a stream: rhythm, heart, stimuli, disturbance, recorder.
+ *
+ * @param design the recorder that runs; the one that the parameters name unless the recorder bench tries another
+ */
+export function createStripStream(
+  parameters: StripParameters,
+  design: RecorderDesign = designRecorder(parameters.recorder),
+): StripStream {
   const signal = createElectrodeSignal(parameters, createRhythm(parameters));
   const source = createChannelSource(parameters, signal, design.internalRateHz);
   const limiter = createBandLimiter(design, source.channelCount);
   const queue = createEventQueue();
   const clock: SampleClock = { rateHz: design.internalRateHz, firstTimeS: design.inputLeadS };
+  const markers = parameters.recorder.stimulusMarker
+    ? createMarkerTrack(source, design.internalRateHz, design.inputLeadS - fullRatePreRollS)
+    : null;
   let nextSample = 0;
 
   const render = (on: SampleClock, first: number, length: number): Float64Array[] => {
@@ -85,13 +102,17 @@ export function createStripStream(parameters: StripParameters): StripStream {
     const slowLength = (preRollS - fullRatePreRollS) * settleRateHz;
     limiter.settle(render(slow, -preRollS * settleRateHz, slowLength), settleRateHz);
     const fullLength = fullRatePreRollS * design.internalRateHz;
-    limiter.process(render(clock, -fullLength, fullLength), fullLength);
+    const channels = render(clock, -fullLength, fullLength);
+    markers?.look(channels, fullLength);
+    limiter.process(channels, fullLength);
     queue.takeBefore(0);
+    markers?.takeBefore(0);
   };
   const nextBlock = (length: number): MeasuredSamples => {
     const inputs = length * design.decimation;
     const channels = render(clock, nextSample * design.decimation, inputs);
     nextSample += length;
+    markers?.look(channels, inputs);
     const measured = source.toMeasured(limiter.process(channels, inputs));
     return reverseElectrodes(measured, parameters.disturbance.electrodeReversal);
   };
@@ -108,8 +129,9 @@ export function createStripStream(parameters: StripParameters): StripStream {
         const block = nextBlock(Math.min(blockSamples, length - done));
         for (const lead of measuredLeads) measured[lead].set(block[lead], done);
       }
-      const ended = queue.takeBefore(nextSample / design.settings.sampleRateHz);
-      return { firstSample, length, measured, ...ended };
+      const endS = nextSample / design.settings.sampleRateHz;
+      const stimulusMarkersS = markers?.takeBefore(endS) ?? null;
+      return { firstSample, length, measured, stimulusMarkersS, ...queue.takeBefore(endS) };
     },
   };
 }
@@ -125,13 +147,14 @@ export function stripLength({
 /** A whole strip: the first `durationS` seconds of the stream, quantised and read. */
 export function renderStrip(parameters: StripParameters): StripRecording {
   const stream = createStripStream(parameters);
-  const { measured, events, complexes } = stream.next(stripLength(parameters));
+  const { measured, events, complexes, stimulusMarkersS } = stream.next(stripLength(parameters));
   return {
     sampleRateHz: stream.sampleRateHz,
     resolutionUv: stream.resolutionUv,
     delayRemovedMs: stream.delayRemovedMs,
     leads: quantiseLeads(measured, stream.resolutionUv),
     events,
+    stimulusMarkersS,
     reading: readStrip(events, (event) => complexes.get(event) ?? null),
     parameters,
     engineVersion,

@@ -30,6 +30,7 @@ export interface StripBinaryHeader {
   engineVersion: string;
   parameters: StripParameters;
   events: StripEvent[];
+  stimulusMarkersS: number[] | null;
   reading: Reading;
 }
 
@@ -40,6 +41,7 @@ export interface RenderedStrip<Samples extends Float32Array | Float64Array> {
   delayRemovedMs: number;
   leads: Record<LeadName, Samples>;
   events: StripEvent[];
+  stimulusMarkersS: number[] | null;
   reading: Reading;
   parameters: StripParameters;
   engineVersion: string;
@@ -92,6 +94,7 @@ function headerOf(strip: RenderedStrip<Float32Array | Float64Array>): StripBinar
     engineVersion: strip.engineVersion,
     parameters: strip.parameters,
     events: strip.events,
+    stimulusMarkersS: strip.stimulusMarkersS,
     reading: strip.reading,
   };
 }
@@ -155,14 +158,23 @@ export function decodeStripBinary(buffer: ArrayBuffer | Uint8Array): DecodedStri
   const view = new DataView(bytes.buffer, bytes.byteOffset, bytes.byteLength);
   const { header, headerEnd } = readHeader(bytes, view);
   const { sampleType, samples, leads, sampleRateHz, resolutionUv, delayRemovedMs } = header;
-  const { engineVersion, parameters, events, reading } = header;
+  const { engineVersion, parameters, events, stimulusMarkersS, reading } = header;
   const leadBytes = samples * bytesPerSample[sampleType];
   if (bytes.length !== headerEnd + leads.length * leadBytes) {
     throw new StripBinaryError(
       `${bytes.length - headerEnd} bytes of samples; the header announces ${leads.length * leadBytes}`,
     );
   }
-  const common = { sampleRateHz, resolutionUv, delayRemovedMs, events, reading, parameters, engineVersion };
+  const common = {
+    sampleRateHz,
+    resolutionUv,
+    delayRemovedMs,
+    events,
+    stimulusMarkersS,
+    reading,
+    parameters,
+    engineVersion,
+  };
   const startOf = (lead: LeadName): number => headerEnd + leads.indexOf(lead) * leadBytes;
   return sampleType === 'float64'
     ? { sampleType, ...common, leads: perLead((lead) => readFloat64(view, startOf(lead), samples)) }

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { numberField } from './fields';
+import { flagField, numberField } from './fields';
 
 /** Named recorder bandwidths, −3 dB limits in Hz (BW-60 to BW-62: common practice, no source). */
 export const namedBandwidths = {
@@ -73,6 +73,10 @@ export const recorderSchema = z
       max: 10,
       usual: [1, 5],
       help: 'Quantiser step; diagnostic recorders have at most 5 µV (BW-29).',
+    }),
+    stimulusMarker: flagField(false, {
+      label: 'Stimulus marker',
+      help: 'Marks, on a line of its own, where a stimulus is found in the signal before the band-limit; it can err.',
     }),
   })
   .superRefine((recorder, context) => {

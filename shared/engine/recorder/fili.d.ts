@@ -33,6 +33,14 @@ declare module 'fili' {
     responsePoint(at: { Fs: number; Fr: number }): { magnitude: number; phase: number };
   }
 
-  const Fili: { CalcCascades: typeof CalcCascades; IirFilter: typeof IirFilter };
+  /** A radix-2 Fourier transform of real samples. */
+  export class Fft {
+    /** @param length a power of two */
+    constructor(length: number);
+    /** Transforms `length` samples; `window` names a window that is laid over them. */
+    forward(samples: Float64Array | number[], window: 'none'): { re: Float64Array; im: Float64Array };
+  }
+
+  const Fili: { CalcCascades: typeof CalcCascades; IirFilter: typeof IirFilter; Fft: typeof Fft };
   export default Fili;
 }

@@ -84,3 +84,39 @@ export function designRecorder(settings: RecorderParameters): RecorderDesign {
     magnitudeAt: (frequencyHz) => magnitudeAt(sections, frequencyHz, internalRateHz),
   };
 }
+
+/**
+ * The same recorder without its high-pass, so that 0 Hz passes: for an offline low-cut that runs both ways over the
+ * finished recording. Nothing to settle, so `limits` is null.
+ */
+export function withoutLowCut(design: RecorderDesign): RecorderDesign {
+  if (!design.lowPass) return design;
+  const pass: Section = { k: 1, a: [0, 0], b: [1, 0, 0], z: [0, 0] };
+  const sections = [pass, ...design.sections.slice(1)];
+  return {
+    ...design,
+    limits: null,
+    highPass: pass,
+    sections,
+    magnitudeAt: (frequencyHz) => magnitudeAt(sections, frequencyHz, design.internalRateHz),
+  };
+}
+
+/**
+ * A recorder that has no band-limit at all and takes the value of an instant for each output sample, as a sampler
+ * without an anti-alias filter would; for showing what that does. The mains notch stays.
+ */
+export function withoutBandLimit(design: RecorderDesign): RecorderDesign {
+  const sections = design.notch ? [design.notch] : [];
+  return {
+    ...design,
+    limits: null,
+    highPass: null,
+    lowPass: null,
+    sections,
+    keep: 'sample',
+    delayRemovedMs: 0,
+    inputLeadS: 0,
+    magnitudeAt: (frequencyHz) => magnitudeAt(sections, frequencyHz, design.internalRateHz),
+  };
+}

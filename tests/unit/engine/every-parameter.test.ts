@@ -179,12 +179,13 @@ const rows: [path: string, value: unknown, on: StripParametersInput][] = [
   ['recorder.mainsNotchHz', 50, { ...short, disturbance: { mainsMv: 0.2 } }],
   ['recorder.sampleRateHz', 1000, short],
   ['recorder.resolutionUv', 10, short],
+  ['recorder.stimulusMarker', true, vvi],
 ];
 
-/** What a person could notice of a strip: samples, events, reading. */
+/** What a person could notice of a strip: samples, events, markers, reading. */
 function observe(input: unknown) {
-  const { leads, events, reading } = renderStrip(buildStrip(input as StripParametersInput));
-  return JSON.stringify([Object.values(leads).map((lead) => [...lead]), events, reading]);
+  const { leads, events, stimulusMarkersS, reading } = renderStrip(buildStrip(input as StripParametersInput));
+  return JSON.stringify([Object.values(leads).map((lead) => [...lead]), events, stimulusMarkersS, reading]);
 }
 
 describe('every parameter changes the strip', () => {

@@ -27,6 +27,7 @@ function stripOf<Samples extends Float32Array | Float64Array>(
       Samples
     >,
     events,
+    stimulusMarkersS: [0.0502],
     reading: readStrip(events, () => null),
     parameters: parseStripParameters({ title: 'Überleitung − 40 ms 💓', notes: '"quoted"\n\u2028' }),
     engineVersion: '1.0.0',

@@ -106,6 +106,7 @@ export function RecorderFields({ editor }: GroupProps) {
           />
         </FieldFrame>
         <ParameterField editor={editor} path="recorder.resolutionUv" />
+        <ParameterField editor={editor} path="recorder.stimulusMarker" />
       </FieldGrid>
       <FieldSection editor={editor} section={sheetSection} />
     </>

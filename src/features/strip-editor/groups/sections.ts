@@ -132,4 +132,5 @@ export const recorderPaths: readonly ParameterPath[] = at(
   'mainsNotchHz',
   'sampleRateHz',
   'resolutionUv',
+  'stimulusMarker',
 );
