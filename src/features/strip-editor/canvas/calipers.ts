@@ -1,5 +1,5 @@
-import type { ScreenWindow } from './paint';
-import { timeToPx, type ScreenScale } from './scale';
+import type { ScreenWindow } from '../../../lib/canvas/paint-grid';
+import { timeToPx, type ScreenScale } from '../../../lib/canvas/scale';
 
 const plum = '#6b3fa0';
 

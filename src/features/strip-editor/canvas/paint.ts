@@ -1,19 +1,12 @@
 import type { StripEvent } from '../../../../shared/engine/events';
 import type { StripRecording } from '../../../../shared/engine/render';
 import { stimulusLeadMv } from '../../../../shared/engine/stimulus/stimulus-artefact';
-import { gridColours, type GridTint } from '../../../../shared/paper/tokens';
 import type { LeadName } from '../../../../shared/parameters/sheet';
 import type { TraceChoice } from '../state/view-state';
 import type { TintedColumn } from './beat-columns';
 import type { Row } from './rows';
-import { pxToTime, timeToPx, type ScreenScale } from './scale';
-
-/** The part of the strip that is on the screen: px from the strip's left edge, and the canvas's size. */
-export interface ScreenWindow {
-  scrollPx: number;
-  widthPx: number;
-  heightPx: number;
-}
+import type { ScreenWindow } from '../../../lib/canvas/paint-grid';
+import { pxToTime, timeToPx, type ScreenScale } from '../../../lib/canvas/scale';
 
 export const ink = '#1f2a37';
 const slate = '#7b8794';
@@ -23,41 +16,6 @@ const copper = '#b4532a';
 const traceWidth = (scale: ScreenScale): number => Math.max(1.7, 0.34 * scale.pxPerMm);
 const electrodeWidth = (scale: ScreenScale): number => Math.max(1, 0.18 * scale.pxPerMm);
 const calibrationWidth = (scale: ScreenScale): number => Math.max(1.4, 0.3 * scale.pxPerMm);
-
-function paintLines(
-  context: CanvasRenderingContext2D,
-  window: ScreenWindow,
-  stepPx: number,
-  colour: string,
-  width: number,
-): void {
-  context.beginPath();
-  for (let x = -(window.scrollPx % stepPx); x <= window.widthPx; x += stepPx) {
-    context.moveTo(Math.round(x) + 0.5, 0);
-    context.lineTo(Math.round(x) + 0.5, window.heightPx);
-  }
-  for (let y = 0; y <= window.heightPx; y += stepPx) {
-    context.moveTo(0, Math.round(y) + 0.5);
-    context.lineTo(window.widthPx, Math.round(y) + 0.5);
-  }
-  context.strokeStyle = colour;
-  context.lineWidth = width;
-  context.stroke();
-}
-
-/** Paper in true proportion: 1 mm and 5 mm lines over the ground. */
-export function paintGrid(
-  context: CanvasRenderingContext2D,
-  scale: ScreenScale,
-  window: ScreenWindow,
-  tint: GridTint,
-): void {
-  const { ground, minor, major } = gridColours[tint];
-  context.fillStyle = ground;
-  context.fillRect(0, 0, window.widthPx, window.heightPx);
-  if (scale.pxPerMm >= 4) paintLines(context, window, scale.pxPerMm, minor, 1);
-  paintLines(context, window, 5 * scale.pxPerMm, major, 1);
-}
 
 function paintTrace(
   context: CanvasRenderingContext2D,

@@ -1,6 +1,6 @@
 import type { StripRecording } from '../../../../shared/engine/render';
 import type { LeadName } from '../../../../shared/parameters/sheet';
-import type { ScreenScale } from './scale';
+import type { ScreenScale } from '../../../lib/canvas/scale';
 
 /** One lead on the screen. */
 export interface Row {

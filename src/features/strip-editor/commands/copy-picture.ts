@@ -4,10 +4,11 @@ import type { DrawingItem } from '../../../../shared/paper/drawing';
 import { ladderHeightMm, ladderItems } from '../../../../shared/paper/ladder';
 import { ladderOf } from '../../../../shared/ladder/ladder';
 import { leadNames } from '../../../../shared/parameters/sheet';
-import { paintGrid, paintRow, ink, type ScreenWindow } from '../canvas/paint';
+import { paintGrid, type ScreenWindow } from '../../../lib/canvas/paint-grid';
+import { paintRow, ink } from '../canvas/paint';
 import { paintDrawing } from '../canvas/paint-drawing';
 import { layoutRows } from '../canvas/rows';
-import { screenScale, timeToPx, type ScreenScale } from '../canvas/scale';
+import { screenScale, timeToPx, type ScreenScale } from '../../../lib/canvas/scale';
 
 /** Pixels a mm: 203 dots per inch, sharp on slides. */
 const pxPerMm = 8;

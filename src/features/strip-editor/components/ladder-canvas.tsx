@@ -6,8 +6,8 @@ import { ladderHeightMm, ladderItems } from '../../../../shared/paper/ladder';
 import type { TintedColumn } from '../canvas/beat-columns';
 import { paintColumns } from '../canvas/paint';
 import { paintDrawing } from '../canvas/paint-drawing';
-import { prepareCanvas } from '../canvas/prepare-canvas';
-import { pxToTime, type ScreenScale } from '../canvas/scale';
+import { prepareCanvas } from '../../../lib/canvas/prepare-canvas';
+import { pxToTime, type ScreenScale } from '../../../lib/canvas/scale';
 
 interface LadderCanvasProps {
   recording: StripRecording;

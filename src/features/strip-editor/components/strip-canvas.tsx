@@ -2,10 +2,11 @@ import { useLayoutEffect, useRef, type KeyboardEvent, type PointerEvent } from '
 import type { GridTint } from '../../../../shared/paper/tokens';
 import type { TintedColumn } from '../canvas/beat-columns';
 import { paintCalipers } from '../canvas/calipers';
-import { paintColumns, paintGrid, paintRow, type ScreenWindow } from '../canvas/paint';
-import { prepareCanvas } from '../canvas/prepare-canvas';
+import { paintGrid, type ScreenWindow } from '../../../lib/canvas/paint-grid';
+import { paintColumns, paintRow } from '../canvas/paint';
+import { prepareCanvas } from '../../../lib/canvas/prepare-canvas';
 import type { RowLayout } from '../canvas/rows';
-import { pxToTime, type ScreenScale } from '../canvas/scale';
+import { pxToTime, type ScreenScale } from '../../../lib/canvas/scale';
 import type { TraceChoice } from '../state/view-state';
 import type { Calipers } from './use-calipers';
 

@@ -6,7 +6,7 @@ import { BeatChip } from '../../../components/chip';
 import { beatColumns, columnAt, tintedColumns } from '../canvas/beat-columns';
 import { caliperWords } from '../canvas/calipers';
 import { layoutRows, type Row } from '../canvas/rows';
-import { desktopPxPerMm, phonePxPerMm, screenScale, timeToPx } from '../canvas/scale';
+import { desktopPxPerMm, phonePxPerMm, screenScale, timeToPx } from '../../../lib/canvas/scale';
 import type { Preview } from '../state/use-preview';
 import type { ViewState } from '../state/view-state';
 import { BeatStepper } from './beat-stepper';

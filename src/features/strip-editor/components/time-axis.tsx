@@ -1,4 +1,4 @@
-import { timeToPx, type ScreenScale } from '../canvas/scale';
+import { timeToPx, type ScreenScale } from '../../../lib/canvas/scale';
 
 /** Seconds under the strip, on the strip's own time axis. */
 export function TimeAxis({ scale, durationS }: { scale: ScreenScale; durationS: number }) {

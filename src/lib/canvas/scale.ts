@@ -1,4 +1,4 @@
-import type { SheetParameters } from '../../../../shared/parameters/strip-parameters';
+import type { SheetParameters } from '../../../shared/parameters/strip-parameters';
 
 /** How time and voltage lie on the screen, CSS px. */
 export interface ScreenScale {

@@ -1,0 +1,89 @@
+import { leadNames, type LeadName } from '../../../../shared/parameters/sheet';
+import type { BenchSetting } from '../../../../shared/recorder-bench/bench-setting';
+import { builtInSettings } from '../../../../shared/recorder-bench/built-in-settings';
+import { lessons, type Lesson } from '../../../../shared/recorder-bench/lessons';
+import { testSignalIds, type TestSignalId } from '../../../../shared/recorder-bench/test-signals';
+import { readSettingCode, settingCode } from './setting-code';
+
+export type BenchView = 'traces' | 'difference' | 'spectrum';
+
+/** What stands on the bench. */
+export type BenchSource =
+  | { kind: 'preset'; id: string }
+  | { kind: 'strip'; id: string }
+  | { kind: 'signal'; id: TestSignalId }
+  | { kind: 'lesson'; id: string };
+
+/** The whole bench, as the address bar keeps it: a reload or a link shows the same. */
+export interface BenchState {
+  source: BenchSource;
+  settings: BenchSetting[];
+  lead: LeadName;
+  view: BenchView;
+  /** Number of the beat that is measured; null: the first whole one. */
+  beat: number | null;
+  marker: boolean;
+}
+
+export const fewestSettings = 2;
+export const mostSettings = 4;
+const usualSource: BenchSource = { kind: 'preset', id: 'av-sequential-pacing' };
+const usualSettings = [builtInSettings.monitor, builtInSettings.slowWave, builtInSettings.diagnostic];
+
+function readSource(text: string | null): BenchSource {
+  const [kind, id] = text?.split('.') ?? [];
+  if (!id) return usualSource;
+  if (kind === 'signal') {
+    return testSignalIds.some((one) => one === id) ? { kind, id: id as TestSignalId } : usualSource;
+  }
+  if (kind === 'lesson') return lessons.some((one) => one.id === id) ? { kind, id } : usualSource;
+  return kind === 'preset' || kind === 'strip' ? { kind, id } : usualSource;
+}
+
+/** The lesson that is open. */
+export function lessonOf({ source }: Pick<BenchState, 'source'>): Lesson | null {
+  return source.kind === 'lesson' ? (lessons.find(({ id }) => id === source.id) ?? null) : null;
+}
+
+/** Reads the address; what cannot be read counts as not given. */
+export function readBenchState(search: URLSearchParams): BenchState {
+  const source = readSource(search.get('source'));
+  const lesson = lessonOf({ source });
+  const settings = search.getAll('setting').flatMap((code) => readSettingCode(code) ?? []);
+  const enough = settings.length >= fewestSettings && settings.length <= mostSettings;
+  const lead = leadNames.find((name) => name === search.get('lead'));
+  const view = (['traces', 'difference', 'spectrum'] as const).find((one) => one === search.get('view'));
+  const beat = Number(search.get('beat'));
+  return {
+    source,
+    settings: enough ? settings : [...(lesson?.settings ?? usualSettings)],
+    lead: lead ?? lesson?.lead ?? 'II',
+    view: view ?? lesson?.view ?? 'traces',
+    beat: Number.isInteger(beat) && beat > 0 ? beat : null,
+    marker: search.get('marker') === 'on',
+  };
+}
+
+/** The address of a bench. */
+export function writeBenchState(state: BenchState): URLSearchParams {
+  const search = new URLSearchParams();
+  search.set('source', `${state.source.kind}.${state.source.id}`);
+  for (const setting of state.settings) search.append('setting', settingCode(setting));
+  search.set('lead', state.lead);
+  search.set('view', state.view);
+  if (state.beat !== null) search.set('beat', String(state.beat));
+  if (state.marker) search.set('marker', 'on');
+  return search;
+}
+
+/** The bench as a lesson sets it up. */
+export function lessonState(lesson: Lesson): BenchState {
+  return {
+    source: { kind: 'lesson', id: lesson.id },
+    settings: [...lesson.settings],
+    lead: lesson.lead,
+    view: lesson.view,
+    beat: null,
+    marker: false,
+  };
+}
