@@ -14,8 +14,10 @@ import { demoRoutes } from './routes/demo/demo-routes';
 import { healthRoutes } from './routes/health/health-routes';
 import { registerRoutes } from './routes/register-routes';
 import { sessionRoutes } from './routes/session/session-routes';
+import { recorderRoutes } from './routes/recorder/recorder-routes';
 import { renderRoutes } from './routes/strips/render-routes';
 import { stripRoutes } from './routes/strips/strip-routes';
+import type { ReportPool } from './services/recorder/report-pool';
 import type { RenderPool } from './services/rendering/render-pool';
 import { findSession } from './services/session/sessions';
 
@@ -24,6 +26,9 @@ export interface AppDependencies {
   /** Signs sessions. */
   sessionSecret: string;
   renderPool: RenderPool;
+  reportPool: ReportPool;
+  /** Of package.json; stands on reports. */
+  productVersion: string;
   logger: Logger;
   /** Directory of the built client. */
   clientDirectory: string;
@@ -35,7 +40,8 @@ export interface AppDependencies {
 
 /** The whole application, not listening. */
 export function createApp(dependencies: AppDependencies): Express {
-  const { database, sessionSecret, renderPool, logger, clientDirectory } = dependencies;
+  const { database, sessionSecret, renderPool, reportPool, productVersion, logger, clientDirectory } =
+    dependencies;
   const { now = () => new Date(), signInLimits = usualSignInLimits, trustedProxies = 0 } = dependencies;
   const session = { database, secret: sessionSecret, now };
 
@@ -67,6 +73,7 @@ export function createApp(dependencies: AppDependencies): Express {
     ...demoRoutes(database),
     ...sessionRoutes(session, signInLimit(signInLimits)),
     ...renderRoutes({ database, renderPool }),
+    ...recorderRoutes({ reportPool, productVersion, now }),
     ...stripRoutes({ database, now }),
   });
   app.use('/api', noSuchRoute);

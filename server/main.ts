@@ -1,3 +1,4 @@
+import { readFileSync } from 'node:fs';
 import { createServer } from 'node:http';
 import type { AddressInfo } from 'node:net';
 import { dirname, extname, join, resolve } from 'node:path';
@@ -9,6 +10,7 @@ import { createMigrator } from './migrations/migrate';
 import { openDatabase } from './models/database';
 import { demoAccounts } from './services/demo/demo-accounts';
 import { seedDemo } from './services/demo/seed-demo';
+import { createReportPool } from './services/recorder/report-pool';
 import { createRenderPool } from './services/rendering/render-pool';
 import { loadSessionSecret } from './services/session/session-secret';
 import { shipGallery } from './services/strips/ship-gallery';
@@ -19,7 +21,15 @@ const graceMs = 5000;
 
 const here = fileURLToPath(import.meta.url);
 const isBuilt = extname(here) === '.js';
-const workerFile = join(dirname(here), isBuilt ? 'render-worker.js' : 'workers/render-worker.ts');
+/** The file of a worker thread, beside the built server or among the sources. */
+const workerFile = (name: string): string =>
+  join(dirname(here), isBuilt ? `${name}.js` : `workers/${name}.ts`);
+
+/** package.json lies above the server's folder, built or not. */
+function packageVersion(): string {
+  const file = join(dirname(here), isBuilt ? '../../package.json' : '../package.json');
+  return (JSON.parse(readFileSync(file, 'utf8')) as { version: string }).version;
+}
 
 const environment = readEnvironment(process.env);
 const logger = pino({
@@ -34,11 +44,14 @@ await createMigrator(database.sequelize).up();
 await seedDemo(database, new Date());
 await shipGallery(database, new Date());
 
-const renderPool = createRenderPool({ workerFile });
+const renderPool = createRenderPool({ workerFile: workerFile('render-worker') });
+const reportPool = createReportPool(workerFile('report-worker'));
 const app = createApp({
   database,
   sessionSecret,
   renderPool,
+  reportPool,
+  productVersion: packageVersion(),
   logger,
   clientDirectory: resolve(environment.clientDirectory),
   trustedProxies: environment.trustedProxies,
@@ -66,6 +79,7 @@ async function stop(): Promise<void> {
   setTimeout(() => server.closeAllConnections(), graceMs).unref();
   await closed;
   await renderPool.close();
+  await reportPool.close();
   await database.close();
   process.exit(0);
 }

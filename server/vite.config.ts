@@ -12,7 +12,11 @@ export default defineConfig({
     minify: false,
     sourcemap: true,
     rollupOptions: {
-      input: { main: 'server/main.ts', 'render-worker': 'server/workers/render-worker.ts' },
+      input: {
+        main: 'server/main.ts',
+        'render-worker': 'server/workers/render-worker.ts',
+        'report-worker': 'server/workers/report-worker.ts',
+      },
       output: { entryFileNames: '[name].js', chunkFileNames: 'chunks/[name]-[hash].js' },
     },
   },

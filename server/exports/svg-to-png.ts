@@ -1,17 +1,6 @@
-import { createRequire } from 'node:module';
 import { Resvg } from '@resvg/resvg-js';
+import { fontFiles } from './fonts';
 import { withPixelDensity } from './png-density';
-
-const require = createRequire(import.meta.url);
-
-/** The cuts that drawings use. */
-const fontFiles = [
-  '@expo-google-fonts/ibm-plex-sans/400Regular/IBMPlexSans_400Regular.ttf',
-  '@expo-google-fonts/ibm-plex-sans/500Medium/IBMPlexSans_500Medium.ttf',
-  '@expo-google-fonts/ibm-plex-sans/600SemiBold/IBMPlexSans_600SemiBold.ttf',
-  '@expo-google-fonts/ibm-plex-mono/400Regular/IBMPlexMono_400Regular.ttf',
-  '@expo-google-fonts/ibm-plex-mono/500Medium/IBMPlexMono_500Medium.ttf',
-];
 
 /**
  * Paints an SVG whose size is given in mm at `dpi` dots per inch (pixels = mm × dpi / 25.4, rounded up) and
@@ -23,7 +12,7 @@ export function svgToPng(svg: string, dpi: number): Buffer {
     dpi,
     font: {
       loadSystemFonts: false,
-      fontFiles: fontFiles.map((file) => require.resolve(file)),
+      fontFiles: Object.values(fontFiles),
       defaultFontFamily: 'IBM Plex Sans',
     },
   });

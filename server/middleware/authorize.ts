@@ -18,6 +18,7 @@ export const routeAccess = {
   'POST /api/session': 'everyone',
   'GET /api/session': 'signedIn',
   'DELETE /api/session': 'everyone',
+  'POST /api/recorder-report': 'signedIn',
   'GET /api/strips': makesStrips,
   'POST /api/strips': makesStrips,
   'POST /api/strips/render': makesStrips,

@@ -105,3 +105,14 @@ export function measureBeats(strip: StripOnBench): MeasuredBeat[] {
     };
   });
 }
+
+/** Beats with everything measured in every trace. */
+export function wholeBeats(beats: readonly MeasuredBeat[]): MeasuredBeat[] {
+  return beats.filter(({ bySetting }) => bySetting.every(({ stMv }) => stMv !== null));
+}
+
+/** The beat that stands for the strip: the second whole one, clear of the left edge; null without beats. */
+export function usualBeat(beats: readonly MeasuredBeat[]): MeasuredBeat | null {
+  const whole = wholeBeats(beats);
+  return whole.at(1) ?? whole.at(0) ?? beats.at(0) ?? null;
+}

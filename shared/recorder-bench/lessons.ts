@@ -1,7 +1,7 @@
 import { galleryPreset, presetParameters } from '../gallery/gallery';
 import type { LeadName } from '../parameters/sheet';
 import type { StripParameters } from '../parameters/strip-parameters';
-import { measureBeats, type MeasuredBeat } from './beat-measures';
+import { measureBeats, usualBeat, wholeBeats, type MeasuredBeat } from './beat-measures';
 import type { BenchSetting } from './bench-setting';
 import { builtInSettings } from './built-in-settings';
 import { largest } from './fit';
@@ -36,10 +36,8 @@ const signedMv = (value: number): string => `${value < 0 ? '−' : '+'}${mv(valu
 const uv = (value: number): string => `${Math.round(1000 * Math.abs(value))} µV`;
 const percent = (value: number): string => `${Math.abs(value) < 10 ? value.toFixed(1) : value.toFixed(0)} %`;
 
-/** Beats with everything that a lesson speaks of, measured in every trace. */
-function whole(beats: readonly MeasuredBeat[]): MeasuredBeat[] {
-  return beats.filter((beat) => beat.bySetting.every(({ stMv }) => stMv !== null));
-}
+/** Of a strip without beats there is nothing to say; no lesson has one. */
+const nothing: LessonWords = { figure: '–', text: '' };
 
 function average(values: readonly number[]): number {
   return values.length === 0 ? 0 : values.reduce((sum, value) => sum + value, 0) / values.length;
@@ -57,7 +55,8 @@ function range(values: readonly number[]): string {
 }
 
 function spikeVanishes(_: StripOnBench, beats: readonly MeasuredBeat[]): LessonWords {
-  const beat = whole(beats)[0] ?? beats[0];
+  const beat = usualBeat(beats);
+  if (!beat) return nothing;
   const [wide, narrow] = beat.bySetting;
   const share = (one: typeof wide): string => `${mv(one.spikeMv ?? 0)} (${percent(one.spikePercent ?? 0)})`;
   return {
@@ -76,7 +75,7 @@ function aliasing(_: StripOnBench, beats: readonly MeasuredBeat[]): LessonWords 
 }
 
 function stDisplaced(_: StripOnBench, beats: readonly MeasuredBeat[]): LessonWords {
-  const measured = whole(beats);
+  const measured = wholeBeats(beats);
   const level = (setting: number): number =>
     average(measured.map((beat) => beat.bySetting[setting].stMv ?? 0));
   const change = level(1) - level(0);
@@ -117,7 +116,7 @@ function lineSpread(strip: StripOnBench, setting: number): number {
 }
 
 function wanderRemoved(strip: StripOnBench, beats: readonly MeasuredBeat[]): LessonWords {
-  const measured = whole(beats);
+  const measured = wholeBeats(beats);
   const level = (setting: number): number =>
     average(measured.map((beat) => beat.bySetting[setting].stMv ?? 0));
   const [wide, cut, both] = [0, 1, 2].map((setting) => lineSpread(strip, setting));
@@ -135,7 +134,8 @@ function artefactWidthMs(trace: BenchTrace, timeS: number): number {
 }
 
 function spikeBlanks(strip: StripOnBench, beats: readonly MeasuredBeat[]): LessonWords {
-  const beat = beats.find(({ spike, startS }) => spike !== null && startS > 0.1) ?? beats[0];
+  const beat = usualBeat(beats);
+  if (!beat) return nothing;
   const timeS = beat.spike?.timeS ?? beat.startS;
   const [wide, narrow] = strip.artefacts.map((trace) => artefactWidthMs(trace, timeS));
   const heights = beat.bySetting.map(({ spikeMv }) => mv(spikeMv ?? 0));

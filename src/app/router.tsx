@@ -20,6 +20,14 @@ function only(queryClient: QueryClient, roles: readonly Role[]) {
   };
 }
 
+/** Where somebody starts: those who make strips at the strips, others at the recorder bench. */
+function startPage(queryClient: QueryClient) {
+  return async () => {
+    const user = await queryClient.ensureQueryData(sessionQuery);
+    return redirect(user && authors.includes(user.role) ? paths.strips() : paths.recorder());
+  };
+}
+
 /** Every address that no page has. */
 function notFound(): never {
   throw new Response('notFound', { status: 404 });
@@ -43,10 +51,11 @@ function routes(queryClient: QueryClient): RouteObject[] {
         {
           ErrorBoundary: ErrorPage,
           children: [
-            { index: true, loader: () => redirect(paths.strips()) },
+            { index: true, loader: startPage(queryClient) },
             { path: 'strips', loader: forAuthors, lazy: () => import('../pages/strip-library-page') },
             { path: 'strips/new', loader: forAuthors, lazy: () => import('../pages/strip-editor-page') },
             { path: 'strips/:stripId', loader: forAuthors, lazy: () => import('../pages/strip-editor-page') },
+            { path: 'recorder', lazy: () => import('../pages/recorder-page') },
             { path: 'help', lazy: () => import('../pages/help-page') },
             { path: '*', Component: LoadingPage, loader: notFound },
           ],

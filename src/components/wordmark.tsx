@@ -18,7 +18,9 @@ export function Wordmark() {
   return (
     <span className="flex items-center gap-2.5">
       <Mark />
-      <span className="text-lead font-semibold tracking-[-0.018em] text-ink">Paceloom</span>
+      <span className="text-lead font-semibold tracking-[-0.018em] text-ink max-[30rem]:sr-only">
+        Paceloom
+      </span>
     </span>
   );
 }

@@ -4,5 +4,6 @@ export const paths = {
   strips: () => '/strips',
   newStrip: () => '/strips/new',
   strip: (stripId: string) => `/strips/${encodeURIComponent(stripId)}`,
+  recorder: (search?: URLSearchParams) => `/recorder${search ? `?${search.toString()}` : ''}`,
   help: () => '/help',
 } as const;

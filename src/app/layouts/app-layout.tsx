@@ -75,8 +75,12 @@ export function AppLayout() {
         <Link to={paths.strips()} aria-label="Paceloom, strips">
           <Wordmark />
         </Link>
-        <nav aria-label="Main" className="flex h-full items-stretch gap-4 tablet:gap-6">
+        <nav
+          aria-label="Main"
+          className="flex h-full min-w-0 items-stretch gap-3 overflow-x-auto tablet:gap-6"
+        >
           {user.role !== 'learner' && <NavItem to={paths.strips()}>Strips</NavItem>}
+          <NavItem to={paths.recorder()}>Recorder</NavItem>
           <NavItem to={paths.help()}>Help</NavItem>
         </nav>
         <div className="ml-auto flex items-center gap-3">

@@ -8,6 +8,7 @@ import { inject } from 'vitest';
 import { createApp, type AppDependencies } from '../../../server/app';
 import { openDatabase, type Database } from '../../../server/models/database';
 import { createRenderPool, type RenderPoolOptions } from '../../../server/services/rendering/render-pool';
+import { createReportPool } from '../../../server/services/recorder/report-pool';
 import { ApiClient, type Person } from './api-client';
 
 export const workerFile = resolve('server/workers/render-worker.ts');
@@ -38,12 +39,15 @@ export async function startTestServer(options: TestServerOptions = {}): Promise<
   if (databaseFile === undefined) copyFileSync(inject('templateDatabase'), file);
   const database = await openDatabase(file);
   const renderPool = createRenderPool({ workerFile, threads: 1, keepWarm: false, ...pool });
+  const reportPool = createReportPool(resolve('server/workers/report-worker.ts'));
   const logged: string[] = [];
   const logger = pino({ level: 'error' }, { write: (line: string) => void logged.push(line) });
   const app = createApp({
     database,
     sessionSecret: 'a key for tests only, of no worth',
     renderPool,
+    reportPool,
+    productVersion: '0.0.0',
     logger,
     clientDirectory: join(directory, 'client'),
     ...dependencies,
@@ -62,6 +66,7 @@ export async function startTestServer(options: TestServerOptions = {}): Promise<
       server.closeAllConnections();
       await new Promise((done) => server.close(done));
       await renderPool.close();
+      await reportPool.close();
       await database.close();
       rmSync(directory, { recursive: true, force: true });
     },

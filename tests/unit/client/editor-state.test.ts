@@ -12,7 +12,7 @@ import {
   undo,
 } from '../../../src/features/strip-editor/state/history';
 import { changeParameter, parameterMeta } from '../../../src/features/strip-editor/state/parameter-paths';
-import { parseQuantity } from '../../../src/features/strip-editor/state/parse-quantity';
+import { parseQuantity } from '../../../src/lib/parse-quantity';
 import { tagsOf } from '../../../src/features/strip-editor/state/strip-details';
 import { renderStrip } from '../../../shared/engine/render';
 import { gallery, presetParameters } from '../../../shared/gallery/gallery';

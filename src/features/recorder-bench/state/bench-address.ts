@@ -1,3 +1,4 @@
+import { gallery } from '../../../../shared/gallery/gallery';
 import { leadNames, type LeadName } from '../../../../shared/parameters/sheet';
 import type { BenchSetting } from '../../../../shared/recorder-bench/bench-setting';
 import { builtInSettings } from '../../../../shared/recorder-bench/built-in-settings';
@@ -5,7 +6,7 @@ import { lessons, type Lesson } from '../../../../shared/recorder-bench/lessons'
 import { testSignalIds, type TestSignalId } from '../../../../shared/recorder-bench/test-signals';
 import { readSettingCode, settingCode } from './setting-code';
 
-export type BenchView = 'traces' | 'difference' | 'spectrum';
+export type BenchView = 'traces' | 'difference';
 
 /** What stands on the bench. */
 export type BenchSource =
@@ -23,7 +24,12 @@ export interface BenchState {
   /** Number of the beat that is measured; null: the first whole one. */
   beat: number | null;
   marker: boolean;
+  /** mm/mV; null: the greatest usual one that fits. */
+  gain: number | null;
 }
+
+/** Gains one can ask for, mm/mV; what is higher than its row is cut. */
+export const chosenGains = [1, 5, 10, 20, 100] as const;
 
 export const fewestSettings = 2;
 export const mostSettings = 4;
@@ -37,7 +43,8 @@ function readSource(text: string | null): BenchSource {
     return testSignalIds.some((one) => one === id) ? { kind, id: id as TestSignalId } : usualSource;
   }
   if (kind === 'lesson') return lessons.some((one) => one.id === id) ? { kind, id } : usualSource;
-  return kind === 'preset' || kind === 'strip' ? { kind, id } : usualSource;
+  if (kind === 'preset') return gallery.some((one) => one.id === id) ? { kind, id } : usualSource;
+  return kind === 'strip' ? { kind, id } : usualSource;
 }
 
 /** The lesson that is open. */
@@ -52,7 +59,7 @@ export function readBenchState(search: URLSearchParams): BenchState {
   const settings = search.getAll('setting').flatMap((code) => readSettingCode(code) ?? []);
   const enough = settings.length >= fewestSettings && settings.length <= mostSettings;
   const lead = leadNames.find((name) => name === search.get('lead'));
-  const view = (['traces', 'difference', 'spectrum'] as const).find((one) => one === search.get('view'));
+  const view = (['traces', 'difference'] as const).find((one) => one === search.get('view'));
   const beat = Number(search.get('beat'));
   return {
     source,
@@ -61,6 +68,7 @@ export function readBenchState(search: URLSearchParams): BenchState {
     view: view ?? lesson?.view ?? 'traces',
     beat: Number.isInteger(beat) && beat > 0 ? beat : null,
     marker: search.get('marker') === 'on',
+    gain: chosenGains.find((one) => String(one) === search.get('gain')) ?? null,
   };
 }
 
@@ -73,6 +81,7 @@ export function writeBenchState(state: BenchState): URLSearchParams {
   search.set('view', state.view);
   if (state.beat !== null) search.set('beat', String(state.beat));
   if (state.marker) search.set('marker', 'on');
+  if (state.gain !== null) search.set('gain', String(state.gain));
   return search;
 }
 
@@ -85,5 +94,6 @@ export function lessonState(lesson: Lesson): BenchState {
     view: lesson.view,
     beat: null,
     marker: false,
+    gain: null,
   };
 }

@@ -14,7 +14,7 @@ import { LadderCanvas } from './ladder-canvas';
 import { StripCanvas } from './strip-canvas';
 import { TimeAxis } from './time-axis';
 import { useCalipers } from './use-calipers';
-import { useElementWidth } from './use-element-width';
+import { useElementWidth } from '../../../lib/use-element-width';
 
 const phoneWidthPx = 640;
 

@@ -4,7 +4,7 @@ import { NumberField } from '../../../components/number-field';
 import { Segments } from '../../../components/segments';
 import { SelectField } from '../../../components/select-field';
 import { FieldFrame } from '../../../components/field-frame';
-import { parseQuantity } from '../state/parse-quantity';
+import { parseQuantity } from '../../../lib/parse-quantity';
 import { parameterMeta, parameterValue, type ParameterPath } from '../state/parameter-paths';
 import type { ParametersEditor } from '../state/use-parameters';
 

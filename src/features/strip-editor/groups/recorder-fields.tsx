@@ -3,7 +3,7 @@ import { FieldFrame } from '../../../components/field-frame';
 import { NumberField } from '../../../components/number-field';
 import { Segments } from '../../../components/segments';
 import { SelectField } from '../../../components/select-field';
-import { parseQuantity } from '../state/parse-quantity';
+import { parseQuantity } from '../../../lib/parse-quantity';
 import type { ParametersEditor } from '../state/use-parameters';
 import { FieldGrid, FieldSection } from './field-section';
 import { ParameterField } from './parameter-field';

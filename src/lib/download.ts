@@ -1,0 +1,9 @@
+/** Hands a file to the browser's downloads. */
+export function download(name: string, mediaType: string, content: BlobPart): void {
+  const url = URL.createObjectURL(new Blob([content], { type: mediaType }));
+  const link = document.createElement('a');
+  link.href = url;
+  link.download = name;
+  link.click();
+  URL.revokeObjectURL(url);
+}
