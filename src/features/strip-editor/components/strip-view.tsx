@@ -11,6 +11,7 @@ import type { Preview } from '../state/use-preview';
 import type { ViewState } from '../state/view-state';
 import { BeatStepper } from './beat-stepper';
 import { LadderCanvas } from './ladder-canvas';
+import { MarkerLine, markerWords } from './marker-line';
 import { StripCanvas } from './strip-canvas';
 import { TimeAxis } from './time-axis';
 import { useCalipers } from './use-calipers';
@@ -133,6 +134,7 @@ export function StripView({ preview, view, onChooseBeats, onHoverBeat }: StripVi
               onTimeHovered={hover}
             />
           </div>
+          <MarkerLine recording={recorded} scale={scale} />
           <TimeAxis scale={scale} durationS={durationS} />
           <div className="sticky left-0" style={{ width: widthPx }}>
             <LadderCanvas
@@ -149,6 +151,9 @@ export function StripView({ preview, view, onChooseBeats, onHoverBeat }: StripVi
           </div>
         </div>
       </div>
+      {recorded.stimulusMarkersS && (
+        <p className="px-4 text-caption text-ink-3 tablet:px-6">{markerWords(recorded)}</p>
+      )}
       {view.windows && (
         <p className="px-4 text-caption text-ink-3 tablet:px-6">
           Sensing windows: hatched, refractory (atria: AV interval and PVARP; ventricles: refractory period);
