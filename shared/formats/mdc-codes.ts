@@ -29,13 +29,16 @@ export const leadTerms: Readonly<Record<LeadName, MdcTerm>> = {
   V6: term('2:8', 'MDC_ECG_LEAD_V6', 'Lead V6'),
 };
 
-/** Beats: DICOM PS3.16 CID 3335, whose table names both. */
+/**
+ * Beats: DICOM PS3.16 CID 3335, whose table names both. It gives 10:8704 to a defibrillation spike as well; the meaning
+ * written beside the code tells which.
+ */
 export const beatTerms: Readonly<Record<BeatKind, MdcTerm>> = {
-  normal: term('10:8208', 'MDC_ECG_BEAT_NORMAL', 'Normal beat'),
+  normal: term('10:8208', 'MDC_ECG_BEAT_NORMAL', 'Normal beat (sinus beat, normal conduction)'),
   leftBundleBranchBlock: term('10:8464', 'MDC_ECG_BEAT_LBB_BLK_COMP', 'Left bundle branch block beat'),
   rightBundleBranchBlock: term('10:8496', 'MDC_ECG_BEAT_RBB_BLK_COMP', 'Right bundle branch block beat'),
-  afterPrematureAtrial: term('10:8272', 'MDC_ECG_BEAT_ATR_P_C', 'Atrial premature contraction'),
-  premature: term('10:8336', 'MDC_ECG_BEAT_V_P_C', 'Ventricular premature contraction'),
+  afterPrematureAtrial: term('10:8272', 'MDC_ECG_BEAT_ATR_P_C', 'Atrial premature contraction (beat)'),
+  premature: term('10:8336', 'MDC_ECG_BEAT_V_P_C', 'Ventricular premature contraction beat'),
   junctionalEscape: term('10:8416', 'MDC_ECG_BEAT_JUNC_ESC', 'Junctional (nodal) escape beat'),
   ventricularEscape: term('10:8432', 'MDC_ECG_BEAT_V_ESC', 'Ventricular escape beat'),
   paced: term('10:8704', 'MDC_ECG_BEAT_PACED', 'Paced beat'),

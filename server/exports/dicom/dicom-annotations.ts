@@ -3,7 +3,7 @@ import type { StripRecording } from '../../../shared/engine/render';
 import { codedEvents, type CodedEvent } from '../../../shared/formats/coded-events';
 import type { MdcTerm } from '../../../shared/formats/mdc-codes';
 import { educationCaution, syntheticCaution } from '../../../shared/paper/cautions';
-import { dicomText, shortTextLength } from './dicom-text';
+import { dicomText, shortTextBytes } from './dicom-text';
 
 /** All channels of the first multiplex group. */
 const wholeGroup = [1, 0];
@@ -16,7 +16,7 @@ export function mdcCode({ code, meaning }: MdcTerm): NaturalDataset[] {
 }
 
 function textItem(text: string, place: NaturalDataset): NaturalDataset {
-  return { UnformattedTextValue: dicomText(text, shortTextLength), ...place };
+  return { UnformattedTextValue: dicomText(text, shortTextBytes), ...place };
 }
 
 /**
@@ -29,7 +29,7 @@ export function dicomAnnotations(
   length: number,
 ): NaturalDataset[] {
   const remarks = [`${syntheticCaution}. ${educationCaution}`, parameters.title]
-    .filter((text) => dicomText(text, shortTextLength) !== '')
+    .filter((text) => dicomText(text, shortTextBytes) !== '')
     .map((text) =>
       textItem(text, { ReferencedWaveformChannels: wholeGroup, AnnotationGroupNumber: remarkGroup }),
     );

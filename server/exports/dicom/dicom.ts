@@ -11,7 +11,7 @@ import { bandLimits } from '../../../shared/parameters/recorder';
 import type { RecorderParameters } from '../../../shared/parameters/strip-parameters';
 import { stripUid } from '../deterministic-id';
 import { dicomAnnotations, mdcCode } from './dicom-annotations';
-import { dicomText, longStringLength } from './dicom-text';
+import { dicomText, longStringBytes } from './dicom-text';
 
 /** SOP classes (FM-40). */
 const twelveLeadClass = '1.2.840.10008.5.1.4.1.1.9.1.1';
@@ -99,7 +99,7 @@ function identification(recording: StripRecording, madeAt: Date): NaturalDataset
   const { year, month, day, hours, minutes, seconds } = utcText(madeAt);
   const date = `${year}${month}${day}`;
   const time = `${hours}${minutes}${seconds}`;
-  const title = dicomText(recording.parameters.title, longStringLength);
+  const title = dicomText(recording.parameters.title, longStringBytes);
   return {
     SpecificCharacterSet: 'ISO_IR 192',
     SOPInstanceUID: stripUid(recording, madeAt, 'instance'),
@@ -115,7 +115,7 @@ function identification(recording: StripRecording, madeAt: Date): NaturalDataset
     Modality: 'ECG',
     Manufacturer: 'Paceloom',
     ManufacturerModelName: 'Paceloom synthetic strip',
-    SoftwareVersions: dicomText(recording.engineVersion, longStringLength),
+    SoftwareVersions: dicomText(recording.engineVersion, longStringBytes),
     ReferringPhysicianName: '',
     StudyDescription: title === '' ? syntheticCaution : title,
     SeriesDescription: syntheticCaution,
@@ -160,7 +160,7 @@ function dicomWarnings({ parameters }: StripRecording, resampled: boolean, gener
     );
   }
   const title = parameters.title.trim();
-  if (dicomText(title, longStringLength) !== title) {
+  if (dicomText(title, longStringBytes) !== title) {
     warnings.push('the study description holds the title shortened; an annotation holds all of it');
   }
   return warnings;
