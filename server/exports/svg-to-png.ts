@@ -1,6 +1,7 @@
 import { createRequire } from 'node:module';
 import { Resvg } from '@resvg/resvg-js';
-import { withPixelDensity } from './png-density';
+import { syntheticCaution } from '../../shared/paper/cautions';
+import { withDescription, withPixelDensity } from './png-chunks';
 
 const require = createRequire(import.meta.url);
 
@@ -15,7 +16,7 @@ const fontFiles = [
 
 /**
  * Paints an SVG whose size is given in mm at `dpi` dots per inch (pixels = mm × dpi / 25.4, rounded up) and
- * notes the density in the file, so that it opens and prints at true scale. Only the project's own fonts are
+ * notes the density and the caution in the file, so that it opens and prints at true scale. Only the project's own fonts are
  * used. Throws when the SVG cannot be read.
  */
 export function svgToPng(svg: string, dpi: number): Buffer {
@@ -27,5 +28,5 @@ export function svgToPng(svg: string, dpi: number): Buffer {
       defaultFontFamily: 'IBM Plex Sans',
     },
   });
-  return withPixelDensity(image.render().asPng(), dpi);
+  return withPixelDensity(withDescription(image.render().asPng(), syntheticCaution), dpi);
 }
