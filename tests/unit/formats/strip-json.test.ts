@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { exporters } from '../../../server/exports/exporters';
 import { renderStrip } from '../../../shared/engine/render';
 import { nominalStart } from '../../../shared/formats/export-format';
-import { stripJson } from '../../../shared/formats/strip-json';
+import type { stripJson } from '../../../shared/formats/strip-json';
 import { parseStripParameters } from '../../../shared/parameters/parse';
 import { exportCases, fileBytes, longTitle } from '../../support/exports';
 import { buildStrip } from '../../support/strips';
