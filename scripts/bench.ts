@@ -1,13 +1,15 @@
 // `npm run bench`: figures measured in one run, as ratios where a reference exists. `-- --json` prints them as JSON.
 import { spawnSync } from 'node:child_process';
+import { exportLines, measureExports } from './bench/exports';
 import { measurePreview } from './bench/preview';
 import { measureHour, measureStrip } from './bench/strip';
 
 const strip12Lead10s = measureStrip();
 const hourStreamed = measureHour();
+const exports = await measureExports();
 spawnSync('node', ['scripts/start.mjs', '--build-only'], { stdio: 'ignore' });
 const preview = await measurePreview();
-const figures = { strip12Lead10s, hourStreamed, ...(preview ? { preview } : {}) };
+const figures = { strip12Lead10s, hourStreamed, exports, ...(preview ? { preview } : {}) };
 
 function ratioWords(): string {
   const { scipyMedianMs, ratio } = strip12Lead10s;
@@ -29,6 +31,7 @@ if (process.argv.includes('--json')) {
       `10 s, twelve leads, diagnostic: ${strip12Lead10s.medianMs.toFixed(2)} ms without pre-roll; ${ratioWords()}`,
       `pre-roll of 30 s: ${strip12Lead10s.preRollMs.toFixed(2)} ms more per strip`,
       `one hour of a difficult DDD patient streamed: ${hourStreamed.timesRealTime.toFixed(0)} × real time; resident memory at most ${hourStreamed.peakFirstQuarterMb.toFixed(0)} MB in its first quarter, ${hourStreamed.peakLastQuarterMb.toFixed(0)} MB in its last`,
+      ...exportLines(exports),
       previewWords(),
       '',
     ].join('\n'),

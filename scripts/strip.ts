@@ -13,7 +13,7 @@ async function run(args: string[]): Promise<void> {
     process.stdout.write(help);
     return;
   }
-  const warnings = await writeStrip(readParameters(command), command.outDirectory, command.formats);
+  const warnings = await writeStrip(readParameters(command), command);
   for (const warning of warnings) process.stderr.write(`warning, ${warning}\n`);
 }
 

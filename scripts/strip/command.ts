@@ -9,6 +9,8 @@ export interface StripCommand {
   assignments: string[];
   outDirectory: string;
   formats: ExportFormat[];
+  /** One strip.zip with a manifest instead of loose files. */
+  bundle: boolean;
 }
 
 const defaultFormats = 'csv,events,reading';
@@ -19,18 +21,20 @@ const options = {
   out: { type: 'string' },
   formats: { type: 'string', default: defaultFormats },
   set: { type: 'string', multiple: true, default: [] },
+  bundle: { type: 'boolean', default: false },
   help: { type: 'boolean', default: false },
 } satisfies ParseArgsConfig['options'];
 
 export const help = `Makes a paced ECG teaching strip from parameters.
 
-npm run --silent strip -- --in FILE --out DIR [--formats LIST] [--set path=value …]
-npm run --silent strip -- --preset NAME --out DIR [--formats LIST] [--set path=value …]
+npm run --silent strip -- --in FILE --out DIR [--formats LIST] [--bundle] [--set path=value …]
+npm run --silent strip -- --preset NAME --out DIR [--formats LIST] [--bundle] [--set path=value …]
 
   --in FILE       parameters as JSON; - reads standard input
   --preset NAME   a preset of the shipped gallery
   --out DIR       folder for the files; made when it is not there
   --formats LIST  of ${exportFormats.join(',')} (default ${defaultFormats})
+  --bundle        one strip.zip with a manifest and checksums instead of loose files
   --set path=value  changes one parameter, such as pacing.lowerRateBpm=70; may be repeated
 
 Exit code 0, or 2 with one line per problem (path, value, allowed range) on standard error.
@@ -49,7 +53,7 @@ function parse(args: string[]) {
     return refuse(
       'command line',
       (error as Error).message,
-      '--in, --preset, --out, --formats, --set, --help',
+      '--in, --preset, --out, --formats, --bundle, --set, --help',
     );
   }
 }
@@ -79,5 +83,6 @@ export function readCommand(args: string[]): StripCommand | 'help' {
     assignments: values.set,
     outDirectory: values.out ?? refuse('--out', undefined, 'a folder for the files'),
     formats: readFormats(values.formats),
+    bundle: values.bundle,
   };
 }

@@ -1,10 +1,14 @@
 import { mkdtempSync, mkdirSync, renameSync, rmSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
+import { bundleExports } from '../../server/exports/bundle';
 import { checkExport, exporters } from '../../server/exports/exporters';
 import { InvalidInputError } from '../../shared/errors';
-import { renderStrip } from '../../shared/engine/render';
-import type { ExportFormat } from '../../shared/formats/export-format';
+import { renderStrip, type StripRecording } from '../../shared/engine/render';
+import { nominalStart, type ExportFormat, type ExportOptions } from '../../shared/formats/export-format';
 import type { StripParameters } from '../../shared/parameters/strip-parameters';
+import type { StripCommand } from './command';
+
+const bundleName = 'strip.zip';
 
 /** A new folder inside `outDirectory` for files that are not complete yet. Throws when the folder cannot be made. */
 function workingDirectory(outDirectory: string): string {
@@ -23,36 +27,59 @@ function workingDirectory(outDirectory: string): string {
   }
 }
 
-/** Renders a strip and writes every file of the formats into `directory`. Returns their names, and the warnings. */
-async function writeFiles(parameters: StripParameters, directory: string, formats: readonly ExportFormat[]) {
-  const recording = renderStrip(parameters);
-  const names: string[] = [];
-  const warnings: string[] = [];
+const options: ExportOptions = { madeAt: nominalStart };
+
+interface Written {
+  names: string[];
+  warnings: string[];
+}
+
+/** Writes every file of the formats into `directory`. */
+async function writeFiles(
+  recording: StripRecording,
+  directory: string,
+  formats: readonly ExportFormat[],
+): Promise<Written> {
+  const written: Written = { names: [], warnings: [] };
   for (const format of formats) {
-    const result = await exporters[format](recording);
-    warnings.push(...result.warnings.map((warning) => `${format}: ${warning}`));
-    for (const { name, parts } of result.files) {
+    const { files, warnings } = await exporters[format](recording, options);
+    written.warnings.push(...warnings.map((warning) => `${format}: ${warning}`));
+    for (const { name, parts } of files) {
       writeFileSync(join(directory, name), '');
       for (const part of parts) writeFileSync(join(directory, name), part, { flag: 'a' });
-      names.push(name);
+      written.names.push(name);
     }
   }
-  return { names, warnings };
+  return written;
+}
+
+/** Writes strip.zip into `directory`. */
+async function writeBundle(
+  recording: StripRecording,
+  directory: string,
+  formats: readonly ExportFormat[],
+): Promise<Written> {
+  const { bytes, manifest } = await bundleExports(recording, formats, options);
+  writeFileSync(join(directory, bundleName), bytes);
+  return {
+    names: [bundleName],
+    warnings: manifest.warnings.map(({ format, text }) => `${format}: ${text}`),
+  };
 }
 
 /**
- * Renders a strip and writes its files. They are written beside their place and moved there when all are complete,
- * so nothing is left half-written. Returns the exporters' warnings, each with its format.
+ * Renders a strip and writes its files, or one archive of them. They are written beside their place and moved there when
+ * all are complete, so nothing is left half-written. Returns the exporters' warnings, each with its format.
  */
 export async function writeStrip(
   parameters: StripParameters,
-  outDirectory: string,
-  formats: readonly ExportFormat[],
+  { outDirectory, formats, bundle }: Pick<StripCommand, 'outDirectory' | 'formats' | 'bundle'>,
 ): Promise<string[]> {
   checkExport(parameters, formats);
   const unfinished = workingDirectory(outDirectory);
   try {
-    const { names, warnings } = await writeFiles(parameters, unfinished, formats);
+    const write = bundle ? writeBundle : writeFiles;
+    const { names, warnings } = await write(renderStrip(parameters), unfinished, formats);
     for (const name of names) renameSync(join(unfinished, name), join(outDirectory, name));
     return warnings;
   } finally {

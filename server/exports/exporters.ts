@@ -2,10 +2,16 @@ import { InvalidInputError } from '../../shared/errors';
 import type { StripRecording } from '../../shared/engine/render';
 import { csvHeader, stripCsvRows } from '../../shared/formats/csv';
 import type { Exporter, ExportFormat } from '../../shared/formats/export-format';
+import { encodeEdf } from '../../shared/formats/edf/edf';
+import { stripJson } from '../../shared/formats/strip-json';
 import { drawingToSvg } from '../../shared/formats/svg';
+import { encodeWav } from '../../shared/formats/wav';
+import { encodeWfdb } from '../../shared/formats/wfdb/wfdb';
 import { longestDrawnS } from '../../shared/paper/layout';
 import { layoutStripSheet } from '../../shared/paper/sheet';
 import type { StripParameters } from '../../shared/parameters/strip-parameters';
+import { encodeAecg } from './aecg/aecg';
+import { encodeDicom } from './dicom/dicom';
 import { svgToPng } from './svg-to-png';
 
 /** Resolution of PNG files, dots per inch. */
@@ -51,6 +57,12 @@ export const exporters: Readonly<Record<ExportFormat, Exporter>> = {
   csv: (recording) => oneFile('strip.csv', 'text/csv', csvParts(recording)),
   events: ({ events }) => oneFile('events.json', 'application/json', [json(events)]),
   reading: ({ reading }) => oneFile('reading.json', 'application/json', [json(reading)]),
+  json: (recording) => oneFile('strip.json', 'application/json', [json(stripJson(recording))]),
   svg: (recording) => oneFile('strip.svg', 'image/svg+xml', [svg(recording)]),
   png: (recording) => oneFile('strip.png', 'image/png', [svgToPng(svg(recording), pngDpi)]),
+  edf: encodeEdf,
+  wfdb: encodeWfdb,
+  dicom: encodeDicom,
+  aecg: encodeAecg,
+  wav: encodeWav,
 };

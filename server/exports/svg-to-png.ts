@@ -1,10 +1,11 @@
 import { Resvg } from '@resvg/resvg-js';
+import { syntheticCaution } from '../../shared/paper/cautions';
 import { fontFiles } from './fonts';
-import { withPixelDensity } from './png-density';
+import { withDescription, withPixelDensity } from './png-chunks';
 
 /**
  * Paints an SVG whose size is given in mm at `dpi` dots per inch (pixels = mm × dpi / 25.4, rounded up) and
- * notes the density in the file, so that it opens and prints at true scale. Only the project's own fonts are
+ * notes the density and the caution in the file, so that it opens and prints at true scale. Only the project's own fonts are
  * used. Throws when the SVG cannot be read.
  */
 export function svgToPng(svg: string, dpi: number): Buffer {
@@ -16,5 +17,5 @@ export function svgToPng(svg: string, dpi: number): Buffer {
       defaultFontFamily: 'IBM Plex Sans',
     },
   });
-  return withPixelDensity(image.render().asPng(), dpi);
+  return withPixelDensity(withDescription(image.render().asPng(), syntheticCaution), dpi);
 }

@@ -19,10 +19,14 @@ const fontStacks: Readonly<Record<FontFamily, string>> = {
 /** Characters that XML 1.0 does not allow even when escaped (section 2.2), and lone surrogates. */
 const forbiddenInXml = /[^\t\n\r\u{20}-\u{D7FF}\u{E000}-\u{FFFD}\u{10000}-\u{10FFFF}]/gu;
 
+/** Text without the characters that XML cannot hold. */
+export function allowedInXml(text: string): string {
+  return text.replace(forbiddenInXml, '');
+}
+
 /** Text for XML content or a quoted attribute. */
 export function escapeXml(text: string): string {
-  return text
-    .replace(forbiddenInXml, '')
+  return allowedInXml(text)
     .replace(/&/gu, '&amp;')
     .replace(/</gu, '&lt;')
     .replace(/>/gu, '&gt;')

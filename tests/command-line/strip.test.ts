@@ -2,6 +2,7 @@ import { spawnSync } from 'node:child_process';
 import { existsSync, mkdtempSync, readdirSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
+import { unzipSync } from 'fflate';
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
 import { decodePng } from '../support/png';
 
@@ -16,7 +17,7 @@ const out = (): string => join(folder, 'out');
 const read = (name: string): string => readFileSync(join(out(), name), 'utf8');
 
 describe('strip command', () => {
-  it('writes a preset in every format', () => {
+  it('writes a preset as samples, truth and sheet', () => {
     const { status, stderr } = strip([
       '--preset',
       'av-sequential-pacing',
@@ -42,6 +43,34 @@ describe('strip command', () => {
     expect(JSON.parse(read('reading.json'))).toMatchObject({ avIntervalMs: 180 });
     expect(read('strip.svg')).toContain('Synthetic teaching strip, not a patient recording');
     expect(decodePng(readFileSync(join(out(), 'strip.png'))).widthPx).toBeGreaterThan(1000);
+  });
+
+  it('writes every open format, each under its name, and its warnings to standard error', () => {
+    const { status, stderr } = strip(
+      ['--in', '-', '--out', out(), '--formats', 'json,edf,wfdb,dicom,aecg,wav'],
+      '{"durationS": 2.002, "title": "Été", "recorder": {"sampleRateHz": 2000}}',
+    );
+    expect(status).toBe(0);
+    expect(readdirSync(out()).sort()).toEqual(
+      ['atr', 'dat', 'dcm', 'edf', 'hea', 'json', 'wav', 'xml'].map((ending) => `strip.${ending}`),
+    );
+    const said = stderr.trimEnd().split('\n');
+    expect(said).toContain(
+      'warning, wav: For isolated, attenuated simulator inputs only; never connect to a person.',
+    );
+    expect(said.some((line) => line.startsWith('warning, dicom: resampled from 2000 to 1000'))).toBe(true);
+    expect(said.some((line) => line.startsWith('warning, edf: the last record is filled'))).toBe(true);
+  });
+
+  it('packs the files into one archive with --bundle', () => {
+    const { status } = strip(
+      ['--in', '-', '--out', out(), '--formats', 'csv,svg,edf', '--bundle'],
+      '{"seed": 3}',
+    );
+    expect(status).toBe(0);
+    expect(readdirSync(out())).toEqual(['strip.zip']);
+    const names = Object.keys(unzipSync(readFileSync(join(out(), 'strip.zip'))));
+    expect(names).toEqual(['strip.csv', 'strip.svg', 'strip.edf', 'manifest.json']);
   });
 
   it('takes parameters from standard input and changes them', () => {

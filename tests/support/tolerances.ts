@@ -18,3 +18,8 @@ export const forgottenMv = 1e-6;
 export const sineFit = 1e-4;
 /** Filters at 8 kHz bend frequencies a little; −3 dB points and widths are met this well, ratio. */
 export const designRatio = 1e-3;
+/**
+ * Files whose steps are the quantiser's hold every sample exactly; what is left is Float32 in mV (1e-3 µV at 20 mV) and a
+ * header field of seven characters, µV.
+ */
+export const exactFileUv = 0.02;

@@ -17,6 +17,11 @@ function chunk(type: string, data: Buffer): Buffer {
   return Buffer.concat([length, body, check]);
 }
 
+/** The file with a chunk right after its header. */
+function withChunk(png: Buffer, added: Buffer): Buffer {
+  return Buffer.concat([png.subarray(0, endOfHeaderChunk), added, png.subarray(endOfHeaderChunk)]);
+}
+
 /**
  * The PNG with a pHYs chunk (section 11.3.4.3) right after its header: whole pixels per metre, so 300 dpi is
  * kept to 4 parts in a million. The file must not have one yet.
@@ -27,9 +32,10 @@ export function withPixelDensity(png: Buffer, dpi: number): Buffer {
   data.writeUInt32BE(pixelsPerM, 0);
   data.writeUInt32BE(pixelsPerM, 4);
   data.writeUInt8(perMetre, 8);
-  return Buffer.concat([
-    png.subarray(0, endOfHeaderChunk),
-    chunk('pHYs', data),
-    png.subarray(endOfHeaderChunk),
-  ]);
+  return withChunk(png, chunk('pHYs', data));
+}
+
+/** The PNG with a tEXt chunk (section 11.3.3.2) of the keyword Description; `text` in Latin-1. */
+export function withDescription(png: Buffer, text: string): Buffer {
+  return withChunk(png, chunk('tEXt', Buffer.from(`Description\0${text}`, 'latin1')));
 }
