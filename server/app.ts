@@ -15,6 +15,7 @@ import { healthRoutes } from './routes/health/health-routes';
 import { registerRoutes } from './routes/register-routes';
 import { sessionRoutes } from './routes/session/session-routes';
 import { recorderRoutes } from './routes/recorder/recorder-routes';
+import { presetRoutes } from './routes/presets/preset-routes';
 import { renderRoutes } from './routes/strips/render-routes';
 import { stripRoutes } from './routes/strips/strip-routes';
 import type { ReportPool } from './services/recorder/report-pool';
@@ -74,6 +75,7 @@ export function createApp(dependencies: AppDependencies): Express {
     ...sessionRoutes(session, signInLimit(signInLimits)),
     ...renderRoutes({ database, renderPool }),
     ...recorderRoutes({ reportPool, productVersion, now }),
+    ...presetRoutes({ database, now }),
     ...stripRoutes({ database, now }),
   });
   app.use('/api', noSuchRoute);

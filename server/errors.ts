@@ -55,7 +55,31 @@ export const staleStrip = (current: unknown): AppError =>
     details: { current },
   });
 
-export const tooLarge = (): AppError => new AppError('tooLarge', 'The request is too large.');
+export const tooLarge = (message = 'The request is too large.'): AppError =>
+  new AppError('tooLarge', message);
+
+export const newerFile = (message: string): AppError => new AppError('newerFile', message);
+
+/** Problems that an answer lists; the rest is counted. */
+const mostProblems = 50;
+
+/** `problems`: all that was found in the file. */
+export const presetFileRefused = (problems: readonly Problem[]): AppError => {
+  const count =
+    problems.length === 1 ? 'One thing in it is wrong' : `${problems.length} things in it are wrong`;
+  return new AppError('invalidInput', `This file cannot be imported. ${count}. Nothing was changed.`, {
+    problems: problems.slice(0, mostProblems),
+    details: { more: Math.max(0, problems.length - mostProblems) },
+  });
+};
+
+/** `analysis` is what the file would do now, as the API presents it. */
+export const staleImport = (analysis: unknown): AppError =>
+  new AppError(
+    'staleImport',
+    'The library changed after the file was looked at. Nothing was imported; look at the choices again.',
+    { details: { analysis } },
+  );
 
 export const wrongContentType = (): AppError =>
   new AppError('wrongContentType', 'Send JSON, with the content type application/json.');

@@ -22,6 +22,8 @@ export const routeAccess = {
   'GET /api/strips': makesStrips,
   'POST /api/strips': makesStrips,
   'POST /api/strips/render': makesStrips,
+  'POST /api/strips/export': makesStrips,
+  'POST /api/strips/import': makesStrips,
   'GET /api/strips/:stripId': makesStrips,
   'PUT /api/strips/:stripId': makesStrips,
   'DELETE /api/strips/:stripId': makesStrips,

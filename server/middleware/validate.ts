@@ -4,7 +4,8 @@ import { problemsOf } from '../../shared/parameters/parse';
 import { stripIdSchema } from '../../shared/api/strip-id';
 import { invalidInput, notFound } from '../errors';
 
-function parsed<Schema extends z.ZodType>(schema: Schema, input: unknown): z.output<Schema> {
+/** An input as the schema has it; throws `invalidInput` with every problem. */
+export function parsed<Schema extends z.ZodType>(schema: Schema, input: unknown): z.output<Schema> {
   const result = schema.safeParse(input);
   if (result.success) return result.data;
   throw invalidInput(problemsOf(schema, input, result.error));

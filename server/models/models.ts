@@ -54,6 +54,7 @@ export interface StripRow extends Row<StripRow> {
   version: number;
   /** The engine that it was last saved with. */
   engineVersion: CreationOptional<string>;
+  presetId: CreationOptional<string | null>;
   shippedStamp: CreationOptional<string | null>;
   createdAt: string;
   updatedAt: string;
@@ -120,6 +121,7 @@ export function defineModels(sequelize: Sequelize): Models {
       searchText: text(),
       version: integer(),
       engineVersion: { ...text(), defaultValue: '1.0.0' },
+      presetId: optionalText(),
       shippedStamp: optionalText(),
       createdAt: text(),
       updatedAt: text(),

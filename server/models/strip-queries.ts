@@ -1,4 +1,4 @@
-import { QueryTypes, type Sequelize } from 'sequelize';
+import { QueryTypes, type Sequelize, type Transaction } from 'sequelize';
 import type { StripListQuery } from '../../shared/api/strip-list';
 import { courseGroups, type CourseGroupId } from '../../shared/gallery/course';
 import { keeperSql, type Where } from './strip-filter';
@@ -10,8 +10,9 @@ async function select<Result extends object>(
   sequelize: Sequelize,
   sql: string,
   bind: Record<string, string | number>,
+  transaction?: Transaction,
 ): Promise<Result[]> {
-  return sequelize.query<Result>(sql, { bind, type: QueryTypes.SELECT });
+  return sequelize.query<Result>(sql, { bind, type: QueryTypes.SELECT, transaction });
 }
 
 /** Place of a strip's group in the course; those without one come last. */
@@ -101,4 +102,23 @@ export async function countStrips(sequelize: Sequelize, where: Where): Promise<n
     where.bind,
   );
   return count;
+}
+
+/** Ids of the strips that one of these presets may be: by its id here or where it came from, or by its title. */
+export async function selectPresetCandidates(
+  sequelize: Sequelize,
+  where: Where,
+  presets: readonly { presetId: string | null; title: string }[],
+  transaction?: Transaction,
+): Promise<string[]> {
+  const presetIds = JSON.stringify(presets.flatMap(({ presetId }) => presetId ?? []));
+  const titles = JSON.stringify(presets.map(({ title }) => title));
+  const rows = await select<{ id: string }>(
+    sequelize,
+    `SELECT s.id FROM strips s WHERE ${where.sql} AND (s.id IN (SELECT value FROM json_each($presetIds))
+       OR s.preset_id IN (SELECT value FROM json_each($presetIds)) OR s.title IN (SELECT value FROM json_each($titles)))`,
+    { ...where.bind, presetIds, titles },
+    transaction,
+  );
+  return rows.map((row) => row.id);
 }

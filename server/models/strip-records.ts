@@ -21,6 +21,8 @@ export interface StripRecord {
   version: number;
   /** The engine that it was last saved with. */
   engineVersion: string;
+  /** The id it had in the preset file that it came with; null when it was made here. */
+  presetId: string | null;
   createdAt: string;
   updatedAt: string;
   deletedAt: string | null;
@@ -35,6 +37,8 @@ export interface StripContent {
   visibility: Visibility;
   /** Complete parameters; `notes` is searched. */
   parameters: { notes: string };
+  /** The engine that it was last saved with; this one unless it comes from elsewhere. */
+  engineVersion?: string;
 }
 
 /** Columns that follow from a strip's content. */
@@ -46,7 +50,7 @@ export function contentColumns(content: StripContent) {
     groupId: content.groupId,
     visibility: content.visibility,
     parameters: JSON.stringify(content.parameters),
-    engineVersion,
+    engineVersion: content.engineVersion ?? engineVersion,
     searchText: searchTextOf([
       content.title,
       content.teachingPoint,
@@ -70,7 +74,7 @@ export async function writeTags(
 
 function toRecord(row: StripRow, ownerNames: Map<string, string>, tags: string[]): StripRecord {
   const { id, departmentId, visibility, title, teachingPoint, groupId, parameters } = row;
-  const { version, engineVersion: savedWith, createdAt, updatedAt, deletedAt } = row;
+  const { version, engineVersion: savedWith, presetId, createdAt, updatedAt, deletedAt } = row;
   return {
     id,
     owner: row.ownerId === null ? null : { id: row.ownerId, name: ownerNames.get(row.ownerId) ?? '' },
@@ -83,6 +87,7 @@ function toRecord(row: StripRow, ownerNames: Map<string, string>, tags: string[]
     parameters,
     version,
     engineVersion: savedWith,
+    presetId,
     createdAt,
     updatedAt,
     deletedAt,

@@ -1,12 +1,16 @@
 import type { Express, RequestHandler } from 'express';
 import { authorize, routeAccess, type RouteKey } from '../middleware/authorize';
 import { jsonBody } from '../middleware/json-body';
+import { presetUpload } from '../middleware/preset-upload';
 import { methodNotAllowed } from '../errors';
 
 /** One handler, or a chain, for each line of the access table. */
 export type RouteHandlers<Keys extends RouteKey = RouteKey> = Readonly<
   Record<Keys, RequestHandler | RequestHandler[]>
 >;
+
+/** Routes that take something other than JSON. */
+const bodyReaders: Partial<Record<RouteKey, RequestHandler>> = { 'POST /api/strips/import': presetUpload };
 
 type Method = 'get' | 'post' | 'put' | 'delete';
 
@@ -21,7 +25,7 @@ export function registerRoutes(app: Express, handlers: RouteHandlers): void {
   const methodsOf = new Map<string, string[]>();
   for (const key of keys) {
     const { method, path } = split(key);
-    app[method](path, authorize(key), jsonBody, handlers[key]);
+    app[method](path, authorize(key), bodyReaders[key] ?? jsonBody, handlers[key]);
     methodsOf.set(path, [...(methodsOf.get(path) ?? []), method.toUpperCase()]);
   }
   for (const [path, methods] of methodsOf) {

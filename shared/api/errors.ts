@@ -6,6 +6,8 @@ export const errorStatuses = {
   invalidInput: 400,
   /** A render of more than `longestRenderS`: it belongs to an export job. */
   longStrip: 400,
+  /** A file that a newer version of the product wrote. */
+  newerFile: 400,
   /** Wrong e-mail or password. */
   signInFailed: 401,
   /** No session, or one that has ended. */
@@ -20,6 +22,8 @@ export const errorStatuses = {
   methodNotAllowed: 405,
   /** Someone saved in between; `details.current` is the strip as it now stands. */
   staleStrip: 409,
+  /** The library changed between looking at a preset file and importing it; `details.analysis` is a new look. */
+  staleImport: 409,
   tooLarge: 413,
   wrongContentType: 415,
   /** Sign-in is locked for a while; `Retry-After` says for how many seconds. */
@@ -34,7 +38,12 @@ export const errorStatuses = {
 
 export type ApiErrorId = keyof typeof errorStatuses;
 
-export const problemSchema = z.object({ path: z.string(), value: z.string(), allowed: z.string() });
+export const problemSchema = z.object({
+  item: z.string().optional(),
+  path: z.string(),
+  value: z.string(),
+  allowed: z.string(),
+});
 
 const errorIds = Object.keys(errorStatuses) as [ApiErrorId, ...ApiErrorId[]];
 

@@ -1,8 +1,13 @@
 import { z } from 'zod';
 import { courseGroups, type CourseGroupId } from '../gallery/course';
 import { stripParametersSchema } from '../parameters/strip-parameters';
+import {
+  keptParametersSchema,
+  tagsSchema,
+  teachingPointSchema,
+  titleSchema,
+} from '../parameters/strip-texts';
 import { stripIdSchema } from './strip-id';
-import { foldText, isPlainText, plainText, plainTextRule, requiredText } from './text';
 
 const groupIds = courseGroups.map((group) => group.id) as [CourseGroupId, ...CourseGroupId[]];
 export const courseGroupIdSchema = z.enum(groupIds);
@@ -12,33 +17,7 @@ export const visibilities = ['private', 'department'] as const;
 export const visibilitySchema = z.enum(visibilities);
 export type Visibility = z.infer<typeof visibilitySchema>;
 
-export const mostTags = 12;
-export const longestTag = 40;
-
-const titleSchema = requiredText({
-  label: 'Title',
-  maxLength: 120,
-  help: 'Shown on the sheet and in the library.',
-});
-const teachingPointSchema = plainText({
-  label: 'Teaching point',
-  maxLength: 500,
-  help: 'What a learner should see, in one or two sentences.',
-});
-export const tagSchema = requiredText({ label: 'Tag', maxLength: longestTag, help: 'A word or two.' });
-const tagsSchema = z
-  .array(tagSchema)
-  .max(mostTags)
-  .refine((tags) => new Set(tags.map(foldText)).size === tags.length, {
-    params: { allowed: 'each tag at most once, whatever its case and accents' },
-    message: 'names a tag twice',
-  });
-
-/** Parameters of a strip that is kept; its notes may hold no control characters (its title is the strip's). */
-const keptParametersSchema = stripParametersSchema.refine(({ notes }) => isPlainText(notes), {
-  path: ['notes'],
-  ...plainTextRule,
-});
+export { longestTag, mostTags, tagSchema } from '../parameters/strip-texts';
 
 /** POST /api/strips. `title` also becomes `parameters.title`: a kept strip has one title. */
 export const createStripSchema = z.strictObject({

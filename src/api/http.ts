@@ -23,6 +23,7 @@ export class ApiError extends Error {
 
 export interface ApiRequest {
   method?: 'GET' | 'POST' | 'PUT' | 'DELETE';
+  /** Sent as JSON; a form as it is, with its files. */
   body?: unknown;
   signal?: AbortSignal;
 }
@@ -34,6 +35,13 @@ async function failureOf(response: Response): Promise<ApiError> {
   return new ApiError(body.success ? body.data.error : { id: 'unexpected' }, retryAfterS);
 }
 
+/** The body as fetch takes it; a form brings its own content type. */
+function bodyInit(body: unknown): Pick<RequestInit, 'body' | 'headers'> {
+  if (body === undefined) return {};
+  if (body instanceof FormData) return { body };
+  return { headers: { 'Content-Type': 'application/json' }, body: JSON.stringify(body) };
+}
+
 async function send(path: string, { method = 'GET', body, signal }: ApiRequest): Promise<Response> {
   let response: Response;
   try {
@@ -41,8 +49,7 @@ async function send(path: string, { method = 'GET', body, signal }: ApiRequest):
       method,
       signal,
       credentials: 'same-origin',
-      headers: body === undefined ? {} : { 'Content-Type': 'application/json' },
-      body: body === undefined ? undefined : JSON.stringify(body),
+      ...bodyInit(body),
     });
   } catch (error) {
     if (signal?.aborted) throw error;

@@ -2,6 +2,8 @@
 export const paths = {
   signIn: (from?: string) => (from ? `/sign-in?from=${encodeURIComponent(from)}` : '/sign-in'),
   strips: () => '/strips',
+  /** The strips changed last, first. */
+  latestStrips: () => '/strips?sort=updated',
   newStrip: () => '/strips/new',
   strip: (stripId: string) => `/strips/${encodeURIComponent(stripId)}`,
   recorder: (search?: URLSearchParams) => `/recorder${search ? `?${search.toString()}` : ''}`,

@@ -59,6 +59,13 @@ const cases: RouteCase[] = [
     expected: makers(400),
   },
   {
+    route: 'POST /api/strips/export',
+    path: '/api/strips/export',
+    body: { ids: [shared] },
+    expected: makers(200, { otherDepartment: 404 }),
+  },
+  { route: 'POST /api/strips/import', path: '/api/strips/import', body: {}, expected: makers(400) },
+  {
     route: 'GET /api/strips/:stripId',
     path: `/api/strips/${shared}`,
     expected: makers(200, { otherDepartment: 404 }),

@@ -1,11 +1,14 @@
 import { useCallback, useEffect, useMemo, useState } from 'react';
+import { presetFileName } from '../../../shared/api/preset-files';
 import type { Strip } from '../../../shared/api/strips';
 import { drawsDifferently, engineVersion } from '../../../shared/engine/engine-version';
 import type { StripParameters } from '../../../shared/parameters/strip-parameters';
+import { requestPresetFile } from '../../api/preset-files';
 import { Button } from '../../components/button';
 import { ConfirmDialog } from '../../components/dialog';
 import { Notice } from '../../components/notice';
 import { useToast } from '../../components/toast';
+import { download } from '../../lib/download';
 import { copyPicture } from './commands/copy-picture';
 import { useEditorShortcuts } from './commands/use-editor-shortcuts';
 import { DetailsDialog } from './components/details-dialog';
@@ -138,6 +141,15 @@ export function StripEditor({ strip, initial, origin, onSavedAs, onDuplicate }: 
     const outcome = await copyPicture(preview.recorded, view.twelve);
     toast(outcome === 'copied' ? 'Picture copied' : 'Picture saved as strip.png');
   };
+  const savePreset = async (): Promise<void> => {
+    if (!saved) return;
+    try {
+      const bytes = await requestPresetFile({ ids: [saved.id] });
+      download(presetFileName, 'application/json', bytes);
+    } catch (error) {
+      toast(`The preset file was not saved. ${(error as Error).message}`);
+    }
+  };
   const newTitle = saved ? `${saved.title} (copy)` : parameters.title;
   useEditorShortcuts({ undo: editor.undo, redo: editor.redo, save: () => void saveVersion() });
 
@@ -153,6 +165,7 @@ export function StripEditor({ strip, initial, origin, onSavedAs, onDuplicate }: 
         onSaveAs={() => setDialog('saveNew')}
         onDetails={() => setDialog('details')}
         onDuplicate={onDuplicate}
+        onSavePreset={() => void savePreset()}
         onCopyAddress={() => void copyAddress()}
         onCopyPicture={() => void copy()}
       />

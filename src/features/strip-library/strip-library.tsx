@@ -18,6 +18,8 @@ import { Filters } from './filters';
 import { readLibraryState, writeLibraryState } from './library-query';
 import { SearchBox } from './search-box';
 import { StripCard, type StripActions } from './strip-card';
+import { ImportDialog } from './presets/import-dialog';
+import { usePresetFiles } from './presets/use-preset-files';
 import { StripTable } from './strip-table';
 
 const sortOptions = [
@@ -90,7 +92,7 @@ function Pages({ list, onPage }: { list: StripListResponse; onPage(page: number)
   );
 }
 
-function useStripActions(): {
+function useStripActions(onSavePreset: StripActions['onSavePreset']): {
   actions: StripActions;
   confirming: Strip | null;
   confirm(): void;
@@ -123,6 +125,7 @@ function useStripActions(): {
     actions: {
       onOpen: (strip) => void navigate(paths.strip(strip.id)),
       onDuplicate: (strip) => duplicating.mutate(strip),
+      onSavePreset,
       onDelete: setConfirming,
     },
     confirming,
@@ -160,7 +163,11 @@ export function StripLibrary() {
   const [search, setSearch] = useSearchParams();
   const { query, view } = readLibraryState(search);
   const { data: list, error, isPending, refetch } = useQuery(stripListQuery(query));
-  const { actions, confirming, confirm, cancel } = useStripActions();
+  const [importing, setImporting] = useState(false);
+  const presets = usePresetFiles();
+  const { actions, confirming, confirm, cancel } = useStripActions((strip) =>
+    presets.save({ ids: [strip.id] }),
+  );
   const change = (changed: Record<string, string | string[] | null>): void =>
     setSearch((current) => writeLibraryState(current, changed), { replace: true });
   const filters = { query, facets: list?.facets ?? null, onChange: change };
@@ -168,6 +175,10 @@ export function StripLibrary() {
   const sortBy = (sort: StripSort): void => {
     const turned = sort === query.sort && direction === 'ascending' ? 'descending' : 'ascending';
     change({ sort, direction: sort === query.sort ? turned : null });
+  };
+  const saveShown = (): void => {
+    const { search: words, tag, keptBy, group } = query;
+    presets.save({ filter: { search: words, tag, keptBy, group } });
   };
   const filtered =
     query.search !== '' || query.tag.length > 0 || query.keptBy !== 'everyone' || query.group !== undefined;
@@ -199,6 +210,7 @@ export function StripLibrary() {
             options={sortOptions}
             onChange={(sort) => change({ sort: sort === 'course' ? null : sort, direction: null })}
           />
+          <Button onClick={() => setImporting(true)}>Import presets</Button>
           <Link to={paths.newStrip()} className={buttonClass('primary')}>
             New strip
           </Link>
@@ -245,11 +257,27 @@ export function StripLibrary() {
           ))}
         {list && <Pages list={list} onPage={(page) => change({ page: String(page) })} />}
         {list && (
-          <p role="status" className="mt-4 text-caption text-ink-3">
-            {list.total === 1 ? '1 strip' : `${list.total} strips`}
-          </p>
+          <div className="mt-4 flex flex-wrap items-center gap-x-4 gap-y-2">
+            <p role="status" className="text-caption text-ink-3">
+              {list.total === 1 ? '1 strip' : `${list.total} strips`}
+            </p>
+            {list.total > 0 && (
+              <Button small kind="quiet" disabled={presets.saving} onClick={saveShown}>
+                {list.total === 1 ? 'Save it as a preset file' : `Save all ${list.total} as a preset file`}
+              </Button>
+            )}
+          </div>
         )}
       </main>
+      {importing && (
+        <ImportDialog
+          onClose={() => setImporting(false)}
+          onDone={(result) => {
+            setImporting(false);
+            presets.announce(result);
+          }}
+        />
+      )}
       <ConfirmDialog
         open={confirming !== null}
         title={`Delete “${confirming?.title ?? ''}”?`}

@@ -16,6 +16,7 @@ interface TitleBarProps {
   onSaveAs(): void;
   onDetails(): void;
   onDuplicate(): void;
+  onSavePreset(): void;
   onCopyAddress(): void;
   onCopyPicture(): void;
 }
@@ -78,6 +79,7 @@ export function TitleBar(props: TitleBarProps) {
           <MenuItem onSelect={props.onSaveAs}>Save as a new strip</MenuItem>
           {strip?.canEdit && <MenuItem onSelect={props.onDetails}>Title, teaching point, tags</MenuItem>}
           {strip && <MenuItem onSelect={props.onDuplicate}>Duplicate the saved strip</MenuItem>}
+          {strip && <MenuItem onSelect={props.onSavePreset}>Preset file of the saved strip</MenuItem>}
           <MenuItem onSelect={props.onCopyAddress}>Copy address of this draft</MenuItem>
         </Menu>
         <Button onClick={props.onCopyPicture}>Copy picture</Button>
