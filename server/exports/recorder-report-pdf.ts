@@ -143,14 +143,16 @@ export function recorderReportPdf(conformance: Conformance, origin: ReportOrigin
   writeHeading(doc, conformance, origin);
   const columns = columnsOf(doc, conformance.settings.length);
   const head = (text: string): Line => ({ text, font: 'sans600', size: 8, colour: ink });
-  writeRow(doc, columns, [
+  const headRow = [
     [head('What is applied')],
     [head('Limit')],
     ...conformance.settings.map(({ name, band, sampleRateHz, resolutionUv }) => [
       head(name),
       small(`${band}; ${sampleRateHz} samples/s; ${resolutionUv} µV`),
     ]),
-  ]);
+  ];
+  writeRow(doc, columns, headRow);
+  doc.on('pageAdded', () => writeRow(doc, columns, headRow));
   for (const row of conformance.rows) {
     const limit: Line = { text: row.limit, font: 'sans400', size: 8, colour: ink };
     writeRow(doc, columns, [requirementLines(row), [limit], ...row.findings.map(findingLines)]);

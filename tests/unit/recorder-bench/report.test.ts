@@ -73,6 +73,7 @@ describe('the conformance report', () => {
     expect(marginWords(null)).toBe('');
     expect(marginWords(0.62)).toBe('62 % of the limit left');
     expect(marginWords(-0.27)).toBe('beyond the limit by 27 %');
+    expect(marginWords(1.94)).toBe('100 % of the limit left');
     expect(marginWords(0.004)).toBe('0.4 % of the limit left');
   });
 });
