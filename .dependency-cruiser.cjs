@@ -51,6 +51,13 @@ module.exports = {
       to: { path: '^shared/(paper|formats|gallery)/' },
     },
     {
+      name: 'recorder-bench-measures',
+      comment: 'The bench measures strips and the recorder; nothing that makes a strip leans on it.',
+      severity: 'error',
+      from: { path: '^shared/(engine|ladder|gallery|paper|formats|parameters)/' },
+      to: { path: '^shared/recorder-bench/' },
+    },
+    {
       name: 'formats-know-no-services',
       severity: 'error',
       comment: 'Encoders are pure: samples in, bytes out.',

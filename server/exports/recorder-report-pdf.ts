@@ -8,7 +8,7 @@ import {
   summary,
   type ReportOrigin,
 } from '../../shared/recorder-bench/report';
-import { fontFiles } from './fonts';
+import { fontCuts, fontForPdf, type FontCut } from './fonts';
 
 /** Points a millimetre. */
 const mm = 72 / 25.4;
@@ -40,7 +40,7 @@ function columnsOf(doc: Doc, settings: number): Column[] {
 
 interface Line {
   text: string;
-  font: keyof typeof fontFiles;
+  font: FontCut;
   size: number;
   colour: string;
 }
@@ -135,7 +135,7 @@ export function recorderReportPdf(conformance: Conformance, origin: ReportOrigin
       CreationDate: new Date(`${origin.madeOn}T00:00:00Z`),
     },
   });
-  for (const [name, file] of Object.entries(fontFiles)) doc.registerFont(name, file);
+  for (const cut of fontCuts) doc.registerFont(cut, fontForPdf(cut));
   const parts: Uint8Array[] = [];
   doc.on('data', (part: Uint8Array) => parts.push(part));
   const ended = new Promise<Uint8Array>((done) => doc.on('end', () => done(Buffer.concat(parts))));
@@ -143,14 +143,16 @@ export function recorderReportPdf(conformance: Conformance, origin: ReportOrigin
   writeHeading(doc, conformance, origin);
   const columns = columnsOf(doc, conformance.settings.length);
   const head = (text: string): Line => ({ text, font: 'sans600', size: 8, colour: ink });
-  writeRow(doc, columns, [
+  const headRow = [
     [head('What is applied')],
     [head('Limit')],
     ...conformance.settings.map(({ name, band, sampleRateHz, resolutionUv }) => [
       head(name),
       small(`${band}; ${sampleRateHz} samples/s; ${resolutionUv} µV`),
     ]),
-  ]);
+  ];
+  writeRow(doc, columns, headRow);
+  doc.on('pageAdded', () => writeRow(doc, columns, headRow));
   for (const row of conformance.rows) {
     const limit: Line = { text: row.limit, font: 'sans400', size: 8, colour: ink };
     writeRow(doc, columns, [requirementLines(row), [limit], ...row.findings.map(findingLines)]);

@@ -62,6 +62,18 @@ function numberRange(meta: NumberFieldMeta): string {
   return `${meta.nullable ? 'null or ' : ''}${kind}${meta.min} to ${meta.max}${unit}`;
 }
 
+/** `a list of 1 to 4`, as far as its length is bounded. */
+function listWords(list: z.ZodArray): string {
+  let [least, most] = [0, Infinity];
+  for (const check of list.def.checks ?? []) {
+    if (check instanceof z.core.$ZodCheckMinLength) least = check._zod.def.minimum;
+    if (check instanceof z.core.$ZodCheckMaxLength) most = check._zod.def.maximum;
+  }
+  if (least === 0 && most === Infinity) return 'a list';
+  if (most === Infinity) return `a list of at least ${least}`;
+  return least === 0 ? `a list of at most ${most}` : `a list of ${least} to ${most}`;
+}
+
 /** In words, what a schema accepts: range with unit, list of values, or list of keys. */
 export function allowedWords(schema: z.ZodType): string {
   const meta = fieldMeta(schema);
@@ -77,6 +89,7 @@ export function allowedWords(schema: z.ZodType): string {
   if (inner instanceof z.ZodUnion)
     return inner.options.map((one) => allowedWords(one as z.ZodType)).join('; or ');
   if (inner instanceof z.ZodObject) return `an object with the keys ${Object.keys(inner.shape).join(', ')}`;
-  if (inner instanceof z.ZodArray) return `a list, each ${allowedWords(inner.element as z.ZodType)}`;
+  if (inner instanceof z.ZodArray)
+    return `${listWords(inner)}, each ${allowedWords(inner.element as z.ZodType)}`;
   return 'a value of the documented kind';
 }

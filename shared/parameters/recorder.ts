@@ -72,7 +72,7 @@ export const recorderSchema = z
       min: 1,
       max: 10,
       usual: [1, 5],
-      help: 'Quantiser step; diagnostic recorders have at most 5 µV (BW-29).',
+      help: 'Quantiser step; diagnostic recorders have at most 5 µV (IEC 60601-2-25:2011, 201.12.4.107.3).',
     }),
     stimulusMarker: flagField(false, {
       label: 'Stimulus marker',

@@ -19,11 +19,14 @@ export function originWords({ madeOn, productVersion, engineVersion }: ReportOri
   return `Made on ${madeOn} with Paceloom ${productVersion}, engine ${engineVersion}`;
 }
 
-/** What is left of the limit: `62 % of the limit left`, `beyond the limit by 27 %`; empty where nothing is judged. */
+/** What is left of the limit: `62 % of the limit left`, `beyond the limit by 27 %`; empty where nothing is judged. At most 100 % is left. */
 export function marginWords(margin: number | null): string {
   if (margin === null) return '';
-  const percent = Math.abs(100 * margin).toFixed(Math.abs(margin) < 0.1 ? 1 : 0);
-  return margin < 0 ? `beyond the limit by ${percent} %` : `${percent} % of the limit left`;
+  const share = Math.min(1, Math.abs(margin));
+  const percent = (100 * share).toFixed(share < 0.1 ? 1 : 0);
+  return margin < 0
+    ? `beyond the limit by ${Math.abs(100 * margin).toFixed(0)} %`
+    : `${percent} % of the limit left`;
 }
 
 /** A field of RFC 4180. */

@@ -1,4 +1,6 @@
 import type { ReactNode } from 'react';
+import { Link } from 'react-router-dom';
+import { paths } from '../lib/paths';
 
 function Section({ title, children }: { title: string; children: ReactNode }) {
   return (
@@ -74,7 +76,18 @@ export function Component() {
         <p>
           A 0.4 ms spike holds little below 150 Hz. A diagnostic recorder (0.05–150 Hz) leaves about a seventh
           of its height, a monitor (0.5–40 Hz) about a twenty-fifth: the spike you look for may not be on the
-          screen. The 0.5 Hz limit also shifts the ST segment. Compare two bandwidths in the editor.
+          screen. The 0.5 Hz limit also shifts the ST segment. Compare two bandwidths in the editor, or two to
+          four settings on the{' '}
+          <Link to={paths.recorder()} className="text-teal-dark underline">
+            recorder bench
+          </Link>
+          , which measures what each does and holds it against the published standards.
+        </p>
+        <p>
+          <strong className="text-ink">Stimulus marker.</strong> Because bandwidth takes spikes away,
+          recorders can look for them in the signal before the band-limit and mark what they find. So does
+          ours, on a line of its own and never in the trace. A mark is a finding, not the truth: it can be
+          missing, and interference can set it off. The bench shows how often.
         </p>
       </Section>
       <Section title="In the editor">

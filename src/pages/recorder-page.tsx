@@ -10,6 +10,7 @@ import { RecorderBench } from '../features/recorder-bench/recorder-bench';
 import {
   lessonOf,
   readBenchState,
+  sameBench,
   writeBenchState,
   type BenchSource,
 } from '../features/recorder-bench/state/bench-address';
@@ -53,7 +54,7 @@ export function Component() {
   return (
     <RecorderBench
       state={state}
-      onChange={(next) => setSearch(writeBenchState(next), { replace: true })}
+      onChange={(next) => setSearch(writeBenchState(next), { replace: sameBench(state, next) })}
       parameters={onBench ? onBench.parameters : (saved?.parameters ?? null)}
       title={onBench?.title ?? saved?.title ?? 'Opening …'}
       strips={[...(own.data?.strips ?? []), ...(list.data?.strips ?? [])]}

@@ -94,6 +94,21 @@ const states: State[] = [
     ready: (page) => seen(page, 'No stimulus is given.'),
     act: (page) => page.getByRole('button', { name: 'Save strip' }).click(),
   },
+  {
+    name: 'recorder bench',
+    path: '/recorder',
+    ready: (page) => seen(page, 'declares no diagnostic band'),
+  },
+  {
+    name: 'recorder lesson with the difference and the marker',
+    path: '/recorder?source=lesson.notch-ringing&marker=on&view=difference',
+    ready: (page) => seen(page, 'a band for adults'),
+  },
+  {
+    name: 'test signal through four settings',
+    path: '/recorder?source=signal.pulse&setting=monitor&setting=zero0.67withdiagnostic&setting=sampled&setting=0.67to100-notch50',
+    ready: (page) => seen(page, 'offline'),
+  },
   { name: 'help', path: '/help', ready: (page) => seen(page, 'What bandwidth does') },
   { name: 'nothing here', path: '/nowhere', ready: (page) => seen(page, 'There is nothing here') },
 ];

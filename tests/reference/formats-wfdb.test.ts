@@ -12,12 +12,13 @@ import {
   worstDifferenceUv,
   writeExport,
 } from '../support/exports';
-import { hasPythonModule, runPython } from '../support/python';
+import { hasProgram, hasPythonModule, runPython, runReader } from '../support/python';
 import { exactFileUv } from '../support/tolerances';
 
 /**
  * A reader written for this test from header(5), signal(5) and annot(5) of WFDB 10.7.0, which gives millivolts by
- * (count − baseline) / gain. (The one reader that Debian packages takes interleaved signals for sequential ones.)
+ * (count − baseline) / gain. The reader below, BioSig's, is
+ * Debian's only one; it takes interleaved signals for sequential ones, so it is asked for header and annotations alone.
  */
 const program = `
 import json, re, sys
@@ -98,16 +99,21 @@ function mnemonic(event: AnnotatedEvent, { events, parameters }: StripRecording)
 
 const cases = renderedCases().map(([name, recording], k) => ({ name, recording, k }));
 const folder = temporaryFolder();
+const folderOf = (k: number): string => join(folder, String(k));
+beforeAll(async () => {
+  for (const { recording, k } of cases) {
+    mkdirSync(folderOf(k));
+    await writeExport(recording, 'wfdb', folderOf(k));
+  }
+});
 
 describe.skipIf(!hasPythonModule('numpy'))(
   'WFDB read from the published format (skipped without python3-numpy)',
   () => {
     const found: Found[] = [];
-    beforeAll(async () => {
-      for (const { recording, k } of cases) {
-        const own = join(folder, String(k));
-        mkdirSync(own);
-        await writeExport(recording, 'wfdb', own);
+    beforeAll(() => {
+      for (const { k } of cases) {
+        const own = folderOf(k);
         found.push(JSON.parse(runPython(program, [own, `${own}.f64`])) as Found);
       }
     });
@@ -171,3 +177,40 @@ describe.skipIf(!hasPythonModule('numpy'))(
     });
   },
 );
+
+interface BiosigHeader {
+  TYPE: string;
+  Samplingrate: number;
+  NumberOfSamples: number;
+  CHANNEL: { Label: string; PhysicalUnit: string }[];
+  EVENT: { TYP: string; POS: number }[];
+}
+
+describe.skipIf(!hasProgram('/usr/bin/save2gdf'))('WFDB under BioSig (skipped without biosig-tools)', () => {
+  it.each(cases)('header, and every annotation at its time: $name', ({ recording, k }) => {
+    const { sampleRateHz, events } = recording;
+    const path = join(folderOf(k), 'strip.hea');
+    const header = JSON.parse(runReader('/usr/bin/save2gdf', ['-JSON', path])) as BiosigHeader;
+    expect(header).toMatchObject({
+      TYPE: 'MIT',
+      Samplingrate: sampleRateHz,
+      NumberOfSamples: recording.leads.I.length,
+    });
+    expect(header.CHANNEL.map(({ Label }) => Label)).toEqual([...leadNames]);
+    expect(header.CHANNEL.every(({ PhysicalUnit }) => PhysicalUnit === 'mV')).toBe(true);
+    // BioSig counts samples from 1 where annot(5) counts from 0, so what it says is one sample early everywhere, and
+    // wraps round at sample 0.
+    const sample = (seconds: number): number => (Math.round(seconds * sampleRateHz) + 1) % 2 ** 32;
+    const read = header.EVENT.map(({ TYP, POS }) => ({ code: Number(TYP), at: sample(POS) }));
+    const caution = { code: table['"'], at: 0 };
+    const expected = annotatedEvents(events).map((event) => ({
+      code: table[mnemonic(event, recording)],
+      at: Math.min(recording.leads.I.length - 1, Math.round(event.timeS * sampleRateHz)),
+    }));
+    expect(read).toHaveLength(expected.length + 1);
+    for (const { code, at } of [caution, ...expected]) {
+      const match = read.find((one) => one.code === code && one.at === at);
+      expect(match, `code ${code} at sample ${at}`).toBeDefined();
+    }
+  });
+});

@@ -50,6 +50,12 @@ const cases: RouteCase[] = [
   { route: 'POST /api/session', path: '/api/session', body: {}, expected: everyone(400) },
   { route: 'GET /api/session', path: '/api/session', expected: everyone(200, 401) },
   { route: 'DELETE /api/session', path: '/api/session', expected: everyone(204) },
+  {
+    route: 'POST /api/recorder-report',
+    path: '/api/recorder-report',
+    body: { settings: [{ kind: 'recorder', recorder: {} }] },
+    expected: everyone(200, 401),
+  },
   { route: 'GET /api/strips', path: '/api/strips', expected: makers(200) },
   { route: 'POST /api/strips', path: '/api/strips', body: newStrip, expected: makers(201) },
   {

@@ -9,7 +9,7 @@ import { recordSignal, type Signal } from '../record-signal';
 import { gainAt } from '../sine-response';
 import { rectangle } from '../test-signals';
 import { notchRinging } from './pulses';
-import { claimedBy, iec25, signed, type Measured, type Requirement } from './requirement';
+import { claimedBy, claimedByAnyUse, iec25, signed, type Measured, type Requirement } from './requirement';
 
 /** Amplitude error of 1 mV at 10 Hz, %. */
 function amplitudeError(setting: BenchSetting): Measured {
@@ -171,7 +171,7 @@ export const accuracyRequirements: readonly Requirement[] = [
     source: iec25('amplitude error'),
     limit: 'within 5 %',
     unit: '%',
-    notClaimed: claimedBy(['diagnostic', 'slowWave', 'monitor'], 'declares no use'),
+    notClaimed: claimedByAnyUse,
     measure: amplitudeError,
   },
   {
@@ -183,7 +183,7 @@ export const accuracyRequirements: readonly Requirement[] = [
     },
     limit: 'within 10 %',
     unit: '%',
-    notClaimed: claimedBy(['diagnostic', 'slowWave', 'monitor'], 'declares no use'),
+    notClaimed: claimedByAnyUse,
     measure: onOffset,
   },
   {
@@ -192,7 +192,7 @@ export const accuracyRequirements: readonly Requirement[] = [
     source: { text: 'IEC 60601-2-27:2011, signal reproduction', provenance: 'read in a public text' },
     limit: 'at most 20 %',
     unit: '%',
-    notClaimed: claimedBy(['diagnostic', 'slowWave', 'monitor'], 'declares no use'),
+    notClaimed: claimedByAnyUse,
     measure: reproduction,
   },
   {
@@ -246,7 +246,7 @@ export const accuracyRequirements: readonly Requirement[] = [
     source: { text: 'Why the low-pass has the fourth order', provenance: 'own contract' },
     limit: `at least ${aliasLimitDb} dB down`,
     unit: 'dB',
-    notClaimed: claimedBy(['diagnostic', 'slowWave', 'monitor'], 'declares no use'),
+    notClaimed: claimedByAnyUse,
     measure: alias,
   },
   {

@@ -49,10 +49,19 @@ export function declaredUse(setting: BenchSetting): DeclaredUse {
     : 'none';
 }
 
-/** Claims of the named uses; others get `words` as the reason why not. */
+const noUse = 'declares no use';
+
+/** Claims of the named uses; others get `words` as the reason why not, or that they declare no use at all. */
 export function claimedBy(uses: readonly DeclaredUse[], words: string) {
-  return (setting: BenchSetting): string | null => (uses.includes(declaredUse(setting)) ? null : words);
+  return (setting: BenchSetting): string | null => {
+    const use = declaredUse(setting);
+    if (uses.includes(use)) return null;
+    return use === 'none' ? noUse : words;
+  };
 }
+
+/** Every setting that declares a use claims it. */
+export const claimedByAnyUse = claimedBy(['diagnostic', 'slowWave', 'monitor'], noUse);
 
 /** A figure with a sign that is not a hyphen. */
 export function signed(value: number, decimals: number): string {

@@ -1,4 +1,4 @@
-import { useLayoutEffect, useMemo, useRef, type KeyboardEvent, type PointerEvent } from 'react';
+import { useEffect, useLayoutEffect, useMemo, useRef, type KeyboardEvent, type PointerEvent } from 'react';
 import type { MeasuredBeat } from '../../../../shared/recorder-bench/beat-measures';
 import { difference, type BenchResult } from '../../../../shared/recorder-bench/bench-result';
 import { settingWords, type BenchSetting } from '../../../../shared/recorder-bench/bench-setting';
@@ -103,11 +103,17 @@ export function BenchTraces(props: BenchTracesProps) {
     paintMarkerLines(context, scale, widthPx, given, strip.stimulusMarkersS);
   }, [strip, marker, scale, widthPx]);
 
+  // The address bar answers after the key: the next key counts from what the last one asked for.
+  const asked = useRef(0);
+  useEffect(() => {
+    asked.current = beat?.number ?? 0;
+  }, [beat]);
   const onKeyDown = (event: KeyboardEvent): void => {
     const step = event.key === 'ArrowLeft' ? -1 : event.key === 'ArrowRight' ? 1 : 0;
-    const wanted = beats.find(({ number }) => number === (beat?.number ?? 0) + step);
+    const wanted = beats.find(({ number }) => number === asked.current + step);
     if (step === 0 || !wanted) return;
     event.preventDefault();
+    asked.current = wanted.number;
     onBeat(wanted.number);
   };
   const onPointerDown = (event: PointerEvent<HTMLCanvasElement>): void => {

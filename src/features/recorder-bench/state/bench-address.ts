@@ -85,6 +85,13 @@ export function writeBenchState(state: BenchState): URLSearchParams {
   return search;
 }
 
+/** Whether the same strip stands there with the same settings: then Back has nothing to bring back. */
+export function sameBench(one: BenchState, other: BenchState): boolean {
+  const codes = (state: BenchState): string => state.settings.map(settingCode).join();
+  const place = ({ source, lead }: BenchState): string => `${source.kind}.${source.id}.${lead}`;
+  return codes(one) === codes(other) && place(one) === place(other);
+}
+
 /** The bench as a lesson sets it up. */
 export function lessonState(lesson: Lesson): BenchState {
   return {
