@@ -1,7 +1,8 @@
 import type { Request } from 'express';
 import type {
   importAnalysisResponseSchema,
-  importResultResponseSchema} from '../../../shared/api/preset-files';
+  importResultResponseSchema,
+} from '../../../shared/api/preset-files';
 import {
   exportPresetsSchema,
   importDecisionSchema,

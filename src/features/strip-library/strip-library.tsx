@@ -210,10 +210,12 @@ export function StripLibrary() {
             options={sortOptions}
             onChange={(sort) => change({ sort: sort === 'course' ? null : sort, direction: null })}
           />
-          <Button onClick={() => setImporting(true)}>Import presets</Button>
-          <Link to={paths.newStrip()} className={buttonClass('primary')}>
-            New strip
-          </Link>
+          <span className="ml-auto flex gap-3">
+            <Button onClick={() => setImporting(true)}>Import presets</Button>
+            <Link to={paths.newStrip()} className={buttonClass('primary')}>
+              New strip
+            </Link>
+          </span>
         </div>
         {error && (
           <div className="mb-5 flex flex-wrap items-center gap-3">

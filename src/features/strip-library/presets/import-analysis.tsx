@@ -59,7 +59,7 @@ export function ImportAnalysisView({ analysis, choices, onChange }: ImportAnalys
     <div className="mt-3 flex flex-col gap-4">
       <p className="text-body text-ink-2">{analysisWords(analysis)}</p>
       {analysis.upgrades.length > 0 && (
-        <Notice kind="teal" title="An older file, read as of today.">
+        <Notice kind="teal" title="An older file, brought up to date.">
           {analysis.upgrades.join(' ')}
         </Notice>
       )}
