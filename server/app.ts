@@ -11,6 +11,7 @@ import { signInLimit, usualSignInLimits, type SignInLimits } from './middleware/
 import { staticClient } from './middleware/static-client';
 import type { Database } from './models/database';
 import { demoRoutes } from './routes/demo/demo-routes';
+import { exportRoutes } from './routes/exports/export-routes';
 import { healthRoutes } from './routes/health/health-routes';
 import { registerRoutes } from './routes/register-routes';
 import { sessionRoutes } from './routes/session/session-routes';
@@ -18,6 +19,8 @@ import { recorderRoutes } from './routes/recorder/recorder-routes';
 import { presetRoutes } from './routes/presets/preset-routes';
 import { renderRoutes } from './routes/strips/render-routes';
 import { stripRoutes } from './routes/strips/strip-routes';
+import type { ExportFiles } from './services/exports/export-files';
+import type { ExportRunner } from './services/exports/export-runner';
 import type { ReportPool } from './services/recorder/report-pool';
 import type { RenderPool } from './services/rendering/render-pool';
 import { findSession } from './services/session/sessions';
@@ -28,6 +31,9 @@ export interface AppDependencies {
   sessionSecret: string;
   renderPool: RenderPool;
   reportPool: ReportPool;
+  /** Works exports off; started and closed by whoever made it. */
+  exportRunner: ExportRunner;
+  exportFiles: ExportFiles;
   /** Of package.json; stands on reports. */
   productVersion: string;
   logger: Logger;
@@ -43,6 +49,7 @@ export interface AppDependencies {
 export function createApp(dependencies: AppDependencies): Express {
   const { database, sessionSecret, renderPool, reportPool, productVersion, logger, clientDirectory } =
     dependencies;
+  const { exportRunner: runner, exportFiles: files } = dependencies;
   const { now = () => new Date(), signInLimits = usualSignInLimits, trustedProxies = 0 } = dependencies;
   const session = { database, secret: sessionSecret, now };
 
@@ -75,6 +82,7 @@ export function createApp(dependencies: AppDependencies): Express {
     ...sessionRoutes(session, signInLimit(signInLimits)),
     ...renderRoutes({ database, renderPool }),
     ...recorderRoutes({ reportPool, productVersion, now }),
+    ...exportRoutes({ database, runner, files, now }),
     ...presetRoutes({ database, now }),
     ...stripRoutes({ database, now }),
   });

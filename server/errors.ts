@@ -81,8 +81,25 @@ export const staleImport = (analysis: unknown): AppError =>
     { details: { analysis } },
   );
 
+export const badRange = (): AppError => new AppError('badRange', 'The file ends before this range begins.');
+
 export const wrongContentType = (): AppError =>
   new AppError('wrongContentType', 'Send JSON, with the content type application/json.');
+
+export const tooManyExports = (most: number): AppError =>
+  new AppError(
+    'tooManyExports',
+    `You have ${most} exports waiting or running, as many as there may be. Wait for one, or cancel one.`,
+  );
+
+export const exportSpaceFull = (spaceBytes: number): AppError =>
+  new AppError(
+    'exportSpaceFull',
+    `Your exports take all of the ${spaceBytes / 1e9} GB they may. Delete some, then try again.`,
+  );
+
+export const exportCannotRestart = (): AppError =>
+  new AppError('exportCannotRestart', 'Only an export that failed or was cancelled can be started again.');
 
 export const tooManyAttempts = (retryAfterS: number): AppError =>
   new AppError('tooManyAttempts', 'Too many failed attempts. Wait a little, then try again.', {

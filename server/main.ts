@@ -10,6 +10,9 @@ import { createMigrator } from './migrations/migrate';
 import { openDatabase } from './models/database';
 import { demoAccounts } from './services/demo/demo-accounts';
 import { seedDemo } from './services/demo/seed-demo';
+import { createExportFiles } from './services/exports/export-files';
+import { createExportPool } from './services/exports/export-pool';
+import { createExportRunner } from './services/exports/export-runner';
 import { createReportPool } from './services/recorder/report-pool';
 import { createRenderPool } from './services/rendering/render-pool';
 import { loadSessionSecret } from './services/session/session-secret';
@@ -46,11 +49,22 @@ await shipGallery(database, new Date());
 
 const renderPool = createRenderPool({ workerFile: workerFile('render-worker') });
 const reportPool = createReportPool(workerFile('report-worker'));
+const exportFiles = createExportFiles(join(dataDirectory, 'exports'));
+const exportRunner = createExportRunner({
+  database,
+  files: exportFiles,
+  pool: createExportPool(workerFile('export-worker')),
+  now: () => new Date(),
+  logError: (error) => logger.error({ err: error as Error }, 'an export failed'),
+});
+await exportRunner.start();
 const app = createApp({
   database,
   sessionSecret,
   renderPool,
   reportPool,
+  exportRunner,
+  exportFiles,
   productVersion: packageVersion(),
   logger,
   clientDirectory: resolve(environment.clientDirectory),
@@ -80,6 +94,7 @@ async function stop(): Promise<void> {
   await closed;
   await renderPool.close();
   await reportPool.close();
+  await exportRunner.close();
   await database.close();
   process.exit(0);
 }

@@ -16,6 +16,7 @@ export default defineConfig({
         main: 'server/main.ts',
         'render-worker': 'server/workers/render-worker.ts',
         'report-worker': 'server/workers/report-worker.ts',
+        'export-worker': 'server/workers/export-worker.ts',
       },
       output: { entryFileNames: '[name].js', chunkFileNames: 'chunks/[name]-[hash].js' },
     },

@@ -1,7 +1,8 @@
 import { mkdtempSync, mkdirSync, renameSync, rmSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { bundleExports } from '../../server/exports/bundle';
-import { checkExport, exporters } from '../../server/exports/exporters';
+import { checkExport } from '../../server/exports/check-export';
+import { exporters } from '../../server/exports/exporters';
 import { InvalidInputError } from '../../shared/errors';
 import { renderStrip, type StripRecording } from '../../shared/engine/render';
 import { nominalStart, type ExportFormat, type ExportOptions } from '../../shared/formats/export-format';

@@ -3,7 +3,8 @@ import { Zip, ZipDeflate, ZipPassThrough } from 'fflate';
 import type { StripRecording } from '../../shared/engine/render';
 import type { ExportFile, ExportFormat, ExportOptions } from '../../shared/formats/export-format';
 import { educationCaution, syntheticCaution } from '../../shared/paper/cautions';
-import { checkExport, exporters } from './exporters';
+import { checkExport } from './check-export';
+import { exporters } from './exporters';
 
 /** Version of the manifest; it changes whenever a reader of the old one would go wrong. */
 export const manifestVersion = 1;
@@ -53,12 +54,11 @@ function archiveTime(madeAt: Date): Date {
   );
 }
 
-/** An archive that grows file by file, so that no file is held beside its packed form. */
-function createArchive(madeAt: Date) {
-  const chunks: Uint8Array[] = [];
+/** An archive that is put out as it grows, so that no file is held beside its packed form. */
+function createArchive(madeAt: Date, sink: (chunk: Uint8Array) => void) {
   const zip = new Zip((error, chunk) => {
     if (error) throw error;
-    chunks.push(chunk);
+    sink(chunk);
   });
   return {
     /** Adds a file from its parts; returns its length and checksum. */
@@ -77,10 +77,7 @@ function createArchive(madeAt: Date) {
       entry.push(new Uint8Array(0), true);
       return { bytes, sha256: hash.digest('hex') };
     },
-    end(): Uint8Array {
-      zip.end();
-      return Buffer.concat(chunks);
-    },
+    end: () => zip.end(),
   };
 }
 
@@ -100,28 +97,49 @@ function emptyManifest({ parameters, engineVersion, sampleRateHz }: StripRecordi
   };
 }
 
+/** Where an archive goes, and who is told how many formats are in it. */
+export interface BundleSink {
+  /** The archive's next bytes. */
+  write(chunk: Uint8Array): void;
+  onFormat?(done: number): void;
+}
+
 /**
- * The files of any choice of formats, each once, in one ZIP archive with a `manifest.json` that names them with length,
- * SHA-256 and warnings. Same recording, formats and `madeAt`, same bytes. Throws `InvalidInputError` when a format cannot
- * hold the strip. `madeAt` must lie in 1980 to 2099, the years of ZIP.
+ * Writes the files of any choice of formats, each once, as one ZIP archive with a `manifest.json` that names them with
+ * length, SHA-256 and warnings; returns the manifest. Same recording, formats and `madeAt`, same bytes. Throws
+ * `InvalidInputError` when a format cannot hold the strip. `madeAt` must lie in 1980 to 2099, the years of ZIP.
  */
-export async function bundleExports(
+export async function writeBundle(
   recording: StripRecording,
   formats: readonly ExportFormat[],
   options: ExportOptions,
-): Promise<Bundle> {
+  sink: BundleSink,
+): Promise<BundleManifest> {
   checkExport(recording.parameters, formats);
-  const archive = createArchive(options.madeAt);
+  const archive = createArchive(options.madeAt, (chunk) => sink.write(chunk));
   const manifest = emptyManifest(recording);
-  for (const format of new Set(formats)) {
+  for (const [index, format] of [...new Set(formats)].entries()) {
     const { files, warnings } = await exporters[format](recording, options);
     for (const file of files) {
       const { name, mediaType } = file;
       manifest.files.push({ name, format, mediaType, ...archive.add(file) });
     }
     manifest.warnings.push(...warnings.map((text) => ({ format, text })));
+    sink.onFormat?.(index + 1);
   }
   const parts = [`${JSON.stringify(manifest, null, 2)}\n`];
   archive.add({ name: 'manifest.json', mediaType: 'application/json', parts });
-  return { bytes: archive.end(), manifest };
+  archive.end();
+  return manifest;
+}
+
+/** As `writeBundle`, but the archive as one piece in memory. */
+export async function bundleExports(
+  recording: StripRecording,
+  formats: readonly ExportFormat[],
+  options: ExportOptions,
+): Promise<Bundle> {
+  const chunks: Uint8Array[] = [];
+  const manifest = await writeBundle(recording, formats, options, { write: (chunk) => chunks.push(chunk) });
+  return { bytes: Buffer.concat(chunks), manifest };
 }

@@ -1,4 +1,3 @@
-import { InvalidInputError } from '../../shared/errors';
 import type { StripRecording } from '../../shared/engine/render';
 import { csvHeader, stripCsvRows } from '../../shared/formats/csv';
 import type { Exporter, ExportFormat } from '../../shared/formats/export-format';
@@ -7,9 +6,7 @@ import { stripJson } from '../../shared/formats/strip-json';
 import { drawingToSvg } from '../../shared/formats/svg';
 import { encodeWav } from '../../shared/formats/wav';
 import { encodeWfdb } from '../../shared/formats/wfdb/wfdb';
-import { longestDrawnS } from '../../shared/paper/layout';
 import { layoutStripSheet } from '../../shared/paper/sheet';
-import type { StripParameters } from '../../shared/parameters/strip-parameters';
 import { encodeAecg } from './aecg/aecg';
 import { encodeDicom } from './dicom/dicom';
 import { svgToPng } from './svg-to-png';
@@ -33,18 +30,6 @@ function* csvParts(recording: StripRecording): Generator<string> {
 
 function svg(recording: StripRecording): string {
   return drawingToSvg(layoutStripSheet(recording, recording.parameters.sheet));
-}
-
-/** Formats that hold pictures; one of more than five minutes would be metres long. */
-const pictures: readonly ExportFormat[] = ['svg', 'png'];
-
-/** Throws `InvalidInputError` when a format cannot hold such a strip; asked before anything is rendered. */
-export function checkExport({ durationS }: StripParameters, formats: readonly ExportFormat[]): void {
-  const picture = formats.find((format) => pictures.includes(format));
-  if (!picture || durationS <= longestDrawnS) return;
-  throw new InvalidInputError([
-    { path: 'durationS', value: String(durationS), allowed: `at most ${longestDrawnS} s for ${picture}` },
-  ]);
 }
 
 /** One file without warnings. */

@@ -4,10 +4,11 @@ import { people } from './2026-12-01-0900-people';
 import { strips } from './2026-12-01-0910-strips';
 import { stripEngine } from './2026-12-01-1230-strip-engine';
 import { stripPresetId } from './2026-12-01-1500-strip-preset-id';
+import { exportJobs } from './2026-12-01-1510-export-jobs';
 import type { Migration } from './migration';
 
 /** The whole history, oldest first. Listed, not globbed, so that the built server carries it. */
-export const migrations: readonly Migration[] = [people, strips, stripEngine, stripPresetId];
+export const migrations: readonly Migration[] = [people, strips, stripEngine, stripPresetId, exportJobs];
 
 /** Runs the history up or down on a database. */
 export function createMigrator(sequelize: Sequelize) {

@@ -7,6 +7,7 @@ import {
   type ModelStatic,
   type Sequelize,
 } from 'sequelize';
+import type { ExportState } from '../../shared/api/exports';
 import type { Role } from '../../shared/api/roles';
 import type { Visibility } from '../../shared/api/strips';
 
@@ -68,12 +69,36 @@ export interface StripTagRow extends Row<StripTagRow> {
   tagKey: string;
 }
 
+export interface ExportJobRow extends Row<ExportJobRow> {
+  id: string;
+  ownerId: string;
+  stripId: string | null;
+  title: string;
+  /** JSON. */
+  parameters: string;
+  /** JSON. */
+  formats: string;
+  bundle: number;
+  state: ExportState;
+  attempts: CreationOptional<number>;
+  failure: CreationOptional<string | null>;
+  /** JSON. */
+  warnings: CreationOptional<string>;
+  ending: CreationOptional<string | null>;
+  mediaType: CreationOptional<string | null>;
+  bytes: CreationOptional<number | null>;
+  createdAt: string;
+  finishedAt: CreationOptional<string | null>;
+  removedAt: CreationOptional<string | null>;
+}
+
 export interface Models {
   departments: ModelStatic<DepartmentRow>;
   users: ModelStatic<UserRow>;
   sessions: ModelStatic<SessionRow>;
   strips: ModelStatic<StripRow>;
   stripTags: ModelStatic<StripTagRow>;
+  exportJobs: ModelStatic<ExportJobRow>;
 }
 
 // Sequelize writes into the attributes it is given, so each column gets its own.
@@ -132,6 +157,25 @@ export function defineModels(sequelize: Sequelize): Models {
       position: integer(),
       tag: text(),
       tagKey: { ...text(), primaryKey: true },
+    }),
+    exportJobs: sequelize.define<ExportJobRow>('export_jobs', {
+      id: key(),
+      ownerId: text(),
+      stripId: optionalText(),
+      title: text(),
+      parameters: text(),
+      formats: text(),
+      bundle: integer(),
+      state: text(),
+      attempts: { ...integer(), defaultValue: 0 },
+      failure: optionalText(),
+      warnings: { ...text(), defaultValue: '[]' },
+      ending: optionalText(),
+      mediaType: optionalText(),
+      bytes: optionalInteger(),
+      createdAt: text(),
+      finishedAt: optionalText(),
+      removedAt: optionalText(),
     }),
   };
 }

@@ -24,8 +24,16 @@ export const errorStatuses = {
   staleStrip: 409,
   /** The library changed between looking at a preset file and importing it; `details.analysis` is a new look. */
   staleImport: 409,
+  /** As many exports of this person wait or run as may. */
+  tooManyExports: 409,
+  /** This person's exports take all the space they may. */
+  exportSpaceFull: 409,
+  /** Only an export that failed or was cancelled can be started again. */
+  exportCannotRestart: 409,
   tooLarge: 413,
   wrongContentType: 415,
+  /** A range that lies outside of the file. */
+  badRange: 416,
   /** Sign-in is locked for a while; `Retry-After` says for how many seconds. */
   tooManyAttempts: 429,
   /** A defect of ours; the answer says nothing of its insides. */

@@ -1,4 +1,4 @@
-import type { LeadName } from '../parameters/sheet';
+import { leadNames, type LeadName } from '../parameters/sheet';
 import type { StripParameters } from '../parameters/strip-parameters';
 import { reverseElectrodes } from './disturbance/electrode-reversal';
 import { engineVersion } from './engine-version';
@@ -144,17 +144,45 @@ export function stripLength({
   return Math.round(durationS * recorder.sampleRateHz);
 }
 
+/** Seconds rendered at a time: what is not yet quantised of a long strip never takes much memory. */
+const pieceS = 60;
+
 /** A whole strip: the first `durationS` seconds of the stream, quantised and read. */
 export function renderStrip(parameters: StripParameters): StripRecording {
+  return renderLongStrip(parameters, () => undefined);
+}
+
+/** As `renderStrip`; `onProgress` is told the share that is rendered, from 0 to 1, after each minute of it. */
+export function renderLongStrip(
+  parameters: StripParameters,
+  onProgress: (share: number) => void,
+): StripRecording {
   const stream = createStripStream(parameters);
-  const { measured, events, complexes, stimulusMarkersS } = stream.next(stripLength(parameters));
+  const length = stripLength(parameters);
+  const leads = Object.fromEntries(leadNames.map((lead) => [lead, new Float32Array(length)])) as Record<
+    LeadName,
+    Float32Array
+  >;
+  const events: StripEvent[] = [];
+  const complexes = new Map<VentricularDepolarization, ComplexMeasures>();
+  const markers: number[] = [];
+  for (let done = 0; done < length;) {
+    const chunk = stream.next(Math.min(pieceS * stream.sampleRateHz, length - done));
+    const quantised = quantiseLeads(chunk.measured, stream.resolutionUv);
+    for (const lead of leadNames) leads[lead].set(quantised[lead], done);
+    events.push(...chunk.events);
+    for (const [event, complex] of chunk.complexes) complexes.set(event, complex);
+    markers.push(...(chunk.stimulusMarkersS ?? []));
+    done += chunk.length;
+    onProgress(done / length);
+  }
   return {
     sampleRateHz: stream.sampleRateHz,
     resolutionUv: stream.resolutionUv,
     delayRemovedMs: stream.delayRemovedMs,
-    leads: quantiseLeads(measured, stream.resolutionUv),
+    leads,
     events,
-    stimulusMarkersS,
+    stimulusMarkersS: parameters.recorder.stimulusMarker ? markers : null,
     reading: readStrip(events, (event) => complexes.get(event) ?? null),
     parameters,
     engineVersion,

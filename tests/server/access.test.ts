@@ -6,6 +6,9 @@ import { startTestServer, type TestServer } from '../support/server/test-server'
 /** An educator's strip, shared with the department, version 1. */
 const shared = 'tarn-valley-week-one-av-sequential';
 
+/** What a person's own exports allow is in exports.test.ts. */
+const noExport = '/api/exports/6f1c1d5e-64a5-4f3f-9d3f-0d6a3b1f5b11';
+
 const newStrip = {
   title: 'Changed',
   teachingPoint: '',
@@ -56,6 +59,13 @@ const cases: RouteCase[] = [
     body: { settings: [{ kind: 'recorder', recorder: {} }] },
     expected: everyone(200, 401),
   },
+  { route: 'GET /api/exports', path: '/api/exports', expected: makers(200) },
+  { route: 'POST /api/exports', path: '/api/exports', body: {}, expected: makers(400) },
+  { route: 'GET /api/exports/:exportId', path: noExport, expected: makers(404) },
+  { route: 'DELETE /api/exports/:exportId', path: noExport, expected: makers(404) },
+  { route: 'GET /api/exports/:exportId/file', path: `${noExport}/file`, expected: makers(404) },
+  { route: 'POST /api/exports/:exportId/cancel', path: `${noExport}/cancel`, expected: makers(404) },
+  { route: 'POST /api/exports/:exportId/restart', path: `${noExport}/restart`, expected: makers(404) },
   { route: 'GET /api/strips', path: '/api/strips', expected: makers(200) },
   { route: 'POST /api/strips', path: '/api/strips', body: newStrip, expected: makers(201) },
   {

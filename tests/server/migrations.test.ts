@@ -37,6 +37,7 @@ describe('the history', () => {
     const first = await schema();
     expect(first.filter((one) => one.type === 'table').map((one) => one.name)).toEqual([
       'departments',
+      'export_jobs',
       'sessions',
       'strip_tags',
       'strips',

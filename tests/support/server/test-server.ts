@@ -8,6 +8,9 @@ import { inject } from 'vitest';
 import { createApp, type AppDependencies } from '../../../server/app';
 import { openDatabase, type Database } from '../../../server/models/database';
 import { createRenderPool, type RenderPoolOptions } from '../../../server/services/rendering/render-pool';
+import { createExportFiles } from '../../../server/services/exports/export-files';
+import { createExportPool, type ExportPool } from '../../../server/services/exports/export-pool';
+import { createExportRunner, type ExportRunner } from '../../../server/services/exports/export-runner';
 import { createReportPool } from '../../../server/services/recorder/report-pool';
 import { ApiClient, type Person } from './api-client';
 
@@ -16,6 +19,9 @@ export const workerFile = resolve('server/workers/render-worker.ts');
 export interface TestServer {
   url: string;
   database: Database;
+  exportRunner: ExportRunner;
+  /** Where the files of exports lie. */
+  exportDirectory: string;
   databaseFile: string;
   /** Errors the server logged: unexpected ones only. */
   logged: string[];
@@ -28,12 +34,15 @@ export interface TestServer {
 interface TestServerOptions extends Partial<AppDependencies> {
   /** A database to go on with; otherwise a copy of the template. */
   databaseFile?: string;
+  /** A folder of exports to go on with; otherwise a new one. */
+  exportDirectory?: string;
+  exportPool?: ExportPool;
   pool?: Partial<RenderPoolOptions>;
 }
 
 /** The application on a free port of this machine, over a copy of the template database. */
 export async function startTestServer(options: TestServerOptions = {}): Promise<TestServer> {
-  const { databaseFile, pool, ...dependencies } = options;
+  const { databaseFile, pool, exportDirectory: keptExports, exportPool, ...dependencies } = options;
   const directory = mkdtempSync(join(tmpdir(), 'paceloom-server-'));
   const file = databaseFile ?? join(directory, 'test.sqlite');
   if (databaseFile === undefined) copyFileSync(inject('templateDatabase'), file);
@@ -42,11 +51,23 @@ export async function startTestServer(options: TestServerOptions = {}): Promise<
   const reportPool = createReportPool(resolve('server/workers/report-worker.ts'));
   const logged: string[] = [];
   const logger = pino({ level: 'error' }, { write: (line: string) => void logged.push(line) });
+  const exportDirectory = keptExports ?? join(directory, 'exports');
+  const exportFiles = createExportFiles(exportDirectory);
+  const exportRunner = createExportRunner({
+    database,
+    files: exportFiles,
+    pool: exportPool ?? createExportPool(resolve('server/workers/export-worker.ts')),
+    now: options.now ?? (() => new Date()),
+    logError: (error) => void logged.push(String(error)),
+  });
+  await exportRunner.start();
   const app = createApp({
     database,
     sessionSecret: 'a key for tests only, of no worth',
     renderPool,
     reportPool,
+    exportRunner,
+    exportFiles,
     productVersion: '0.0.0',
     logger,
     clientDirectory: join(directory, 'client'),
@@ -58,6 +79,8 @@ export async function startTestServer(options: TestServerOptions = {}): Promise<
   return {
     url,
     database,
+    exportRunner,
+    exportDirectory,
     databaseFile: file,
     logged,
     client: () => new ApiClient(url),
@@ -67,6 +90,7 @@ export async function startTestServer(options: TestServerOptions = {}): Promise<
       await new Promise((done) => server.close(done));
       await renderPool.close();
       await reportPool.close();
+      await exportRunner.close();
       await database.close();
       rmSync(directory, { recursive: true, force: true });
     },

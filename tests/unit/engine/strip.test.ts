@@ -1,7 +1,9 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { measuredLeads } from '../../../shared/engine/leads';
-import { createStripStream, renderStrip } from '../../../shared/engine/render';
+import { readStrip } from '../../../shared/engine/reading/read-strip';
+import { quantiseLeads } from '../../../shared/engine/recorder/quantiser';
+import { createStripStream, renderLongStrip, renderStrip } from '../../../shared/engine/render';
 import { leadNames } from '../../../shared/parameters/sheet';
 import { arbitraryStrip } from '../../support/arbitrary-strips';
 import { buildStrip } from '../../support/strips';
@@ -63,6 +65,28 @@ describe('every legal strip', () => {
     },
     patienceMs,
   );
+});
+
+describe('a long strip', () => {
+  it('is rendered minute by minute as it would be in one, and tells how far it is', () => {
+    const strip = buildStrip({
+      durationS: 150,
+      patient: { avConduction: 'wenckebach', prematureVentricularPerMinute: 8 },
+      pacing: { source: 'implanted', mode: 'DDD' },
+      disturbance: { muscleMv: 0.03, baselineWanderMv: 0.1 },
+      recorder: { stimulusMarker: true },
+    });
+    const shares: number[] = [];
+    const recording = renderLongStrip(strip, (share) => shares.push(share));
+    expect(shares).toEqual([60 / 150, 120 / 150, 1]);
+    const whole = createStripStream(strip).next(150 * 500);
+    expect(recording.leads).toEqual(quantiseLeads(whole.measured, recording.resolutionUv));
+    expect(recording.events).toEqual(whole.events);
+    expect(recording.stimulusMarkersS).toEqual(whole.stimulusMarkersS);
+    expect(recording.stimulusMarkersS?.length).toBeGreaterThan(50);
+    const reading = readStrip(whole.events, (event) => whole.complexes.get(event) ?? null);
+    expect(recording.reading).toEqual(reading);
+  });
 });
 
 describe('the electrodes and the recorder', () => {

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
-import { checkExport, exporters } from '../../../server/exports/exporters';
+import { checkExport } from '../../../server/exports/check-export';
+import { exporters } from '../../../server/exports/exporters';
 import { renderStrip } from '../../../shared/engine/render';
 import { exportFormats, exportFormatWords, nominalStart } from '../../../shared/formats/export-format';
 import { fileBytes, longTitle } from '../../support/exports';
