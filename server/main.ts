@@ -12,7 +12,7 @@ import { demoAccounts } from './services/demo/demo-accounts';
 import { seedDemo } from './services/demo/seed-demo';
 import { createExportFiles } from './services/exports/export-files';
 import { createExportPool } from './services/exports/export-pool';
-import { createExportRunner } from './services/exports/export-runner';
+import { createExportRunner, exportLanes } from './services/exports/export-runner';
 import { createReportPool } from './services/recorder/report-pool';
 import { createRenderPool } from './services/rendering/render-pool';
 import { loadSessionSecret } from './services/session/session-secret';
@@ -53,7 +53,7 @@ const exportFiles = createExportFiles(join(dataDirectory, 'exports'));
 const exportRunner = createExportRunner({
   database,
   files: exportFiles,
-  pool: createExportPool(workerFile('export-worker')),
+  pool: createExportPool(workerFile('export-worker'), exportLanes),
   now: () => new Date(),
   logError: (error) => logger.error({ err: error as Error }, 'an export failed'),
 });

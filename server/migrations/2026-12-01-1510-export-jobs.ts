@@ -2,7 +2,7 @@ import type { Migration } from './migration';
 
 /**
  * Exports as jobs. The parameters are kept with the job, so that it can run again whatever becomes of the strip;
- * `strip_id` only says where it came from. `attempts` counts starts: a job that takes the server down with it is not
+ * `strip_id` only says where it came from. `duration_s` is theirs too: short exports do not wait behind long ones. `attempts` counts starts: a job that takes the server down with it is not
  * started for ever. The file lies beside the database under the job's id.
  */
 export const exportJobs: Migration = {
@@ -16,6 +16,7 @@ export const exportJobs: Migration = {
         title TEXT NOT NULL,
         parameters TEXT NOT NULL CHECK (json_valid(parameters)),
         formats TEXT NOT NULL CHECK (json_valid(formats)),
+        duration_s REAL NOT NULL,
         bundle INTEGER NOT NULL CHECK (bundle IN (0, 1)),
         state TEXT NOT NULL CHECK (state IN ('waiting', 'running', 'done', 'failed', 'cancelled')),
         attempts INTEGER NOT NULL DEFAULT 0,

@@ -78,6 +78,7 @@ export interface ExportJobRow extends Row<ExportJobRow> {
   parameters: string;
   /** JSON. */
   formats: string;
+  durationS: number;
   bundle: number;
   state: ExportState;
   attempts: CreationOptional<number>;
@@ -165,6 +166,7 @@ export function defineModels(sequelize: Sequelize): Models {
       title: text(),
       parameters: text(),
       formats: text(),
+      durationS: { type: DataTypes.REAL, allowNull: false },
       bundle: integer(),
       state: text(),
       attempts: { ...integer(), defaultValue: 0 },

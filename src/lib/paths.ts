@@ -6,6 +6,7 @@ export const paths = {
   latestStrips: () => '/strips?sort=updated',
   newStrip: () => '/strips/new',
   strip: (stripId: string) => `/strips/${encodeURIComponent(stripId)}`,
+  exports: () => '/exports',
   recorder: (search?: URLSearchParams) => `/recorder${search ? `?${search.toString()}` : ''}`,
   help: () => '/help',
 } as const;

@@ -6,14 +6,14 @@ import { exportFileName } from '../../services/exports/export-jobs';
 
 /** An export as the API gives it; `running` is the share of it that is done while it runs. */
 export function presentExport(job: ExportJobRow, running: number): ExportJob {
-  const { durationS, recorder } = JSON.parse(job.parameters) as StripParameters;
+  const { recorder } = JSON.parse(job.parameters) as StripParameters;
   const done = job.state === 'done';
   return {
     id: job.id,
     title: job.title,
     stripId: job.stripId,
     formats: JSON.parse(job.formats) as ExportFormat[],
-    durationS,
+    durationS: job.durationS,
     sampleRateHz: recorder.sampleRateHz,
     state: job.state,
     progress: done ? 1 : job.state === 'running' ? running : 0,

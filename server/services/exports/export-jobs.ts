@@ -80,7 +80,7 @@ export async function createExport(
   const parameters = await wantedParameters(database, account, request);
   const job = await database.write(async (transaction) => {
     await checkRoom(database, account.userId, transaction);
-    return database.exportJobs.create(
+    const created = await database.exportJobs.create(
       {
         id: randomUUID(),
         ownerId: account.userId,
@@ -88,12 +88,14 @@ export async function createExport(
         title: parameters.title,
         parameters: JSON.stringify(parameters),
         formats: JSON.stringify(request.formats),
+        durationS: parameters.durationS,
         bundle: request.bundle ? 1 : 0,
         state: 'waiting',
         createdAt: now().toISOString(),
       },
       { transaction },
     );
+    return created.reload({ transaction });
   });
   runner.wake();
   return job;

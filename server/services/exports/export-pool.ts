@@ -19,13 +19,13 @@ const idleMs = 30_000;
 /** Heap of a thread; an hour of 84 beats/min in every format was measured at 320 MB. Samples lie outside of it. */
 const mostHeapMb = 2048;
 
-/** One thread, started with the first export and let go when idle. */
-export function createExportPool(workerFile: string): ExportPool {
+/** Threads started as they are needed and let go when idle: one for each lane of the queue. */
+export function createExportPool(workerFile: string, threads: number): ExportPool {
   const pool = new Piscina<ExportTask, ExportOutcome>({
     filename: workerFile,
     execArgv: workerFile.endsWith('.ts') ? ['--import', 'tsx'] : [],
     minThreads: 0,
-    maxThreads: 1,
+    maxThreads: threads,
     idleTimeout: idleMs,
     resourceLimits: { maxOldGenerationSizeMb: mostHeapMb },
   });

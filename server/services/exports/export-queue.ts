@@ -57,11 +57,20 @@ export async function requeueInterrupted(database: Database, now: Date): Promise
   }
 }
 
-/** Takes the job that waits longest and marks it as running; null when none waits. */
-export async function takeNextJob(database: Database): Promise<ExportJobRow | null> {
+/** Which exports a lane takes: longer than `fromS`, up to `toS`. */
+export interface LaneRange {
+  fromS: number;
+  toS: number;
+}
+
+/** Takes the job of a lane that waits longest and marks it as running; null when none waits. */
+export async function takeNextJob(
+  database: Database,
+  { fromS, toS }: LaneRange,
+): Promise<ExportJobRow | null> {
   return database.write(async (transaction) => {
     const job = await database.exportJobs.findOne({
-      where: { state: 'waiting' },
+      where: { state: 'waiting', durationS: { [Op.gt]: fromS, [Op.lte]: toS } },
       order: ['createdAt', 'id'],
       transaction,
     });

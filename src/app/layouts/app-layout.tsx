@@ -81,6 +81,7 @@ export function AppLayout() {
         >
           {user.role !== 'learner' && <NavItem to={paths.strips()}>Strips</NavItem>}
           <NavItem to={paths.recorder()}>Recorder</NavItem>
+          {user.role !== 'learner' && <NavItem to={paths.exports()}>Exports</NavItem>}
           <NavItem to={paths.help()}>Help</NavItem>
         </nav>
         <div className="ml-auto flex items-center gap-3">

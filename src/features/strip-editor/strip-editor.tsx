@@ -12,6 +12,7 @@ import { download } from '../../lib/download';
 import { copyPicture } from './commands/copy-picture';
 import { useEditorShortcuts } from './commands/use-editor-shortcuts';
 import { DetailsDialog } from './components/details-dialog';
+import { DownloadDialog } from './components/download/download-dialog';
 import { LoadingStrip } from './components/loading-strip';
 import { ParameterPath } from './groups/parameter-path';
 import { ReadingPanel } from './components/reading-panel';
@@ -40,7 +41,7 @@ export interface StripEditorProps {
   onDuplicate(): void;
 }
 
-type OpenDialog = 'none' | 'saveNew' | 'details';
+type OpenDialog = 'none' | 'saveNew' | 'details' | 'download';
 
 /** A strip laid out in columns opens with all its leads. */
 function viewOf({ sheet }: StripParameters): ViewState {
@@ -165,6 +166,7 @@ export function StripEditor({ strip, initial, origin, onSavedAs, onDuplicate }: 
         onSaveAs={() => setDialog('saveNew')}
         onDetails={() => setDialog('details')}
         onDuplicate={onDuplicate}
+        onDownload={() => setDialog('download')}
         onSavePreset={() => void savePreset()}
         onCopyAddress={() => void copyAddress()}
         onCopyPicture={() => void copy()}
@@ -234,7 +236,14 @@ export function StripEditor({ strip, initial, origin, onSavedAs, onDuplicate }: 
           )}
         </aside>
       </div>
-      {dialog !== 'none' && (
+      {dialog === 'download' && (
+        <DownloadDialog
+          parameters={parameters}
+          stripId={unsaved ? null : stripId}
+          onClose={() => setDialog('none')}
+        />
+      )}
+      {(dialog === 'saveNew' || dialog === 'details') && (
         <DetailsDialog
           title={dialog === 'saveNew' ? 'Save as a new strip' : 'About this strip'}
           action={dialog === 'saveNew' ? 'Save strip' : 'Save version'}

@@ -1,4 +1,11 @@
-import type { CreateExportInput, ExportJob, ExportList, ExportState } from '../../../shared/api/exports';
+import {
+  exportListResponseSchema,
+  exportResponseSchema,
+  type CreateExportInput,
+  type ExportJob,
+  type ExportList,
+  type ExportState,
+} from '../../../shared/api/exports';
 import type { ApiErrorBody } from '../../../shared/api/errors';
 import type { Answer, ApiClient } from './api-client';
 
@@ -14,17 +21,17 @@ export async function startExport(client: ApiClient, body: CreateExportInput): P
   const answer = await askForExport(client, body);
   if (answer.status !== 201)
     throw new Error(`asking answered ${answer.status}: ${JSON.stringify(answer.body)}`);
-  return answer.body.export;
+  return exportResponseSchema.parse(answer.body).export;
 }
 
 export async function readExport(client: ApiClient, id: string): Promise<ExportJob> {
   const { status, body } = await client.get<{ export: ExportJob }>(`/api/exports/${id}`);
   if (status !== 200) throw new Error(`reading an export answered ${status}`);
-  return body.export;
+  return exportResponseSchema.parse(body).export;
 }
 
 export async function listExports(client: ApiClient): Promise<ExportList> {
-  return (await client.get<ExportList>('/api/exports')).body;
+  return exportListResponseSchema.parse((await client.get('/api/exports')).body);
 }
 
 const pollMs = 40;

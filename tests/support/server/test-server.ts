@@ -10,7 +10,11 @@ import { openDatabase, type Database } from '../../../server/models/database';
 import { createRenderPool, type RenderPoolOptions } from '../../../server/services/rendering/render-pool';
 import { createExportFiles } from '../../../server/services/exports/export-files';
 import { createExportPool, type ExportPool } from '../../../server/services/exports/export-pool';
-import { createExportRunner, type ExportRunner } from '../../../server/services/exports/export-runner';
+import {
+  createExportRunner,
+  exportLanes,
+  type ExportRunner,
+} from '../../../server/services/exports/export-runner';
 import { createReportPool } from '../../../server/services/recorder/report-pool';
 import { ApiClient, type Person } from './api-client';
 
@@ -56,7 +60,7 @@ export async function startTestServer(options: TestServerOptions = {}): Promise<
   const exportRunner = createExportRunner({
     database,
     files: exportFiles,
-    pool: exportPool ?? createExportPool(resolve('server/workers/export-worker.ts')),
+    pool: exportPool ?? createExportPool(resolve('server/workers/export-worker.ts'), exportLanes),
     now: options.now ?? (() => new Date()),
     logError: (error) => void logged.push(String(error)),
   });

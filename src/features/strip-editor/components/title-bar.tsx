@@ -16,6 +16,7 @@ interface TitleBarProps {
   onSaveAs(): void;
   onDetails(): void;
   onDuplicate(): void;
+  onDownload(): void;
   onSavePreset(): void;
   onCopyAddress(): void;
   onCopyPicture(): void;
@@ -76,6 +77,7 @@ export function TitleBar(props: TitleBarProps) {
             </span>
           }
         >
+          <MenuItem onSelect={props.onDownload}>Download …</MenuItem>
           <MenuItem onSelect={props.onSaveAs}>Save as a new strip</MenuItem>
           {strip?.canEdit && <MenuItem onSelect={props.onDetails}>Title, teaching point, tags</MenuItem>}
           {strip && <MenuItem onSelect={props.onDuplicate}>Duplicate the saved strip</MenuItem>}

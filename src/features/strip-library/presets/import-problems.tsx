@@ -8,7 +8,7 @@ export function ImportProblems({ error }: { error: Error }) {
   return (
     <div className="flex flex-col gap-3">
       <Notice kind="red" title="Not imported.">
-        {error.message}
+        {error instanceof ApiError ? error.message : 'Something went wrong; try again.'}
       </Notice>
       {problems.length > 0 && (
         <ul

@@ -1,0 +1,5 @@
+import { ExportsList } from '../features/exports/exports-list';
+
+export function Component() {
+  return <ExportsList />;
+}
