@@ -37,8 +37,8 @@ export type ExportOutcome =
 
 const options: ExportOptions = { madeAt: nominalStart };
 
-/** Rendering takes about this share of a job; the rest is writing. */
-const renderingShare = 0.5;
+/** Share of a job that rendering is shown as; an hour in one format takes a tenth to a third of its time for it. */
+const renderingShare = 0.3;
 
 class TooLarge extends Error {}
 

@@ -19,7 +19,7 @@ function plain(text: string): number | null {
 }
 
 /**
- * Reads "70", "0,4", "1.2 s", "1 s + 50 ms", "1000 uV", and for rates also "72/min" or an interval such as "800 ms".
+ * Reads "70", "0,4", "1.2 s", "1 s + 50 ms", "30 min", "1000 uV", and for rates also "72/min" or an interval such as "800 ms".
  * mathjs is loaded only when something other than a plain number was typed.
  */
 export async function parseQuantity(typed: string, unit: string): Promise<ParsedQuantity> {
@@ -30,7 +30,12 @@ export async function parseQuantity(typed: string, unit: string): Promise<Parsed
   const error = { error: `“${typed.trim()}” is not a number${unit ? ` or a quantity in ${unit}` : ''}.` };
   try {
     const { evaluate, isUnit } = await import('./quantity-math');
-    const result: unknown = evaluate(text.replaceAll('µ', 'u').replace(/(\d),(\d)/g, '$1.$2'));
+    // “min” alone would be the smallest of a list.
+    const words = text
+      .replaceAll('µ', 'u')
+      .replace(/(\d),(\d)/g, '$1.$2')
+      .replace(/\bmin\b/g, 'minute');
+    const result: unknown = evaluate(words);
     if (typeof result === 'number') return Number.isFinite(result) ? { value: result } : error;
     if (!isUnit(result)) return error;
     if (unit === '/min') return { value: 60_000 / result.toNumber('ms') };

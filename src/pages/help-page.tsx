@@ -99,6 +99,19 @@ export function Component() {
           saves.
         </p>
       </Section>
+      <Section title="Files">
+        <p>
+          Download, under More in the editor, makes files of the strip as it stands: numbers, pictures,
+          standard recordings. Several come as one archive with a manifest. Long recordings are made in the
+          background and wait under Exports for a week; remarks beside them say what a format could not hold.
+          WAV files are for isolated, attenuated simulator inputs only.
+        </p>
+        <p>
+          A preset file carries strips to another library: titles, teaching points, tags, place in the course,
+          parameters and the engine they were saved with, never whose they are. Importing it first shows what
+          is new and what is here already, and asks whether to skip, keep both or replace.
+        </p>
+      </Section>
       <Section title="Cautions">
         <p>
           For education only; not for diagnosis, monitoring, device programming or treatment. Follow local

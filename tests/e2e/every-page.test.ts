@@ -1,7 +1,10 @@
+import { readFileSync } from 'node:fs';
 import AxeBuilder from '@axe-core/playwright';
 import type { Browser, Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { hasBrowser, launchBrowser, openPage, signInAs } from '../support/browser/browser';
+import { exportStates } from '../support/browser/export-states';
+import { seen, type PageState } from '../support/browser/page-state';
 import { startProduct, type Product } from '../support/browser/product';
 
 const sizes = [
@@ -10,20 +13,10 @@ const sizes = [
   { width: 390, height: 844 },
 ];
 
-interface State {
-  name: string;
-  path: string;
-  /** What to do before looking. */
-  act?(page: Page): Promise<void>;
-  /** Something that is there when the page is ready. */
-  ready(page: Page): Promise<void>;
-}
-
-const seen = (page: Page, text: string): Promise<void> => page.getByText(text).first().waitFor();
 const openGroup = (page: Page, name: string): Promise<void> =>
   page.getByRole('region', { name: 'Parameters' }).getByRole('button', { name }).click();
 
-const states: State[] = [
+const states: PageState[] = [
   {
     name: 'library',
     path: '/strips',
@@ -45,7 +38,7 @@ const states: State[] = [
     path: '/strips/av-sequential-pacing',
     ready: (page) => seen(page, 'stimulated in sequence'),
   },
-  ...['Pacing', 'Leads and capture', 'Waveform', 'Disturbance', 'Recorder'].map((group): State => ({
+  ...['Pacing', 'Leads and capture', 'Waveform', 'Disturbance', 'Recorder'].map((group): PageState => ({
     name: `group ${group}`,
     path: '/strips/two-ventricles-right-first',
     ready: (page) => seen(page, '40 ms apart'),
@@ -109,6 +102,7 @@ const states: State[] = [
     path: '/recorder?source=signal.pulse&setting=monitor&setting=zero0.67withdiagnostic&setting=sampled&setting=0.67to100-notch50',
     ready: (page) => seen(page, 'offline'),
   },
+  ...exportStates(readFileSync('tests/fixtures/preset-file-2.json')),
   { name: 'help', path: '/help', ready: (page) => seen(page, 'What bandwidth does') },
   { name: 'nothing here', path: '/nowhere', ready: (page) => seen(page, 'There is nothing here') },
 ];
@@ -148,6 +142,8 @@ describe.skipIf(!hasBrowser())('every page at every width is accessible and fits
       const { context, page, trouble } = await openPage(browser, product.url, size);
       await signInAs(page, 'educator');
       for (const state of states) {
+        await page.unrouteAll();
+        await state.before?.(page);
         await page.goto(state.path);
         await state.ready(page);
         await state.act?.(page);

@@ -52,7 +52,7 @@ export function ExportsList() {
     <main className="mx-auto w-full max-w-6xl px-4 py-5 tablet:px-6">
       <h1 className="text-title font-semibold tracking-[-0.012em]">Exports</h1>
       <p className="mt-1 max-w-prose text-body text-ink-2">
-        Files made of your strips. Only you see them; every file says that it is synthetic.
+        Files made of your strips: synthetic teaching material, not patient recordings. Only you see them.
       </p>
       <div className="mt-4">
         {error && (

@@ -1,3 +1,4 @@
+import { useEffect } from 'react';
 import { longestExportS } from '../../../../../shared/api/exports';
 import {
   exportFormats,
@@ -27,6 +28,8 @@ interface DownloadFormProps {
 
 /** Formats with what they hold, the archive, the length. */
 export function DownloadForm({ choice, sampleRateHz, durationError, onChange }: DownloadFormProps) {
+  // Loaded beforehand, so that a length typed with its unit is read before the button is pressed.
+  useEffect(() => void import('../../../../lib/quantity-math'), []);
   const { formats, bundle, durationS } = choice;
   const several = formats.length > 1;
   const toggle = (format: ExportFormat, chosen: boolean): void =>
