@@ -1,4 +1,4 @@
-import { useRef, useState, type DragEvent } from 'react';
+import { useEffect, useRef, useState, type DragEvent } from 'react';
 import { classNames } from '../lib/class-names';
 import { Button } from './button';
 
@@ -16,6 +16,13 @@ interface FileDropProps {
 export function FileDrop({ text, accept, label, busy, onFile }: FileDropProps) {
   const input = useRef<HTMLInputElement>(null);
   const [over, setOver] = useState(false);
+  // The browser would open a file that is dropped beside the place, and leave the page.
+  useEffect(() => {
+    const keepPage = (event: Event): void => event.preventDefault();
+    const kinds = ['dragover', 'drop'];
+    for (const kind of kinds) window.addEventListener(kind, keepPage);
+    return () => kinds.forEach((kind) => window.removeEventListener(kind, keepPage));
+  }, []);
   const drop = (event: DragEvent): void => {
     event.preventDefault();
     setOver(false);

@@ -8,8 +8,10 @@ import {
   writeFileSync,
 } from 'node:fs';
 import { tmpdir } from 'node:os';
-import { join } from 'node:path';
+import { join, resolve } from 'node:path';
 import { afterEach, beforeEach, expect, inject, it } from 'vitest';
+import { createExportPool } from '../../server/services/exports/export-pool';
+import { exportLanes } from '../../server/services/exports/export-runner';
 import { followExport, listExports, readExport, startExport } from '../support/server/export-client';
 import { startTestServer, type TestServer } from '../support/server/test-server';
 
@@ -58,6 +60,23 @@ it('after a crash starts a job again, but not one that was started three times',
   const failed = await readExport(again, jobs[1].id);
   expect(failed).toMatchObject({ state: 'failed', file: null });
   expect(failed.failure).toContain('It was started 3 times');
+});
+
+it('fails in words when a worker runs out of memory, and goes on with the next one', async () => {
+  await server.close();
+  const exportPool = createExportPool(resolve('server/workers/export-worker.ts'), exportLanes, 150);
+  server = await startTestServer({ ...kept, exportPool });
+  const educator = await server.signedIn('educator');
+  // Twelve thousand beats as JSON and XML do not fit into 150 MB beside the encoders themselves.
+  const parameters = { durationS: 3600, patient: { atrialRateBpm: 200 } };
+  const large = await startExport(educator, { parameters, formats: ['json', 'aecg'] });
+  const failed = await followExport(educator, large.id);
+  expect(failed).toMatchObject({ state: 'failed', file: null });
+  expect(failed.failure).toContain('more memory than an export may');
+  const next = await startExport(educator, { parameters: { durationS: 2 }, formats: ['events'] });
+  expect((await followExport(educator, next.id)).state).toBe('done');
+  expect(readdirSync(kept.exportDirectory)).toEqual([next.id]);
+  expect(server.logged).toEqual([]);
 });
 
 it('removes files at the start that belong to no job, or are incomplete', async () => {

@@ -38,6 +38,8 @@ describe('requests from other sites', () => {
       ['POST', '/api/strips'],
       ['PUT', '/api/strips/tarn-valley-week-one-av-sequential'],
       ['DELETE', '/api/strips/tarn-valley-week-one-av-sequential'],
+      ['POST', '/api/strips/import'],
+      ['POST', '/api/exports'],
       ['POST', '/api/session'],
       ['DELETE', '/api/session'],
     ] as const) {

@@ -17,10 +17,10 @@ export interface ExportPool {
 
 const idleMs = 30_000;
 /** Heap of a thread; an hour of 84 beats/min in every format was measured at 320 MB. Samples lie outside of it. */
-const mostHeapMb = 2048;
+const usualHeapMb = 2048;
 
 /** Threads started as they are needed and let go when idle: one for each lane of the queue. */
-export function createExportPool(workerFile: string, threads: number): ExportPool {
+export function createExportPool(workerFile: string, threads: number, mostHeapMb = usualHeapMb): ExportPool {
   const pool = new Piscina<ExportTask, ExportOutcome>({
     filename: workerFile,
     execArgv: workerFile.endsWith('.ts') ? ['--import', 'tsx'] : [],

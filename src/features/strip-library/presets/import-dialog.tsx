@@ -94,7 +94,7 @@ export function ImportDialog({ onDone, onClose }: ImportDialogProps) {
       {!lookedAt && !failure && (
         <div className="mt-4">
           <FileDrop
-            text={`Drop a preset file here: .json, at most ${mostPresetsInFile} presets and ${presetFileLimitMb} MB.`}
+            text={`Drop a preset file here: .json, at most ${mostPresetsInFile} presets and ${presetFileLimitMb}\u00a0MB.`}
             accept=".json,application/json"
             label="Choose a file"
             busy={looking.isPending ? 'Reading the file …' : undefined}
