@@ -54,6 +54,15 @@ function archiveTime(madeAt: Date): Date {
   );
 }
 
+/** Tells the share of a file that is written, after each part; nothing when it is not known how many there are. */
+export function partCounter({ partCount }: ExportFile, onShare: (share: number) => void): () => void {
+  let parts = 0;
+  return () => {
+    parts++;
+    if (partCount !== undefined) onShare(Math.min(1, parts / partCount));
+  };
+}
+
 /** An archive that is put out as it grows, so that no file is held beside its packed form. */
 function createArchive(madeAt: Date, sink: (chunk: Uint8Array) => void) {
   const zip = new Zip((error, chunk) => {
@@ -62,7 +71,7 @@ function createArchive(madeAt: Date, sink: (chunk: Uint8Array) => void) {
   });
   return {
     /** Adds a file from its parts; returns its length and checksum. */
-    add({ name, mediaType, parts }: ExportFile): { bytes: number; sha256: string } {
+    add({ name, mediaType, parts }: ExportFile, onPart?: () => void): { bytes: number; sha256: string } {
       const entry = packed.includes(mediaType) ? new ZipPassThrough(name) : new ZipDeflate(name);
       entry.mtime = archiveTime(madeAt);
       zip.add(entry);
@@ -73,6 +82,7 @@ function createArchive(madeAt: Date, sink: (chunk: Uint8Array) => void) {
         hash.update(data);
         bytes += data.length;
         entry.push(data);
+        onPart?.();
       }
       entry.push(new Uint8Array(0), true);
       return { bytes, sha256: hash.digest('hex') };
@@ -97,11 +107,12 @@ function emptyManifest({ parameters, engineVersion, sampleRateHz }: StripRecordi
   };
 }
 
-/** Where an archive goes, and who is told how many formats are in it. */
+/** Where an archive goes, and who is told how far it is. */
 export interface BundleSink {
   /** The archive's next bytes. */
   write(chunk: Uint8Array): void;
-  onFormat?(done: number): void;
+  /** The share that is written, 0 to 1; every format counts the same. */
+  onShare?(share: number): void;
 }
 
 /**
@@ -118,14 +129,16 @@ export async function writeBundle(
   checkExport(recording.parameters, formats);
   const archive = createArchive(options.madeAt, (chunk) => sink.write(chunk));
   const manifest = emptyManifest(recording);
-  for (const [index, format] of [...new Set(formats)].entries()) {
+  const chosen = [...new Set(formats)];
+  for (const [index, format] of chosen.entries()) {
     const { files, warnings } = await exporters[format](recording, options);
     for (const file of files) {
       const { name, mediaType } = file;
-      manifest.files.push({ name, format, mediaType, ...archive.add(file) });
+      const onPart = partCounter(file, (share) => sink.onShare?.((index + share) / chosen.length));
+      manifest.files.push({ name, format, mediaType, ...archive.add(file, onPart) });
     }
     manifest.warnings.push(...warnings.map((text) => ({ format, text })));
-    sink.onFormat?.(index + 1);
+    sink.onShare?.((index + 1) / chosen.length);
   }
   const parts = [`${JSON.stringify(manifest, null, 2)}\n`];
   archive.add({ name: 'manifest.json', mediaType: 'application/json', parts });

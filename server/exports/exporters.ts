@@ -20,6 +20,11 @@ function json(value: unknown): string {
   return `${JSON.stringify(value, null, 2)}\n`;
 }
 
+/** Parts of a strip's CSV: the head, and rows a block at a time. */
+function csvPartCount({ leads }: StripRecording): number {
+  return 1 + Math.ceil(leads.I.length / csvRowsAtOnce);
+}
+
 function* csvParts(recording: StripRecording): Generator<string> {
   yield `${csvHeader}\n`;
   const length = recording.leads.I.length;
@@ -33,13 +38,13 @@ function svg(recording: StripRecording): string {
 }
 
 /** One file without warnings. */
-function oneFile(name: string, mediaType: string, parts: Iterable<string | Uint8Array>) {
-  return { files: [{ name, mediaType, parts }], warnings: [] };
+function oneFile(name: string, mediaType: string, parts: Iterable<string | Uint8Array>, partCount?: number) {
+  return { files: [{ name, mediaType, parts, partCount }], warnings: [] };
 }
 
 /** The exporter of every format; the one list that the command line and the server share. */
 export const exporters: Readonly<Record<ExportFormat, Exporter>> = {
-  csv: (recording) => oneFile('strip.csv', 'text/csv', csvParts(recording)),
+  csv: (recording) => oneFile('strip.csv', 'text/csv', csvParts(recording), csvPartCount(recording)),
   events: ({ events }) => oneFile('events.json', 'application/json', [json(events)]),
   reading: ({ reading }) => oneFile('reading.json', 'application/json', [json(reading)]),
   json: (recording) => oneFile('strip.json', 'application/json', [json(stripJson(recording))]),

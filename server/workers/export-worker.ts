@@ -8,7 +8,7 @@ import {
   type ExportOptions,
 } from '../../shared/formats/export-format';
 import type { StripParameters } from '../../shared/parameters/strip-parameters';
-import { writeBundle } from '../exports/bundle';
+import { partCounter, writeBundle } from '../exports/bundle';
 import { exporters } from '../exports/exporters';
 
 export interface ExportTask {
@@ -70,11 +70,16 @@ async function writeSingle(
   recording: StripRecording,
   format: ExportFormat,
   output: OutputFile,
+  onShare: (share: number) => void,
 ): Promise<Omit<Made, 'bytes'> | null> {
   const { files, warnings } = await exporters[format](recording, options);
   if (files.length !== 1) return null;
   const [file] = files;
-  for (const part of file.parts) output.write(part);
+  const onPart = partCounter(file, onShare);
+  for (const part of file.parts) {
+    output.write(part);
+    onPart();
+  }
   return {
     kind: 'made',
     ending: endingOf(file),
@@ -91,7 +96,7 @@ async function writeArchive(
 ): Promise<Omit<Made, 'bytes'>> {
   const { warnings } = await writeBundle(recording, formats, options, {
     write: (chunk) => output.write(chunk),
-    onFormat: (done) => onShare(done / formats.length),
+    onShare,
   });
   return { kind: 'made', ending: 'zip', mediaType: 'application/zip', warnings };
 }
@@ -104,7 +109,8 @@ export default async function exportStrip(task: ExportTask): Promise<ExportOutco
     const recording = renderLongStrip(parameters, (share) => progress.postMessage(renderingShare * share));
     const onShare = (share: number): void =>
       progress.postMessage(renderingShare + (1 - renderingShare) * share);
-    const single = !bundle && formats.length === 1 ? await writeSingle(recording, formats[0], output) : null;
+    const alone = !bundle && formats.length === 1;
+    const single = alone ? await writeSingle(recording, formats[0], output, onShare) : null;
     const made = single ?? (await writeArchive(recording, formats, output, onShare));
     return { ...made, bytes: output.written() };
   } catch (error) {

@@ -38,6 +38,8 @@ export interface ExportFile {
   mediaType: string;
   /** Contents in order; made as they are asked for, so that a long strip is never one string. */
   parts: Iterable<string | Uint8Array>;
+  /** How many parts there will be, where that is known; only progress goes by it. */
+  partCount?: number;
 }
 
 /** The files of one format, and in sentences what was lost or changed on the way. */

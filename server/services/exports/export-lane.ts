@@ -52,7 +52,9 @@ export function createExportLane(dependencies: LaneDependencies, range: LaneRang
     running = current;
     try {
       const task = await taskOf(database, job, files.unfinished(id));
-      const outcome = await pool.make(task, current.abort.signal, (share) => (current.progress = share));
+      const outcome = await pool.make(task, current.abort.signal, (share) => {
+        current.progress = Math.max(current.progress, share);
+      });
       if (outcome.kind === 'tooLarge') return await finish(id, { state: 'failed', failure: noSpace });
       await files.complete(id);
       await finish(id, doneColumns(outcome));

@@ -152,7 +152,12 @@ export function encodeEdf(recording: StripRecording, { madeAt }: ExportOptions):
   const padded = records.padding / sampleRateHz;
   return {
     files: [
-      { name: 'strip.edf', mediaType: 'application/octet-stream', parts: edfParts(header, records, block) },
+      {
+        name: 'strip.edf',
+        mediaType: 'application/octet-stream',
+        parts: edfParts(header, records, block),
+        partCount: 1 + Math.ceil(records.count / recordsAtOnce),
+      },
     ],
     warnings: [
       ...sixteenBitWarnings(leads),
