@@ -342,7 +342,7 @@ describe.skipIf(!hasBrowser())('in the browser', () => {
   it('refuses a learner by page and by API', async () => {
     const page = await visit();
     await signInAs(page, 'learner');
-    expect(new URL(page.url()).pathname).toBe('/help');
+    expect(new URL(page.url()).pathname).toBe('/recorder');
     await page.goto('/strips');
     await page.getByRole('heading', { name: 'This page is not for your role' }).waitFor();
     expect((await page.request.get('/api/strips')).status()).toBe(403);
