@@ -38,9 +38,12 @@ export class RowProfile {
     return most;
   }
 
-  /** Greatest reach below the line, mm. */
-  reachDownMm(): number {
-    return this.down.reduce((most, value) => Math.max(most, value), 0);
+  /** Greatest reach below the line between two places, mm. */
+  reachDownMm(fromMm = 0, toMm = Infinity): number {
+    const [first, last] = this.binsOf(fromMm, toMm);
+    let most = 0;
+    for (let bin = first; bin <= last; bin++) most = Math.max(most, this.down[bin]);
+    return most;
   }
 
   /** Least distance between this row's line and the next one's at which their inks, 1 mm aside, just touch. */
