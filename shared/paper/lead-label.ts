@@ -46,7 +46,7 @@ interface Label {
 
 function labelOf(segment: RowSegment, footMm: number): Label {
   const goesOn = segment.line > 0 && segment.row === 0 && segment.column === 0;
-  const timeText = goesOn ? `from ${segment.fromS} s` : '';
+  const timeText = goesOn ? `from ${Number(segment.fromS.toFixed(2))} s` : '';
   const nameWidthMm = textWidthMm(segment.label, textStyles.leadName);
   const timeWidthMm = goesOn ? lineTimeGapMm + textWidthMm(timeText, textStyles.lineTime) : 0;
   const widthMm = nameWidthMm + timeWidthMm;

@@ -53,4 +53,12 @@ export class RowProfile {
       0,
     );
   }
+
+  /** A copy in which no ink reaches further than `mostMm` either way. */
+  clipped(mostMm: number): RowProfile {
+    const copy = new RowProfile((this.up.length - 1) * binMm);
+    this.up.forEach((value, bin) => (copy.up[bin] = Math.min(value, mostMm)));
+    this.down.forEach((value, bin) => (copy.down[bin] = Math.min(value, mostMm)));
+    return copy;
+  }
 }

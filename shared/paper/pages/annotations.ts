@@ -1,0 +1,198 @@
+import type { DrawingItem, LineItem } from '../drawing';
+import type { TimeSpan } from '../layout';
+import type { RowProfile } from '../row-profile';
+import { textItem, textWidthMm } from '../text';
+import { textStyles } from '../text-styles';
+import { capHeightEm, lineWeightsMm, type PaperColour } from '../tokens';
+import type { Interval } from './intervals';
+import type { NamedStimulus } from './stimulus-names';
+
+/** The row that annotations stand at; y is relative to its 0 mV line. */
+export interface AnnotatedRow extends TimeSpan {
+  profile: RowProfile;
+  /** x of `fromS`, and millimetres a second takes. */
+  traceXMm: number;
+  mmPerS: number;
+  /** Right edge of the grid. */
+  widthMm: number;
+  /** The profile's ink is clipped to this, so that a giant artefact is passed beside, not over, mm. */
+  tallMm: number;
+}
+
+const capMm = textStyles.interval.size.sizeMm * capHeightEm;
+/** Free paper around annotations, mm. */
+const clearanceMm = 1;
+/** From a stimulus to the start of its name, and from the name to its leader, mm. */
+const besideMm = 2.2;
+const leaderGapMm = 0.7;
+/** A leader stops this far above the ink, mm. */
+const leaderStopMm = 0.8;
+/** Lowest foot of a name above the 0 mV line, mm. */
+const lowestMm = 5;
+/** A name on its less usual side, or below the trace, costs as much as standing this much further off, mm. */
+const costOfOtherSideMm = 4;
+const costOfBelowMm = 8;
+/** Descenders, mm. */
+const belowBaselineMm = 0.8;
+/** Dimension lines: below the ink, one below the other, and their ends, mm. */
+const belowInkMm = 3.5;
+const laneMm = 5;
+const tickHalfMm = 1.1;
+/** Least stretch of line on either side of words within it, and from a line to words beside it, mm. */
+const leastLegMm = 2;
+const wordGapMm = 1.2;
+
+function stroke(x1Mm: number, y1Mm: number, x2Mm: number, y2Mm: number, colour: PaperColour): LineItem {
+  return {
+    kind: 'line',
+    role: 'annotation',
+    ...{ x1Mm, y1Mm, x2Mm, y2Mm },
+    colour,
+    weightMm: lineWeightsMm.annotation,
+  };
+}
+
+function xOf(row: AnnotatedRow, timeS: number): number {
+  return row.traceXMm + (timeS - row.fromS) * row.mmPerS;
+}
+
+/** Where a name can stand: its left edge, how far its near edge is from the 0 mV line, on which sides. */
+interface NamePlace {
+  fromMm: number;
+  footMm: number;
+  left: boolean;
+  above: boolean;
+}
+
+function placesOf(row: AnnotatedRow, xMm: number, widthMm: number): NamePlace[] {
+  const ranges = [
+    { fromMm: xMm - besideMm - widthMm, left: true },
+    { fromMm: xMm + besideMm, left: false },
+  ].filter(({ fromMm }) => fromMm >= clearanceMm && fromMm + widthMm <= row.widthMm - clearanceMm);
+  return ranges.flatMap((range) =>
+    [true, false].map((above) => {
+      const [a, b] = [range.fromMm - clearanceMm, range.fromMm + widthMm + clearanceMm];
+      const inkMm = above ? row.profile.reachUpMm(a, b) : row.profile.reachDownMm(a, b);
+      return { ...range, above, footMm: Math.max(lowestMm, inkMm + clearanceMm) };
+    }),
+  );
+}
+
+function costOf({ footMm, left, above }: NamePlace, { atrial }: NamedStimulus): number {
+  return footMm + (left === atrial ? 0 : costOfOtherSideMm) + (above ? 0 : costOfBelowMm);
+}
+
+function nameItems(row: AnnotatedRow, stimulus: NamedStimulus): DrawingItem[] {
+  const xMm = xOf(row, stimulus.timeS);
+  const { widthMm } = stimulus;
+  const places = placesOf(row, xMm, widthMm).sort((a, b) => costOf(a, stimulus) - costOf(b, stimulus));
+  if (places.length === 0) return [];
+  const { fromMm, footMm, left, above } = places[0];
+  const sign = above ? -1 : 1;
+  const middleMm = footMm + capMm / 2;
+  const edgeMm = left ? fromMm + widthMm + leaderGapMm : fromMm - leaderGapMm;
+  const [a, b] = [xMm - 0.5, xMm + 0.5];
+  const inkMm = (above ? row.profile.reachUpMm(a, b) : row.profile.reachDownMm(a, b)) + leaderStopMm;
+  // Beside an artefact taller than its name the leader points at it from the side.
+  const turns = inkMm < middleMm;
+  const endMm = turns ? xMm : xMm + (left ? -leaderStopMm : leaderStopMm);
+  row.profile.add(fromMm, fromMm + widthMm, -sign * (footMm + capMm + belowBaselineMm));
+  row.profile.add(Math.min(xMm, edgeMm), Math.max(xMm, edgeMm), -sign * (middleMm + belowBaselineMm));
+  const baselineMm = above ? -footMm : footMm + capMm;
+  return [
+    textItem(stimulus.text, textStyles.stimulusName, fromMm, baselineMm),
+    stroke(edgeMm, sign * middleMm, endMm, sign * middleMm, 'copper'),
+    ...(turns ? [stroke(xMm, sign * middleMm, xMm, sign * inkMm, 'copper')] : []),
+  ];
+}
+
+/** Names of stimuli over the row, each with a line that leads to its stimulus; the row's profile takes them up. */
+export function stimulusNameItems(row: AnnotatedRow, stimuli: readonly NamedStimulus[]): DrawingItem[] {
+  return stimuli
+    .filter(({ timeS }) => timeS >= row.fromS && timeS < row.toS)
+    .flatMap((stimulus) => nameItems(row, stimulus));
+}
+
+/** A dimension line with its words, and the stretch of paper that both take. */
+interface Dimension {
+  x1Mm: number;
+  x2Mm: number;
+  text: string;
+  textXMm: number;
+  textWidthMm: number;
+  fromMm: number;
+  toMm: number;
+  lane: number;
+}
+
+/** Words within the line where they fit, else to the left of it, else to the right. */
+function dimensionOf(row: AnnotatedRow, { fromS, toS, text }: Interval): Dimension {
+  const [x1Mm, x2Mm] = [xOf(row, fromS), xOf(row, toS)];
+  const width = textWidthMm(text, textStyles.interval);
+  const base = { x1Mm, x2Mm, text, textWidthMm: width, lane: 0 };
+  if (x2Mm - x1Mm >= width + 2 * (leastLegMm + wordGapMm)) {
+    return { ...base, textXMm: (x1Mm + x2Mm - width) / 2, fromMm: x1Mm, toMm: x2Mm };
+  }
+  const leftMm = x1Mm - wordGapMm - width;
+  if (leftMm >= clearanceMm) return { ...base, textXMm: leftMm, fromMm: leftMm, toMm: x2Mm };
+  const rightMm = x2Mm + wordGapMm;
+  return { ...base, textXMm: rightMm, fromMm: x1Mm, toMm: rightMm + width };
+}
+
+/** The first lane in which nothing is in the way. */
+function freeLane(dimension: Dimension, placed: readonly Dimension[]): number {
+  for (let lane = 0; ; lane++) {
+    const taken = placed.some(
+      (other) =>
+        other.lane === lane && other.fromMm < dimension.toMm - 0.01 && other.toMm > dimension.fromMm + 0.01,
+    );
+    if (!taken) return lane;
+  }
+}
+
+/** One instance of every kind that lies within the row: that nearest to its middle whose place is not too deep in ink. */
+export function goodInstances(row: AnnotatedRow, intervals: readonly Interval[]): Interval[] {
+  const middleS = (row.fromS + row.toS) / 2;
+  const best = new Map<Interval['kind'], { interval: Interval; cost: number }>();
+  for (const interval of intervals) {
+    if (interval.fromS < row.fromS || interval.toS >= row.toS) continue;
+    const deepMm = row.profile.reachDownMm(xOf(row, interval.fromS), xOf(row, interval.toS));
+    const offS = Math.abs((interval.fromS + interval.toS) / 2 - middleS);
+    const cost = offS + (deepMm >= row.tallMm ? row.toS - row.fromS : 0);
+    const found = best.get(interval.kind);
+    if (!found || cost < found.cost) best.set(interval.kind, { interval, cost });
+  }
+  return [...best.values()].map(({ interval }) => interval);
+}
+
+function dimensionItems(dimension: Dimension, yMm: number): DrawingItem[] {
+  const { x1Mm, x2Mm, text, textXMm, textWidthMm: width } = dimension;
+  const inside = textXMm > x1Mm && textXMm < x2Mm;
+  const line = inside
+    ? [
+        stroke(x1Mm, yMm, textXMm - wordGapMm, yMm, 'ink'),
+        stroke(textXMm + width + wordGapMm, yMm, x2Mm, yMm, 'ink'),
+      ]
+    : [stroke(x1Mm, yMm, x2Mm, yMm, 'ink')];
+  const ticks = [x1Mm, x2Mm].map((xMm) => stroke(xMm, yMm - tickHalfMm, xMm, yMm + tickHalfMm, 'ink'));
+  return [...line, ...ticks, textItem(text, textStyles.interval, textXMm, yMm + capMm / 2)];
+}
+
+/** Dimension lines below the row's ink, all of a lane at one height; the row's profile takes them up. */
+export function intervalItems(row: AnnotatedRow, intervals: readonly Interval[]): DrawingItem[] {
+  const placed: Dimension[] = [];
+  for (const interval of intervals) {
+    const dimension = dimensionOf(row, interval);
+    placed.push({ ...dimension, lane: freeLane(dimension, placed) });
+  }
+  if (placed.length === 0) return [];
+  const inkMm = Math.max(
+    ...placed.map(({ fromMm, toMm }) => row.profile.reachDownMm(fromMm - clearanceMm, toMm + clearanceMm)),
+  );
+  const firstMm = inkMm + belowInkMm;
+  return placed.flatMap((dimension) => {
+    const yMm = firstMm + dimension.lane * laneMm;
+    row.profile.add(dimension.fromMm, dimension.toMm, -(yMm + capMm));
+    return dimensionItems(dimension, yMm);
+  });
+}
