@@ -41,6 +41,8 @@ const tickHalfMm = 1.1;
 /** Least stretch of line on either side of words within it, and from a line to words beside it, mm. */
 const leastLegMm = 2;
 const wordGapMm = 1.2;
+/** A lane further down costs as much as standing this share of the line off its middle. */
+const costOfLane = 0.6;
 
 function stroke(x1Mm: number, y1Mm: number, x2Mm: number, y2Mm: number, colour: PaperColour): LineItem {
   return {
@@ -150,19 +152,30 @@ function freeLane(dimension: Dimension, placed: readonly Dimension[]): number {
   }
 }
 
-/** One instance of every kind that lies within the row: that nearest to its middle whose place is not too deep in ink. */
-export function goodInstances(row: AnnotatedRow, intervals: readonly Interval[]): Interval[] {
-  const middleS = (row.fromS + row.toS) / 2;
-  const best = new Map<Interval['kind'], { interval: Interval; cost: number }>();
-  for (const interval of intervals) {
-    if (interval.fromS < row.fromS || interval.toS >= row.toS) continue;
-    const deepMm = row.profile.reachDownMm(xOf(row, interval.fromS), xOf(row, interval.toS));
-    const offS = Math.abs((interval.fromS + interval.toS) / 2 - middleS);
-    const cost = offS + (deepMm >= row.tallMm ? row.toS - row.fromS : 0);
-    const found = best.get(interval.kind);
-    if (!found || cost < found.cost) best.set(interval.kind, { interval, cost });
+/** How good an instance is: near the middle of the row, in a lane above, not beside ink that is too deep; s. */
+function badness(row: AnnotatedRow, interval: Interval, dimension: Dimension): number {
+  const lineS = row.toS - row.fromS;
+  const offS = Math.abs((interval.fromS + interval.toS - row.fromS - row.toS) / 2);
+  const deepMm = row.profile.reachDownMm(dimension.fromMm, dimension.toMm);
+  return offS + dimension.lane * lineS * costOfLane + (deepMm >= row.tallMm ? lineS : 0);
+}
+
+/** Gives one instance of every kind that lies within the row its place. */
+function placeInstances(row: AnnotatedRow, intervals: readonly Interval[]): Map<Interval['kind'], Dimension> {
+  const placed = new Map<Interval['kind'], Dimension>();
+  const within = intervals.filter(({ fromS, toS }) => fromS >= row.fromS && toS < row.toS);
+  for (const kind of new Set(within.map((interval) => interval.kind))) {
+    const taken = [...placed.values()];
+    const candidates = within
+      .filter((interval) => interval.kind === kind)
+      .map((interval) => {
+        const dimension = dimensionOf(row, interval);
+        const laned = { ...dimension, lane: freeLane(dimension, taken) };
+        return { dimension: laned, cost: badness(row, interval, laned) };
+      });
+    placed.set(kind, candidates.reduce((best, one) => (one.cost < best.cost ? one : best)).dimension);
   }
-  return [...best.values()].map(({ interval }) => interval);
+  return placed;
 }
 
 function dimensionItems(dimension: Dimension, yMm: number): DrawingItem[] {
@@ -178,21 +191,25 @@ function dimensionItems(dimension: Dimension, yMm: number): DrawingItem[] {
   return [...line, ...ticks, textItem(text, textStyles.interval, textXMm, yMm + capMm / 2)];
 }
 
-/** Dimension lines below the row's ink, all of a lane at one height; the row's profile takes them up. */
-export function intervalItems(row: AnnotatedRow, intervals: readonly Interval[]): DrawingItem[] {
-  const placed: Dimension[] = [];
-  for (const interval of intervals) {
-    const dimension = dimensionOf(row, interval);
-    placed.push({ ...dimension, lane: freeLane(dimension, placed) });
-  }
-  if (placed.length === 0) return [];
+/**
+ * One good instance of every kind of interval as a dimension line below the row's ink, all of a lane at one height, and the
+ * kinds drawn. The row's profile takes them up.
+ */
+export function intervalItems(
+  row: AnnotatedRow,
+  intervals: readonly Interval[],
+): { items: DrawingItem[]; kinds: Interval['kind'][] } {
+  const placed = placeInstances(row, intervals);
+  const dimensions = [...placed.values()];
   const inkMm = Math.max(
-    ...placed.map(({ fromMm, toMm }) => row.profile.reachDownMm(fromMm - clearanceMm, toMm + clearanceMm)),
+    ...dimensions.map(({ fromMm, toMm }) =>
+      row.profile.reachDownMm(fromMm - clearanceMm, toMm + clearanceMm),
+    ),
   );
-  const firstMm = inkMm + belowInkMm;
-  return placed.flatMap((dimension) => {
-    const yMm = firstMm + dimension.lane * laneMm;
+  const items = dimensions.flatMap((dimension) => {
+    const yMm = inkMm + belowInkMm + dimension.lane * laneMm;
     row.profile.add(dimension.fromMm, dimension.toMm, -(yMm + capMm));
     return dimensionItems(dimension, yMm);
   });
+  return { items, kinds: [...placed.keys()] };
 }

@@ -64,9 +64,8 @@ function laySystems(
   let intervals: Interval[] = answer && setup.intervals ? intervalsOf(reading?.beats ?? [], events) : [];
   const ladder = answer && setup.ladder ? ladderOf(events) : null;
   return lines.map((line, i) => {
-    const { system, drawn } = laySystem(context, line, i, { stimuli, intervals, ladder });
-    const kinds = new Set(drawn.map(({ kind }) => kind));
-    intervals = intervals.filter(({ kind }) => !kinds.has(kind));
+    const { system, kinds } = laySystem(context, line, i, { stimuli, intervals, ladder });
+    intervals = intervals.filter(({ kind }) => !kinds.includes(kind));
     return system;
   });
 }

@@ -11,7 +11,7 @@ import type { PlacedSegment } from '../placed-segment';
 import { layRow, leadChangeStroke, stoppedLeads, traceItems, type Row } from '../row';
 import { clearanceMm, leastPitchMm, rowSpacing, toLargeBoxes } from '../row-spacing';
 import type { RowProfile } from '../row-profile';
-import { goodInstances, intervalItems, stimulusNameItems, type AnnotatedRow } from './annotations';
+import { intervalItems, stimulusNameItems, type AnnotatedRow } from './annotations';
 import type { Interval } from './intervals';
 import type { PageFrame } from './page-frame';
 import { lineSegments, type PageLine } from './page-lines';
@@ -24,7 +24,7 @@ const ladderBandMm = Math.ceil(ladderHeightMm / largeBoxMm) * largeBoxMm;
 /** Annotations pass beside ink that reaches further than this, mm. */
 const tallMm = 24;
 /** Rows may stand this much closer than their ink asks for, share, where that saves a page. */
-const closest = 0.65;
+const closest = 0.55;
 /** Least room above the first line and below the last where paper is short, mm. */
 const trimmedEdgeMm = 10;
 /** Lane names need this much room left of the traces, mm; elsewhere they are letters. */
@@ -61,10 +61,13 @@ export interface SystemMarks {
   ladder: readonly LadderMark[] | null;
 }
 
-function annotate(row: AnnotatedRow, marks: SystemMarks): { items: DrawingItem[]; drawn: Interval[] } {
+function annotate(
+  row: AnnotatedRow,
+  marks: SystemMarks,
+): { items: DrawingItem[]; kinds: Interval['kind'][] } {
   const names = stimulusNameItems(row, marks.stimuli);
-  const drawn = goodInstances(row, marks.intervals);
-  return { items: [...names, ...intervalItems(row, drawn)], drawn };
+  const { items, kinds } = intervalItems(row, marks.intervals);
+  return { items: [...names, ...items], kinds };
 }
 
 /** How far items reach above and below the line they are relative to, mm. */
@@ -82,7 +85,7 @@ export function laySystem(
   line: PageLine,
   lineIndex: number,
   marks: SystemMarks,
-): { system: System; drawn: Interval[] } {
+): { system: System; kinds: Interval['kind'][] } {
   const { strip, setup, frame, rows: cells } = context;
   const { speedMmPerS } = setup;
   const { traceXMm, pulseXMm, contentWidthMm } = frame;
@@ -92,7 +95,7 @@ export function laySystem(
   });
   const profile = rows[rows.length - 1].profile.clipped(tallMm);
   const place = { traceXMm, mmPerS: speedMmPerS, widthMm: contentWidthMm, tallMm };
-  const { items, drawn } = annotate({ ...line, ...place, profile }, marks);
+  const { items, kinds } = annotate({ ...line, ...place, profile }, marks);
   const gainMmPerMv = Math.max(...cells.flat().map((cell) => cell.gainMmPerMv)) as System['gainMmPerMv'];
   const profiles = rows.map((row) => row.profile);
   const before = rows.length > 1 ? rows[rows.length - 2].profile.clipped(tallMm) : null;
@@ -103,7 +106,7 @@ export function laySystem(
     pitchMm: rowSpacing(profiles, rows.length, gainMmPerMv).pitchMm,
     ladder: marks.ladder,
   };
-  return { system, drawn };
+  return { system, kinds };
 }
 
 /** How rows are spaced: by one pitch, with the room at the edges of a grid usual or trimmed to the ink. */
