@@ -16,6 +16,17 @@ export function toLargeBoxes(lengthMm: number): number {
   return Math.ceil(lengthMm / largeBoxMm - 1e-9) * largeBoxMm;
 }
 
+/** Most distance between rows at a gain, mm. */
+function greatestMm(gainMmPerMv: PaperGainMmPerMv): number {
+  return Math.max(2 * leastPitchMm, greatestPitchMv * gainMmPerMv);
+}
+
+/** Distance between two rows that keeps their inks apart, within the limits, in whole large boxes. */
+export function rowGapMm(row: RowProfile, next: RowProfile, gainMmPerMv: PaperGainMmPerMv): number {
+  const neededMm = row.distanceToNextMm(next) + clearanceMm;
+  return toLargeBoxes(Math.min(greatestMm(gainMmPerMv), Math.max(leastPitchMm, neededMm)));
+}
+
 /** Heights in whole large boxes, so that every 0 mV line lies on a heavy line. */
 export interface RowSpacing {
   /** From the upper edge of the paper to the first 0 mV line, mm. */
@@ -39,7 +50,7 @@ export function rowSpacing(
 ): RowSpacing {
   const leastMv = rowsPerLine <= fewRows ? leastPitchMv.few : leastPitchMv.many;
   const least = Math.max(leastPitchMm, leastMv * gainMmPerMv);
-  const greatest = Math.max(2 * leastPitchMm, greatestPitchMv * gainMmPerMv);
+  const greatest = greatestMm(gainMmPerMv);
   const within = (neededMm: number, floorMm: number) =>
     toLargeBoxes(Math.min(greatest, Math.max(floorMm, neededMm)));
   const needed = profiles

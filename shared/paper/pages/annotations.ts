@@ -66,11 +66,22 @@ interface NamePlace {
   above: boolean;
 }
 
-function placesOf(row: AnnotatedRow, xMm: number, widthMm: number): NamePlace[] {
+/** `waitingMm` are the stimuli further left that still need their leaders: no name may cover them. */
+function placesOf(
+  row: AnnotatedRow,
+  xMm: number,
+  widthMm: number,
+  waitingMm: readonly number[],
+): NamePlace[] {
   const ranges = [
     { fromMm: xMm - besideMm - widthMm, left: true },
     { fromMm: xMm + besideMm, left: false },
-  ].filter(({ fromMm }) => fromMm >= clearanceMm && fromMm + widthMm <= row.widthMm - clearanceMm);
+  ].filter(
+    ({ fromMm, left }) =>
+      fromMm >= clearanceMm &&
+      fromMm + widthMm <= row.widthMm - clearanceMm &&
+      !(left && waitingMm.some((waiting) => waiting > fromMm - clearanceMm)),
+  );
   return ranges.flatMap((range) =>
     [true, false].map((above) => {
       const [a, b] = [range.fromMm - clearanceMm, range.fromMm + widthMm + clearanceMm];
@@ -84,10 +95,12 @@ function costOf({ footMm, left, above }: NamePlace, { atrial }: NamedStimulus): 
   return footMm + (left === atrial ? 0 : costOfOtherSideMm) + (above ? 0 : costOfBelowMm);
 }
 
-function nameItems(row: AnnotatedRow, stimulus: NamedStimulus): DrawingItem[] {
+function nameItems(row: AnnotatedRow, stimulus: NamedStimulus, waitingMm: readonly number[]): DrawingItem[] {
   const xMm = xOf(row, stimulus.timeS);
   const { widthMm } = stimulus;
-  const places = placesOf(row, xMm, widthMm).sort((a, b) => costOf(a, stimulus) - costOf(b, stimulus));
+  const places = placesOf(row, xMm, widthMm, waitingMm).sort(
+    (a, b) => costOf(a, stimulus) - costOf(b, stimulus),
+  );
   if (places.length === 0) return [];
   const { fromMm, footMm, left, above } = places[0];
   const sign = above ? -1 : 1;
@@ -110,9 +123,14 @@ function nameItems(row: AnnotatedRow, stimulus: NamedStimulus): DrawingItem[] {
 
 /** Names of stimuli over the row, each with a line that leads to its stimulus; the row's profile takes them up. */
 export function stimulusNameItems(row: AnnotatedRow, stimuli: readonly NamedStimulus[]): DrawingItem[] {
-  return stimuli
+  // From right to left: a name right of its stimulus then rises above the one after it and keeps its leader free.
+  const here = stimuli
     .filter(({ timeS }) => timeS >= row.fromS && timeS < row.toS)
-    .flatMap((stimulus) => nameItems(row, stimulus));
+    .sort((a, b) => b.timeS - a.timeS);
+  return here.flatMap((stimulus, i) => {
+    const waitingMm = here.slice(i + 1).map(({ timeS }) => xOf(row, timeS));
+    return nameItems(row, stimulus, waitingMm);
+  });
 }
 
 /** A dimension line with its words, and the stretch of paper that both take. */

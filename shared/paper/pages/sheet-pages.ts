@@ -10,6 +10,8 @@ const stripGapMm = 6;
 /** Room kept for notes that only drawing brings. */
 const longestDrawnNotes =
   'Rows stand closer than their traces are tall. Cut at the edge of the paper: I, II, III, −aVR, aVL, aVF, V1.';
+/** Over several pages rows are not brought closer than this share of what they ask for. */
+const leastCrowdedShare = 0.75;
 const goesOn = 'Continued on the next page.';
 
 const kindsOf: Readonly<Record<PageSetup['sheets'], readonly SheetKind[]>> = {
@@ -63,6 +65,14 @@ function named(flow: readonly FlowItem[], name: string): FlowItem[] {
   }));
 }
 
+/** A long strip over as few pages as its rows allow without crowding, as roomy as that leaves them. */
+function fewestPages(plan: StripPlan, room: number): FlowItem[][] {
+  const choices = planSpacings(plan)
+    .filter((spacing, _, [{ pitchMm }]) => spacing.pitchMm >= pitchMm * leastCrowdedShare)
+    .map((spacing) => paginate(stripFlow(plan, spacing, room), room));
+  return choices.reduce((best, pages) => (pages.length < best.length ? pages : best));
+}
+
 /** One strip on one page where any spacing allows it, else over as many pages as it takes. */
 function ownPages(plan: StripPlan, words: PageWords): PageDraft[] {
   const { kind, heading, context, subject, notes } = plan;
@@ -76,7 +86,7 @@ function ownPages(plan: StripPlan, words: PageWords): PageDraft[] {
     if (flowHeightMm(flow) <= room) return [{ ...draft, label, flow, notes }];
   }
   const longRoom = roomMm(words.frame, head, [...notes, longestDrawnNotes, goesOn]);
-  const pages = paginate(stripFlow(plan, { ...spacings[0], trimmed: true }, longRoom), longRoom);
+  const pages = fewestPages(plan, longRoom);
   return pages.map((flow, i) => ({
     ...draft,
     label: `${label}, page ${i + 1} of ${pages.length}`,
@@ -85,26 +95,35 @@ function ownPages(plan: StripPlan, words: PageWords): PageDraft[] {
   }));
 }
 
-/** Pages of strips that share a page, or of one strip alone: every sheet of one kind, then of the next. */
-function groupDrafts(subjects: readonly SheetSubject[], words: PageWords): PageDraft[] {
-  const kinds = kindsOf[words.setup.sheets];
-  const plansOf = (kind: SheetKind, index: number): StripPlan =>
-    planStrip(subjects[index], index, kind, words);
-  const drafts: PageDraft[] = [];
-  for (let first = 0; first < subjects.length;) {
-    const plans = kinds.map((kind) => [plansOf(kind, first)]);
-    let shared: PageDraft[] | null = null;
-    for (let next = first + 1; next < subjects.length; next++) {
-      const longer = plans.map((group, i) => [...group, plansOf(kinds[i], next)]);
-      const pages = longer.map((group) => sharedPage(group, words));
-      if (pages.some((page) => page === null)) break;
-      shared = pages.flatMap((page) => page ?? []);
-      plans.forEach((group, i) => group.push(longer[i][longer[i].length - 1]));
+/** Pages of one kind: strips share a page while they fit, others have their own. */
+function pagesOf(
+  plans: readonly StripPlan[],
+  words: PageWords,
+): { drafts: PageDraft[]; plans: StripPlan[] }[] {
+  const pages: { drafts: PageDraft[]; plans: StripPlan[] }[] = [];
+  for (const plan of plans) {
+    const last = pages.at(-1);
+    const shared = last ? sharedPage([...last.plans, plan], words) : null;
+    if (last && shared) {
+      last.drafts = [shared];
+      last.plans.push(plan);
+    } else {
+      pages.push({ drafts: ownPages(plan, words), plans: [plan] });
     }
-    drafts.push(...(shared ?? plans.flatMap(([plan]) => ownPages(plan, words))));
-    first += plans[0].length;
   }
-  return drafts;
+  return pages;
+}
+
+/** Pages of the first kind, and after each of them the other sheets of its strips. */
+function allDrafts(subjects: readonly SheetSubject[], words: PageWords): PageDraft[] {
+  const [first, ...others] = kindsOf[words.setup.sheets];
+  const plansOf = (kind: SheetKind, indices: readonly number[]): StripPlan[] =>
+    indices.map((index) => planStrip(subjects[index], index, kind, words));
+  return pagesOf(plansOf(first, [...subjects.keys()]), words).flatMap(({ drafts, plans }) => {
+    const indices = plans.map(({ index }) => index);
+    const rest = others.flatMap((kind) => pagesOf(plansOf(kind, indices), words));
+    return [...drafts, ...rest.flatMap((page) => page.drafts)];
+  });
 }
 
 /** Pages of one kind are numbered by themselves, so that question sheets can be handed out alone. */
@@ -162,7 +181,7 @@ export function layoutSheetPages(
 ): SheetDocument {
   if (subjects.length === 0) throw new RangeError('A document of sheets needs at least one strip; it has 0');
   const words: PageWords = { setup, made, frame: pageFrame(setup) };
-  const drafts = groupDrafts(subjects, words);
+  const drafts = allDrafts(subjects, words);
   const done = finished(drafts, words);
   return {
     title: documentTitle(subjects, setup, drafts),

@@ -9,7 +9,7 @@ import { largeBoxMm } from '../paper-scale';
 import type { PaperStrip } from '../paper-strip';
 import type { PlacedSegment } from '../placed-segment';
 import { layRow, leadChangeStroke, stoppedLeads, traceItems, type Row } from '../row';
-import { clearanceMm, leastPitchMm, rowSpacing, toLargeBoxes } from '../row-spacing';
+import { clearanceMm, leastPitchMm, rowGapMm, rowSpacing, toLargeBoxes } from '../row-spacing';
 import type { RowProfile } from '../row-profile';
 import { intervalItems, stimulusNameItems, type AnnotatedRow } from './annotations';
 import type { Interval } from './intervals';
@@ -40,7 +40,8 @@ export interface System {
   belowMm: number;
   /** Least distance from the last row to the one before it, mm. */
   lastGapMm: number;
-  /** Distance between rows that their ink asks for, mm. */
+  /** Distance from each row to the next that their ink asks for, mm, and the one that suits all. */
+  gapsMm: number[];
   pitchMm: number;
   gainMmPerMv: LeadCell['gainMmPerMv'];
   ladder: readonly LadderMark[] | null;
@@ -103,30 +104,39 @@ export function laySystem(
     ...{ line, rows, annotations: items, gainMmPerMv },
     ...extent(items),
     lastGapMm: before && items.length > 0 ? before.distanceToNextMm(profile) + clearanceMm : 0,
+    gapsMm: profiles.slice(1).map((next, i) => rowGapMm(profiles[i], next, gainMmPerMv)),
     pitchMm: rowSpacing(profiles, rows.length, gainMmPerMv).pitchMm,
     ladder: marks.ladder,
   };
   return { system, kinds };
 }
 
-/** How rows are spaced: by one pitch, with the room at the edges of a grid usual or trimmed to the ink. */
+/** How rows are spaced. */
 export interface Spacing {
+  /** Greatest distance between rows. */
   pitchMm: number;
+  /** All rows this far apart, or each as its ink asks for up to this. */
+  even: boolean;
+  /** Room at the edges of a grid as its ink asks for instead of a usual one. */
   trimmed: boolean;
   /** Most room above the first line and below the last, mm; where it bites, traces are cut at the edge. */
   edgeLimitMm?: number;
 }
 
-/** Spacings to try, roomiest first: as the ink asks, with trimmed edges, then closer and closer within limits. */
+/**
+ * Spacings to try, roomiest first: even, then with trimmed edges, then each row as its ink asks for, then rows that stand
+ * closer than that.
+ */
 export function spacingsOf(systems: readonly System[]): Spacing[] {
-  const wantedMm = Math.max(...systems.map((system) => system.pitchMm));
+  const pitchMm = Math.max(...systems.map((system) => system.pitchMm));
   const spacings: Spacing[] = [
-    { pitchMm: wantedMm, trimmed: false },
-    { pitchMm: wantedMm, trimmed: true },
+    { pitchMm, even: true, trimmed: false },
+    { pitchMm, even: true, trimmed: true },
+    { pitchMm, even: false, trimmed: true },
   ];
-  const leastMm = Math.max(leastPitchMm, closest * wantedMm);
-  for (let pitchMm = wantedMm - largeBoxMm; pitchMm >= leastMm; pitchMm -= largeBoxMm) {
-    spacings.push({ pitchMm, trimmed: true });
+  const leastMm = Math.max(leastPitchMm, closest * pitchMm);
+  for (let closerMm = pitchMm - largeBoxMm; closerMm >= leastMm; closerMm -= largeBoxMm) {
+    spacings.push({ pitchMm: closerMm, even: false, trimmed: true });
   }
   return spacings;
 }
@@ -145,6 +155,13 @@ export interface SystemPart {
   crowded: boolean;
 }
 
+/** Distance from the row before; before the last there is also room for what is written there. */
+function gapBeforeMm(system: System, spacing: Spacing, row: number): number {
+  const ownMm = spacing.even ? spacing.pitchMm : system.gapsMm[row - 1];
+  const writtenMm = row === system.rows.length - 1 ? Math.max(0, toLargeBoxes(system.lastGapMm - ownMm)) : 0;
+  return Math.min(ownMm, spacing.pitchMm) + writtenMm;
+}
+
 /** Spaces the rows [fromRow, toRow) of a system. */
 export function partOf(system: System, spacing: Spacing, fromRow: number, toRow: number): SystemPart {
   const rows = system.rows.slice(fromRow, toRow);
@@ -157,15 +174,15 @@ export function partOf(system: System, spacing: Spacing, fromRow: number, toRow:
   const belowMm = hasLast ? toLargeBoxes(system.belowMm + 1) : 0;
   const topMm = Math.max(Math.min(edges.topMm, limitMm), aboveMm);
   const bottomMm = Math.max(Math.min(edges.bottomMm, limitMm), belowMm);
-  const extraMm = hasLast ? Math.max(0, toLargeBoxes(system.lastGapMm - system.pitchMm)) : 0;
-  const baselines = rows.map(
-    (_, i) => topMm + i * spacing.pitchMm + (i > 0 && i === rows.length - 1 ? extraMm : 0),
-  );
+  const baselines = [topMm];
+  for (let row = fromRow + 1; row < toRow; row++) {
+    baselines.push(baselines[baselines.length - 1] + gapBeforeMm(system, spacing, row));
+  }
   const gridHeightMm = baselines[baselines.length - 1] + bottomMm;
   return {
     ...{ system, fromRow, toRow, baselines, gridHeightMm },
     heightMm: gridHeightMm + (hasLast && system.ladder ? ladderBandMm : 0),
-    crowded: rows.length > 1 && spacing.pitchMm < system.pitchMm,
+    crowded: system.gapsMm.slice(fromRow, toRow - 1).some((gapMm) => gapMm > spacing.pitchMm),
   };
 }
 
