@@ -39,8 +39,10 @@ const belowInkMm = 3.5;
 const laneMm = 5;
 const tickHalfMm = 1.1;
 /** Least stretch of line on either side of words within it, and from a line to words beside it, mm. */
-const leastLegMm = 2;
-const wordGapMm = 1.2;
+const leastLegMm = 1;
+const wordGapMm = 0.9;
+/** Between dimension lines of one lane that do not follow each other, mm. */
+const apartMm = 3;
 /** A lane further down costs as much as standing this share of the line off its middle. */
 const costOfLane = 0.6;
 
@@ -159,12 +161,21 @@ function dimensionOf(row: AnnotatedRow, { fromS, toS, text }: Interval): Dimensi
   return { ...base, textXMm: rightMm, fromMm: x1Mm, toMm: rightMm + width };
 }
 
+/** Whether one dimension line ends where the other begins, without words between them. */
+function chained(a: Dimension, b: Dimension): boolean {
+  return Math.abs(a.x2Mm - b.x1Mm) < 0.01 && a.toMm === a.x2Mm && b.fromMm === b.x1Mm;
+}
+
 /** The first lane in which nothing is in the way. */
 function freeLane(dimension: Dimension, placed: readonly Dimension[]): number {
   for (let lane = 0; ; lane++) {
     const taken = placed.some(
       (other) =>
-        other.lane === lane && other.fromMm < dimension.toMm - 0.01 && other.toMm > dimension.fromMm + 0.01,
+        other.lane === lane &&
+        other.fromMm < dimension.toMm + apartMm &&
+        other.toMm > dimension.fromMm - apartMm &&
+        !chained(other, dimension) &&
+        !chained(dimension, other),
     );
     if (!taken) return lane;
   }

@@ -6,6 +6,8 @@ export interface FlowItem {
   heightMm: number;
   /** Free paper above it, unless it is the first of its page, mm. */
   gapMm: number;
+  /** Notes that it will bring, at their longest; none when absent. */
+  expects?: readonly string[];
   /** Its drawing from the corner (0, 0) of the content. */
   draw(): { items: DrawingItem[]; system?: PlacedSystem; notes?: string[] };
 }
@@ -13,6 +15,11 @@ export interface FlowItem {
 /** Height of items one below the other, mm. */
 export function flowHeightMm(items: readonly FlowItem[]): number {
   return items.reduce((sum, item, i) => sum + item.heightMm + (i > 0 ? item.gapMm : 0), 0);
+}
+
+/** Notes to keep room for, each once. */
+export function expectedNotes(items: readonly FlowItem[]): string[] {
+  return [...new Set(items.flatMap((item) => item.expects ?? []))];
 }
 
 function filled(items: readonly FlowItem[], roomMm: number): FlowItem[][] {

@@ -47,11 +47,14 @@ function betweenBeats(beat: BeatReading, next: BeatReading): Interval[] {
   const found: Interval[] = [];
   const [fromS, toS] = [beat.stimulusTimesS[0], next.stimulusTimesS[0]];
   if (paced(beat) && paced(next)) found.push(interval('vv', 'VV', fromS, toS));
-  if (own(beat) && next.stimuli.length > 0 && next.origin === 'paced' && paced(next)) {
+  if (own(beat) && beat.sensed === true && paced(next) && next.origin === 'paced') {
     found.push(interval('pacemakerEscape', 'R to stimulus', beat.timeS, toS));
   }
-  if (escaped(next)) found.push(interval('escape', 'escape after', beat.timeS, next.timeS));
-  else if (own(beat) && own(next)) found.push(interval('rr', 'RR', beat.timeS, next.timeS));
+  if (escaped(next)) {
+    // From the last depolarization: a stimulus without capture between them makes no difference.
+    if (next.rrMs === null) return found;
+    found.push(interval('escape', 'escape after', next.timeS - next.rrMs / msPerS, next.timeS));
+  } else if (own(beat) && own(next)) found.push(interval('rr', 'RR', beat.timeS, next.timeS));
   return found;
 }
 

@@ -5,8 +5,8 @@ import { moveItem, type DrawingItem } from '../drawing';
 import { layoutFooter } from '../footer';
 import { layoutHeader, provenanceLabel } from '../header';
 import type { PaperStrip } from '../paper-strip';
-import { textItem } from '../text';
-import { baselineMm } from '../text-block';
+import { textItem, textWidthMm } from '../text';
+import { baselineMm, textBlock } from '../text-block';
 import { textStyles } from '../text-styles';
 import { lineWeightsMm } from '../tokens';
 import type { FlowItem } from './flow';
@@ -75,19 +75,25 @@ export function pageHead(
   };
 }
 
-/** Heading of a strip on a page of several: its title, its bandwidth and what makes it again. */
+/** Between the title of a strip and what makes it again, where both stand on one line, mm. */
+const headingGapMm = 6;
+
+/** Heading of a strip on a page of several: its title, and its bandwidth and what makes it again beside or below it. */
 export function stripHeading(strip: PaperStrip, title: string, frame: PageFrame, gapMm: number): FlowItem {
-  const header = layoutHeader(
-    {
-      title,
-      subtitle: '',
-      settings: bandwidthLabel(strip.parameters.recorder),
-      provenance: provenanceLabel(strip),
-    },
-    { title: textStyles.cardTitle, subtitle: textStyles.subtitle },
-    frame.contentWidthMm,
-  );
-  return { heightMm: Math.ceil(header.heightMm + 0.5), gapMm, draw: () => ({ items: header.items }) };
+  const { cardTitle, provenance } = textStyles;
+  const widthMm = frame.contentWidthMm;
+  const origin = `${bandwidthLabel(strip.parameters.recorder)}, ${provenanceLabel(strip)}`;
+  const beside = textWidthMm(title, cardTitle) + headingGapMm + textWidthMm(origin, provenance) <= widthMm;
+  const left = textBlock([
+    { text: title, style: cardTitle, widthMm },
+    { text: beside ? '' : origin, style: provenance, widthMm },
+  ]);
+  const right = beside ? [textItem(origin, provenance, widthMm, baselineMm(0, cardTitle), 'end')] : [];
+  return {
+    heightMm: Math.ceil(left.heightMm + 0.5),
+    gapMm,
+    draw: () => ({ items: [...left.items, ...right] }),
+  };
 }
 
 const kindWords: Readonly<Record<SheetKind, string>> = {

@@ -1,15 +1,12 @@
 import type { PageSetup } from '../../parameters/page-setup';
-import { flowHeightMm, paginate, type FlowItem } from './flow';
+import { expectedNotes, flowHeightMm, paginate, type FlowItem } from './flow';
 import { pageFrame } from './page-frame';
 import { finishPage, pageHead, roomMm, stripHeading, type PageDraft, type PageWords } from './page-furniture';
 import type { SheetDocument, SheetKind, SheetMade, SheetPage, SheetSubject } from './sheet-document';
-import { planSpacings, planStrip, stripFlow, type StripPlan } from './strip-plan';
+import { longestDrawnNotes, planSpacings, planStrip, stripFlow, type StripPlan } from './strip-plan';
 
 /** Between the strips of a page, mm. */
 const stripGapMm = 6;
-/** Room kept for notes that only drawing brings. */
-const longestDrawnNotes =
-  'Rows stand closer than their traces are tall. Cut at the edge of the paper: I, II, III, −aVR, aVL, aVF, V1.';
 /** Over several pages rows are not brought closer than this share of what they ask for. */
 const leastCrowdedShare = 0.75;
 const goesOn = 'Continued on the next page.';
@@ -27,7 +24,10 @@ function groupName(subjects: readonly SheetSubject[]): string {
   const [first, last] = [names[0], names[names.length - 1]];
   if (first === last) return first;
   const numbers = [first, last].map((name) => /^Strip (\d+)$/u.exec(name)?.[1]);
-  return numbers[0] && numbers[1] ? `Strips ${numbers[0]} to ${numbers[1]}` : `${first} to ${last}`;
+  const between = subjects.length === 2 ? 'and' : 'to';
+  return numbers[0] && numbers[1]
+    ? `Strips ${numbers[0]} ${between} ${numbers[1]}`
+    : `${first} ${between} ${last}`;
 }
 
 function labelOf(name: string, kind: SheetKind): string {
@@ -41,7 +41,6 @@ function sharedPage(plans: readonly StripPlan[], words: PageWords): PageDraft | 
   const title = kind === 'answer' ? `${name}: answers` : name;
   const head = pageHead(words, kind, title, null);
   const notes = plans.flatMap((plan) => plan.notes.map((note) => `${plan.subject.questionTitle}: ${note}`));
-  const room = roomMm(words.frame, head, [...notes, longestDrawnNotes]);
   for (const trimmed of [false, true]) {
     const flow = plans.flatMap((plan) => {
       const { context, heading } = plan;
@@ -49,6 +48,7 @@ function sharedPage(plans: readonly StripPlan[], words: PageWords): PageDraft | 
       const top = stripHeading(context.strip, heading, words.frame, stripGapMm);
       return [top, ...named(stripFlow(plan, spacing), plan.subject.questionTitle)];
     });
+    const room = roomMm(words.frame, head, [...notes, ...expectedNotes(flow)]);
     if (flowHeightMm(flow) <= room) return { kind, label: labelOf(name, kind), title, head, flow, notes };
   }
   return null;
@@ -58,6 +58,7 @@ function sharedPage(plans: readonly StripPlan[], words: PageWords): PageDraft | 
 function named(flow: readonly FlowItem[], name: string): FlowItem[] {
   return flow.map((item) => ({
     ...item,
+    expects: item.expects?.map((note) => `${name}: ${note}`),
     draw: () => {
       const drawn = item.draw();
       return { ...drawn, notes: (drawn.notes ?? []).map((note) => `${name}: ${note}`) };
@@ -79,14 +80,12 @@ function ownPages(plan: StripPlan, words: PageWords): PageDraft[] {
   const head = pageHead(words, kind, heading, context.strip);
   const label = labelOf(subject.questionTitle, kind);
   const draft = { kind, title: heading, head };
-  const room = roomMm(words.frame, head, [...notes, longestDrawnNotes]);
-  const spacings = planSpacings(plan);
-  for (const spacing of spacings) {
+  for (const spacing of planSpacings(plan)) {
     const flow = stripFlow(plan, spacing);
+    const room = roomMm(words.frame, head, [...notes, ...expectedNotes(flow)]);
     if (flowHeightMm(flow) <= room) return [{ ...draft, label, flow, notes }];
   }
-  const longRoom = roomMm(words.frame, head, [...notes, longestDrawnNotes, goesOn]);
-  const pages = fewestPages(plan, longRoom);
+  const pages = fewestPages(plan, roomMm(words.frame, head, [...notes, ...longestDrawnNotes, goesOn]));
   return pages.map((flow, i) => ({
     ...draft,
     label: `${label}, page ${i + 1} of ${pages.length}`,

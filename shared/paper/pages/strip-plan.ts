@@ -1,4 +1,5 @@
 import { ladderOf } from '../../ladder/ladder';
+import { leadNames } from '../../parameters/sheet';
 import { untitled } from '../header';
 import { stripDurationS } from '../paper-strip';
 import type { FlowItem } from './flow';
@@ -22,7 +23,11 @@ import { answerLinesFlow, readingFlow } from './tail';
 
 /** Between the lines of a strip where a line has several rows or a ladder, mm. */
 const systemGapMm = 3;
+const longestCutNote = `Cut at the edge of the paper: ${leadNames.join(', ')}, −.`;
 const crowdedNote = 'Rows stand closer than their traces are tall.';
+
+/** Room to keep for notes where it is open what will be drawn. */
+export const longestDrawnNotes: readonly string[] = [crowdedNote, longestCutNote];
 
 /** A strip on one kind of sheet, laid out along the paper; where its rows stand is still open. */
 export interface StripPlan {
@@ -115,7 +120,8 @@ function partFlow(part: SystemPart, plan: StripPlan, gapMm: number): FlowItem {
     ];
     return { items, notes, system: { subject: plan.index, ...placed } };
   };
-  return { heightMm: part.heightMm, gapMm, draw };
+  const expects = [...(part.crowded ? [crowdedNote] : []), ...(part.cut ? [longestCutNote] : [])];
+  return { heightMm: part.heightMm, gapMm, expects, draw };
 }
 
 /** The systems of a plan at a spacing, rows broken where a page of `roomMm` cannot hold them, then what follows them. */

@@ -153,6 +153,8 @@ export interface SystemPart {
   heightMm: number;
   /** Whether rows stand closer than their ink asks for. */
   crowded: boolean;
+  /** Whether a trace reaches the edge of the paper. */
+  cut: boolean;
 }
 
 /** Distance from the row before; before the last there is also room for what is written there. */
@@ -183,6 +185,11 @@ export function partOf(system: System, spacing: Spacing, fromRow: number, toRow:
     ...{ system, fromRow, toRow, baselines, gridHeightMm },
     heightMm: gridHeightMm + (hasLast && system.ladder ? ladderBandMm : 0),
     crowded: system.gapsMm.slice(fromRow, toRow - 1).some((gapMm) => gapMm > spacing.pitchMm),
+    cut: profiles.some(
+      (profile, i) =>
+        profile.reachUpMm() >= baselines[i] - penStopMm ||
+        profile.reachDownMm() >= gridHeightMm - baselines[i] - penStopMm,
+    ),
   };
 }
 
