@@ -105,6 +105,7 @@ export function sheetPdf(document: SheetDocument, { madeAt }: { madeAt: Date }):
     info: {
       Title: document.title,
       Author: 'Paceloom',
+      Creator: 'Paceloom',
       Subject: `${syntheticCaution}. ${educationCaution}`,
       Keywords: 'synthetic, teaching strip, not a patient recording, ECG',
       CreationDate: madeAt,

@@ -30,6 +30,8 @@ export interface PageWords {
   setup: PageSetup;
   made: SheetMade;
   frame: PageFrame;
+  /** One strip and no question sheet, so that nothing has to be told apart by number. */
+  alone: boolean;
 }
 
 /** `25 mm/s 10 mm/mV`, with the bandwidth where it is one. */

@@ -151,7 +151,7 @@ function documentNotes(
       done.filter(({ page }) => page.kind === kind && page.systems.some((one) => one.subject === subject))
         .length;
     const most = Math.max(pages('plain'), pages('question'), pages('answer'));
-    return most > 1 ? [`${questionTitle}: goes on over ${most} pages.`] : [];
+    return most > 1 ? [`${questionTitle}: Goes on over ${most} pages.`] : [];
   });
   return [...new Set([...notes, ...long])];
 }
@@ -179,7 +179,8 @@ export function layoutSheetPages(
   made: SheetMade,
 ): SheetDocument {
   if (subjects.length === 0) throw new RangeError('A document of sheets needs at least one strip; it has 0');
-  const words: PageWords = { setup, made, frame: pageFrame(setup) };
+  const alone = subjects.length === 1 && setup.sheets !== 'both';
+  const words: PageWords = { setup, made, frame: pageFrame(setup), alone };
   const drafts = allDrafts(subjects, words);
   const done = finished(drafts, words);
   return {

@@ -44,10 +44,10 @@ export interface StripPlan {
   notes: string[];
 }
 
-function headingOf(kind: SheetKind, { title, questionTitle }: SheetSubject): string {
+function headingOf(kind: SheetKind, { title, questionTitle }: SheetSubject, alone: boolean): string {
   if (kind === 'question') return questionTitle;
   const words = title === '' ? untitled : title;
-  return kind === 'answer' ? `${questionTitle}: ${words}` : words;
+  return kind === 'answer' && !alone ? `${questionTitle}: ${words}` : words;
 }
 
 function tailOf(kind: SheetKind, subject: SheetSubject, { setup, frame }: PageWords): FlowItem[] {
@@ -88,7 +88,7 @@ export function planStrip(
   const { lines, notes } = planLines(rows, stripDurationS(subject.strip), frame.lineS);
   return {
     ...{ kind, subject, index, context, notes },
-    heading: headingOf(kind, subject),
+    heading: headingOf(kind, subject, words.alone),
     systems: laySystems(context, lines, kind === 'answer'),
     tail: tailOf(kind, subject, words),
   };
