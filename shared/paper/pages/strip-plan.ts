@@ -2,7 +2,7 @@ import { ladderOf } from '../../ladder/ladder';
 import { leadNames } from '../../parameters/sheet';
 import { untitled } from '../header';
 import { stripDurationS } from '../paper-strip';
-import type { FlowItem } from './flow';
+import { flowHeightMm, type FlowItem } from './flow';
 import { intervalsOf, type Interval } from './intervals';
 import type { PageWords } from './page-furniture';
 import { planLines } from './page-lines';
@@ -121,15 +121,23 @@ function partFlow(part: SystemPart, plan: StripPlan, gapMm: number): FlowItem {
     return { items, notes, system: { subject: plan.index, ...placed } };
   };
   const expects = [...(part.crowded ? [crowdedNote] : []), ...(part.cut ? [longestCutNote] : [])];
-  return { heightMm: part.heightMm, gapMm, expects, draw };
+  const respaced = (spacing: Spacing): FlowItem =>
+    partFlow(partOf(part.system, spacing, part.fromRow, part.toRow), plan, gapMm);
+  return { heightMm: part.heightMm, gapMm, expects, respaced, draw };
 }
 
 /** The systems of a plan at a spacing, rows broken where a page of `roomMm` cannot hold them, then what follows them. */
 export function stripFlow(plan: StripPlan, spacing: Spacing, roomMm = Infinity): FlowItem[] {
   const { systems, tail } = plan;
   const close = systems[0].rows.length === 1 && !systems[0].ladder;
-  const parts = systems.flatMap((system) => partsOf(system, spacing, roomMm));
-  return [...parts.map((part) => partFlow(part, plan, close ? 0 : systemGapMm)), ...tail];
+  const tailMm = tail.length > 0 ? flowHeightMm(tail) + tail[0].gapMm : 0;
+  // What follows the strip should find room under its last rows.
+  const lastRoomMm = tailMm < roomMm / 2 ? roomMm - tailMm : roomMm;
+  const parts = systems.flatMap((system, i) =>
+    partsOf(system, spacing, i === systems.length - 1 ? lastRoomMm : roomMm),
+  );
+  const rows = parts.map((part) => partFlow(part, plan, close ? 0 : systemGapMm));
+  return [...rows, ...tail.map((item, i) => ({ ...item, keep: i === 0 }))];
 }
 
 /** Spacings to try for a plan, roomiest first. */
