@@ -65,8 +65,10 @@ function laySystems(
 ): System[] {
   const { setup, strip } = context;
   const { reading, events = [] }: SheetSubject['strip'] = strip;
-  const stimuli: NamedStimulus[] = answer && setup.stimuliNamed ? namedStimuli(events) : [];
-  let intervals: Interval[] = answer && setup.intervals ? intervalsOf(reading?.beats ?? [], events) : [];
+  const { toS } = lines[lines.length - 1];
+  const shown = events.filter(({ timeS }) => timeS < toS);
+  const stimuli: NamedStimulus[] = answer && setup.stimuliNamed ? namedStimuli(shown) : [];
+  let intervals: Interval[] = answer && setup.intervals ? intervalsOf(reading?.beats ?? [], shown) : [];
   const ladder = answer && setup.ladder ? ladderOf(events) : null;
   return lines.map((line, i) => {
     const { system, kinds } = laySystem(context, line, i, { stimuli, intervals, ladder });
