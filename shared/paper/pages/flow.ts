@@ -1,6 +1,6 @@
 import type { DrawingItem } from '../drawing';
 import type { PlacedSystem } from './sheet-document';
-import type { Spacing } from './system';
+import type { Spacing } from './spacing';
 
 /** Something that stands on a page as a whole, whole millimetres high. */
 export interface FlowItem {

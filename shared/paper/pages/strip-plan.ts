@@ -8,17 +8,9 @@ import type { PageWords } from './page-furniture';
 import { planLines } from './page-lines';
 import { pageRows } from './page-rows';
 import type { SheetKind, SheetSubject } from './sheet-document';
+import { spacingsOf, type Spacing } from './spacing';
 import { namedStimuli, type NamedStimulus } from './stimulus-names';
-import {
-  drawPart,
-  laySystem,
-  partOf,
-  spacingsOf,
-  type Spacing,
-  type System,
-  type SystemContext,
-  type SystemPart,
-} from './system';
+import { drawPart, laySystem, partOf, type System, type SystemContext, type SystemPart } from './system';
 import { answerLinesFlow, readingFlow } from './tail';
 
 /** Between the lines of a strip where a line has several rows or a ladder, mm. */
@@ -144,5 +136,5 @@ export function stripFlow(plan: StripPlan, spacing: Spacing, roomMm = Infinity):
 
 /** Spacings to try for a plan, roomiest first. */
 export function planSpacings(plan: StripPlan): Spacing[] {
-  return spacingsOf(plan.systems);
+  return spacingsOf(Math.max(...plan.systems.map((system) => system.pitchMm)));
 }
