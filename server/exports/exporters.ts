@@ -12,6 +12,7 @@ import { layoutStripSheet } from '../../shared/paper/sheet';
 import type { StripParameters } from '../../shared/parameters/strip-parameters';
 import { encodeAecg } from './aecg/aecg';
 import { encodeDicom } from './dicom/dicom';
+import { encodePdf } from './strip-pdf';
 import { svgToPng } from './svg-to-png';
 
 /** Resolution of PNG files, dots per inch. */
@@ -36,7 +37,7 @@ function svg(recording: StripRecording): string {
 }
 
 /** Formats that hold pictures; one of more than five minutes would be metres long. */
-const pictures: readonly ExportFormat[] = ['svg', 'png'];
+const pictures: readonly ExportFormat[] = ['svg', 'png', 'pdf'];
 
 /** Throws `InvalidInputError` when a format cannot hold such a strip; asked before anything is rendered. */
 export function checkExport({ durationS }: StripParameters, formats: readonly ExportFormat[]): void {
@@ -60,6 +61,7 @@ export const exporters: Readonly<Record<ExportFormat, Exporter>> = {
   json: (recording) => oneFile('strip.json', 'application/json', [json(stripJson(recording))]),
   svg: (recording) => oneFile('strip.svg', 'image/svg+xml', [svg(recording)]),
   png: (recording) => oneFile('strip.png', 'image/png', [svgToPng(svg(recording), pngDpi)]),
+  pdf: encodePdf,
   edf: encodeEdf,
   wfdb: encodeWfdb,
   dicom: encodeDicom,

@@ -22,7 +22,12 @@ export type DrawingRole =
   | 'settings'
   | 'provenance'
   | 'caution'
-  | 'note';
+  | 'note'
+  | 'annotation'
+  | 'reading'
+  | 'answerLine'
+  | 'sheetKind'
+  | 'scaleBar';
 
 export interface PolylineItem {
   kind: 'polyline';

@@ -1,13 +1,11 @@
 import { ladderOf } from '../ladder/ladder';
-import type { LeadName } from '../parameters/sheet';
 import type { SheetParameters } from '../parameters/strip-parameters';
-import { calibrationMv, calibrationPulse, calibrationWidthMm } from './calibration';
-import { moveItem, type DrawingItem, type LineItem, type PolylineItem, type TextItem } from './drawing';
+import { calibrationPulse } from './calibration';
+import { moveItem, type DrawingItem } from './drawing';
 import { gridItems, type GridArea } from './grid';
 import { ladderHeightMm, ladderItems } from './ladder';
-import { leadLabels } from './lead-label';
 import { lineSpans, longestDrawnS, type TimeSpan } from './layout';
-import { largeBoxMm, mvToMm, sToMm } from './paper-scale';
+import { largeBoxMm } from './paper-scale';
 import { stripDurationS, type PaperStrip } from './paper-strip';
 import {
   paperGapMm,
@@ -17,10 +15,8 @@ import {
   type PlacedSegment,
   type RowSegment,
 } from './placed-segment';
-import { RowProfile } from './row-profile';
+import { layRow, leadChangeStroke, stoppedLeads, traceItems, type Row } from './row';
 import { rowSpacing } from './row-spacing';
-import { lineWeightsMm } from './tokens';
-import { sampleRange, tracePolylines, type TracePlacement } from './trace';
 
 /** The gridded paper of a strip with everything on it. */
 export interface Panel {
@@ -43,42 +39,7 @@ const lineGapMm = 10;
 /** Room for a ladder under a line of paper: whole large boxes. */
 const bandMm = Math.ceil(ladderHeightMm / largeBoxMm) * largeBoxMm;
 /** The pen stops this far from the edge of the paper, mm. */
-const penStopMm = 0.5;
-/** Half the height of the stroke at a lead change, mm, and its dashes. */
-const leadChangeHalfMm = 4;
-const leadChangeDashMm = [1, 0.75] as const;
-
-/** One row of one line of paper: what lies on it and how far its ink reaches. */
-interface Row {
-  line: number;
-  segments: RowSegment[];
-  profile: RowProfile;
-  /** Set relative to the row's 0 mV line. */
-  labels: TextItem[];
-}
-
-/** How far the traces and the calibration pulse of a row reach. */
-function inkProfile(
-  strip: PaperStrip,
-  sheet: SheetParameters,
-  segments: readonly RowSegment[],
-  widthMm: number,
-): RowProfile {
-  const { speedMmPerS, gainMmPerMv } = sheet;
-  const profile = new RowProfile(widthMm);
-  const pulseEndMm = paperGapMm + calibrationWidthMm(speedMmPerS);
-  profile.add(paperGapMm, pulseEndMm, mvToMm(calibrationMv, gainMmPerMv));
-  for (const segment of segments) {
-    const samples = strip.leads[segment.lead];
-    const [from, to] = sampleRange(segment, strip.sampleRateHz, samples.length);
-    for (let i = from; i < to; i++) {
-      const alongMm = sToMm(i / strip.sampleRateHz - segment.fromS, speedMmPerS);
-      const xMm = segment.xMm + alongMm;
-      profile.add(xMm, xMm, mvToMm(samples[i], gainMmPerMv));
-    }
-  }
-  return profile;
-}
+export const penStopMm = 0.5;
 
 /** Segments by row; they come in the order of lines and rows. */
 function segmentsByRow(segments: readonly RowSegment[]): RowSegment[][] {
@@ -88,61 +49,6 @@ function segmentsByRow(segments: readonly RowSegment[]): RowSegment[][] {
     rows[rows.length - 1].push(segment);
   }
   return rows;
-}
-
-function layRow(strip: PaperStrip, sheet: SheetParameters, segments: RowSegment[], widthMm: number): Row {
-  const profile = inkProfile(strip, sheet, segments, widthMm);
-  const labels = leadLabels(segments, profile, sheet.gainMmPerMv);
-  return { line: segments[0].line, segments, profile, labels };
-}
-
-function leadChangeStroke(segment: PlacedSegment): LineItem {
-  return {
-    kind: 'line',
-    role: 'leadChange',
-    x1Mm: segment.xMm,
-    y1Mm: segment.baselineMm - leadChangeHalfMm,
-    x2Mm: segment.xMm,
-    y2Mm: segment.baselineMm + leadChangeHalfMm,
-    colour: 'ink2',
-    weightMm: lineWeightsMm.leadChange,
-    dashMm: leadChangeDashMm,
-  };
-}
-
-function traceItems(
-  strip: PaperStrip,
-  sheet: SheetParameters,
-  segment: PlacedSegment,
-  heightMm: number,
-): PolylineItem[] {
-  const place: TracePlacement = {
-    sampleRateHz: strip.sampleRateHz,
-    speedMmPerS: sheet.speedMmPerS,
-    gainMmPerMv: sheet.gainMmPerMv,
-    xMm: segment.xMm,
-    baselineMm: segment.baselineMm,
-    topMm: penStopMm,
-    bottomMm: heightMm - penStopMm,
-  };
-  return tracePolylines(strip.leads[segment.lead], segment, place).map((pointsMm) => ({
-    kind: 'polyline',
-    role: 'trace',
-    pointsMm,
-    colour: 'ink',
-    weightMm: lineWeightsMm.trace,
-  }));
-}
-
-/** Leads whose trace ran along a pen stop; `traces` belong to `segments` one to one. */
-function stoppedLeads(
-  segments: readonly PlacedSegment[],
-  traces: readonly (readonly PolylineItem[])[],
-  heightMm: number,
-): LeadName[] {
-  const atStop = (mm: number, i: number) => i % 2 === 1 && (mm <= penStopMm || mm >= heightMm - penStopMm);
-  const stopped = segments.filter((_, i) => traces[i].some(({ pointsMm }) => pointsMm.some(atStop)));
-  return [...new Set(stopped.map((segment) => segment.lead))];
 }
 
 function panelNotes(
@@ -221,7 +127,9 @@ export function layoutPanel(strip: PaperStrip, sheet: SheetParameters, options: 
   const drawnS = Math.min(durationS, longestDrawnS);
   const along = segmentsAlongPaper(sheet, drawnS, options.lineS);
   const widthMm = paperWidthMm(along, options.leastWidthMm);
-  const rows = segmentsByRow(along).map((segments) => layRow(strip, sheet, segments, widthMm));
+  const rows = segmentsByRow(along).map((segments) =>
+    layRow(strip, sheet.speedMmPerS, segments, paperGapMm, widthMm),
+  );
   const { baselines, bandTops, heightMm } = rowPlaces(rows, sheet);
   const area = { xMm: 0, yMm: 0, widthMm, heightMm };
   const segments = rows.flatMap((row, i) =>
@@ -229,7 +137,8 @@ export function layoutPanel(strip: PaperStrip, sheet: SheetParameters, options: 
   );
   const pulse = (baselineMm: number) =>
     calibrationPulse(paperGapMm, baselineMm, sheet.speedMmPerS, sheet.gainMmPerMv);
-  const traces = segments.map((segment) => traceItems(strip, sheet, segment, heightMm));
+  const stops = { topMm: penStopMm, bottomMm: heightMm - penStopMm };
+  const traces = segments.map((segment) => traceItems(strip, sheet.speedMmPerS, segment, stops));
   const lines = lineSpans(sheet, drawnS, options.lineS);
   const items: DrawingItem[] = [
     ...gridItems(area, sheet.gridTint),
@@ -239,7 +148,7 @@ export function layoutPanel(strip: PaperStrip, sheet: SheetParameters, options: 
     ...traces.flat(),
     ...rows.flatMap((row, i) => row.labels.map((label) => moveItem(label, 0, baselines[i]))),
   ];
-  const stopped = stoppedLeads(segments, traces, heightMm);
+  const stopped = stoppedLeads(segments, traces, stops);
   return { area, segments, items, notes: panelNotes(durationS, drawnS, lines, stopped) };
 }
 

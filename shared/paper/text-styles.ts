@@ -32,4 +32,16 @@ export const textStyles = {
   caution: { role: 'caution', family: 'sans', weight: 500, size: typeSizes.caption, colour: 'ink' },
   education: { role: 'caution', family: 'sans', weight: 400, size: typeSizes.caption, colour: 'ink2' },
   note: { role: 'note', family: 'sans', weight: 400, size: typeSizes.caption, colour: 'ink2' },
+  stimulusName: {
+    role: 'annotation',
+    family: 'sans',
+    weight: 500,
+    size: typeSizes.caption,
+    colour: 'copperDark',
+  },
+  interval: { role: 'annotation', family: 'sans', weight: 500, size: typeSizes.caption, colour: 'ink' },
+  teachingPoint: { role: 'reading', family: 'sans', weight: 500, size: typeSizes.dense, colour: 'ink' },
+  reading: { role: 'reading', family: 'sans', weight: 400, size: typeSizes.dense, colour: 'ink' },
+  answerLine: { role: 'answerLine', family: 'sans', weight: 400, size: typeSizes.dense, colour: 'ink2' },
+  sheetKind: { role: 'sheetKind', family: 'sans', weight: 500, size: typeSizes.caption, colour: 'ink2' },
 } as const satisfies Record<string, TextStyle>;

@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { choiceField, flagField, numberField, section, textField } from './fields';
 import { sheetSchema } from './sheet';
+import type { SheetParameters } from './strip-parameters';
 
 const { layout, leads, speedMmPerS, gainMmPerMv, gridTint } = sheetSchema.unwrap().shape;
 
@@ -62,3 +63,9 @@ export const pageSetupSchema = section({
   }),
 });
 export type PageSetup = z.output<typeof pageSetupSchema>;
+
+/** The setup that prints a strip as its own sheet parameters say; everything else as by default. */
+export function pageSetupOf(sheet: SheetParameters): PageSetup {
+  const { layout, leads, speedMmPerS, gainMmPerMv, gridTint } = sheet;
+  return pageSetupSchema.parse({ layout, leads, speedMmPerS, gainMmPerMv, gridTint });
+}
