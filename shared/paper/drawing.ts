@@ -17,6 +17,7 @@ export type DrawingRole =
   | 'leadName'
   | 'lineTime'
   | 'ladder'
+  | 'marker'
   | 'title'
   | 'caption'
   | 'settings'

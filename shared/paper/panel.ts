@@ -5,6 +5,7 @@ import { moveItem, type DrawingItem } from './drawing';
 import { gridItems, type GridArea } from './grid';
 import { ladderHeightMm, ladderItems } from './ladder';
 import { lineSpans, longestDrawnS, type TimeSpan } from './layout';
+import { markerLaneItems, markerLaneMm } from './marker-lane';
 import { largeBoxMm } from './paper-scale';
 import { stripDurationS, type PaperStrip } from './paper-strip';
 import {
@@ -37,7 +38,7 @@ export interface PanelOptions {
 /** Extra paper between the lines of a long strip, mm; only where a line has several rows. */
 const lineGapMm = 10;
 /** Room for a ladder under a line of paper: whole large boxes. */
-const bandMm = Math.ceil(ladderHeightMm / largeBoxMm) * largeBoxMm;
+const ladderBandMm = Math.ceil(ladderHeightMm / largeBoxMm) * largeBoxMm;
 /** The pen stops this far from the edge of the paper, mm. */
 export const penStopMm = 0.5;
 
@@ -73,12 +74,12 @@ interface RowPlaces {
   heightMm: number;
 }
 
-/** Without a ladder all rows of all lines stand evenly; with one each line is a block with its band below. */
-function rowPlaces(rows: readonly Row[], sheet: SheetParameters): RowPlaces {
+/** Without a band all rows of all lines stand evenly; with one each line is a block with its band below. */
+function rowPlaces(rows: readonly Row[], sheet: SheetParameters, bandMm: number): RowPlaces {
   const rowsPerLine = rows.filter((row) => row.line === 0).length;
   const profiles = rows.map((row) => row.profile);
   const { topMm, pitchMm, bottomMm } = rowSpacing(profiles, rowsPerLine, sheet.gainMmPerMv);
-  if (!sheet.ladder) {
+  if (bandMm === 0) {
     const gapMm = rowsPerLine > 1 ? lineGapMm : 0;
     const baselines = rows.map((row, i) => topMm + i * pitchMm + row.line * gapMm);
     return { baselines, bandTops: [], heightMm: baselines[baselines.length - 1] + bottomMm };
@@ -93,27 +94,39 @@ function rowPlaces(rows: readonly Row[], sheet: SheetParameters): RowPlaces {
   };
 }
 
-/** The ladder under each line of paper, on a band without a grid. */
+/** Where the recorder found stimuli, when the sheet shows it. */
+function shownMarkers(strip: PaperStrip, sheet: SheetParameters): readonly number[] | null {
+  return sheet.stimulusMarkers ? (strip.stimulusMarkersS ?? null) : null;
+}
+
+/** Markers and ladder under each line of paper, on a band without a grid. */
 function bandItems(
   strip: PaperStrip,
   sheet: SheetParameters,
   lines: readonly TimeSpan[],
   bandTops: readonly number[],
-  widthMm: number,
+  { widthMm, bandMm }: { widthMm: number; bandMm: number },
 ): DrawingItem[] {
-  if (bandTops.length === 0) return [];
-  const marks = ladderOf(strip.events ?? []);
-  return bandTops.flatMap((topMm, line): DrawingItem[] => [
-    { kind: 'rect', role: 'page', xMm: 0, yMm: topMm, widthMm, heightMm: bandMm, fill: 'page' },
-    ...ladderItems(marks, [], {
-      ...lines[line],
-      xMm: traceInsetMm(sheet.speedMmPerS),
-      topMm: topMm + (bandMm - ladderHeightMm) / 2,
-      mmPerS: sheet.speedMmPerS,
-      names: ['Atria', 'AV', 'Ventricles'],
-      namesXMm: 0,
-    }),
-  ]);
+  const markers = shownMarkers(strip, sheet);
+  const markersMm = markers ? markerLaneMm : 0;
+  const marks = sheet.ladder ? ladderOf(strip.events ?? []) : null;
+  return bandTops.flatMap((topMm, line): DrawingItem[] => {
+    const place = { ...lines[line], xMm: traceInsetMm(sheet.speedMmPerS), namesXMm: 0 };
+    const ladderTopMm = topMm + markersMm + (ladderBandMm - ladderHeightMm) / 2;
+    const { speedMmPerS } = sheet;
+    return [
+      { kind: 'rect', role: 'page', xMm: 0, yMm: topMm, widthMm, heightMm: bandMm, fill: 'page' },
+      ...(markers ? markerLaneItems(markers, { ...place, topMm, speedMmPerS }) : []),
+      ...(marks
+        ? ladderItems(marks, [], {
+            ...place,
+            topMm: ladderTopMm,
+            mmPerS: speedMmPerS,
+            names: ['Atria', 'AV', 'Ventricles'],
+          })
+        : []),
+    ];
+  });
 }
 
 /**
@@ -130,7 +143,8 @@ export function layoutPanel(strip: PaperStrip, sheet: SheetParameters, options: 
   const rows = segmentsByRow(along).map((segments) =>
     layRow(strip, sheet.speedMmPerS, segments, paperGapMm, widthMm),
   );
-  const { baselines, bandTops, heightMm } = rowPlaces(rows, sheet);
+  const bandMm = (shownMarkers(strip, sheet) ? markerLaneMm : 0) + (sheet.ladder ? ladderBandMm : 0);
+  const { baselines, bandTops, heightMm } = rowPlaces(rows, sheet, bandMm);
   const area = { xMm: 0, yMm: 0, widthMm, heightMm };
   const segments = rows.flatMap((row, i) =>
     row.segments.map((segment) => ({ ...segment, baselineMm: baselines[i] })),
@@ -142,7 +156,7 @@ export function layoutPanel(strip: PaperStrip, sheet: SheetParameters, options: 
   const lines = lineSpans(sheet, drawnS, options.lineS);
   const items: DrawingItem[] = [
     ...gridItems(area, sheet.gridTint),
-    ...bandItems(strip, sheet, lines, bandTops, widthMm),
+    ...bandItems(strip, sheet, lines, bandTops, { widthMm, bandMm }),
     ...segments.filter((segment) => segment.column > 0).map(leadChangeStroke),
     ...baselines.map(pulse),
     ...traces.flat(),

@@ -29,6 +29,7 @@ export const textStyles = {
   ladderName: { role: 'ladder', family: 'sans', weight: 400, size: typeSizes.caption, colour: 'ink2' },
   ladderLetter: { role: 'ladder', family: 'sans', weight: 500, size: typeSizes.caption, colour: 'ink' },
   ladderWindow: { role: 'ladder', family: 'sans', weight: 400, size: typeSizes.caption, colour: 'ink2' },
+  markerName: { role: 'marker', family: 'sans', weight: 400, size: typeSizes.caption, colour: 'ink2' },
   caution: { role: 'caution', family: 'sans', weight: 500, size: typeSizes.caption, colour: 'ink' },
   education: { role: 'caution', family: 'sans', weight: 400, size: typeSizes.caption, colour: 'ink2' },
   note: { role: 'note', family: 'sans', weight: 400, size: typeSizes.caption, colour: 'ink2' },

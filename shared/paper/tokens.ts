@@ -50,6 +50,7 @@ export const lineWeightsMm = {
   leadChange: 0.3,
   ladderConduction: 0.4,
   ladderStimulus: 0.5,
+  marker: 0.4,
   ladderSign: 0.3,
   ladderLane: 0.15,
   ladderHatch: 0.12,

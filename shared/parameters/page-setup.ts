@@ -36,6 +36,10 @@ export const pageSetupSchema = section({
     { label: 'Sheets', help: 'A question sheet hides what the answer sheet tells.' },
   ),
   cohort: textField({ label: 'Cohort', maxLength: 80, help: 'Printed under the title; empty prints none.' }),
+  stimulusMarkers: flagField(false, {
+    label: 'Stimulus markers',
+    help: 'Below the grid, where the recorder found a stimulus; of strips whose stimulus marker is on.',
+  }),
   nameLine: flagField(true, {
     label: 'Line for a name',
     help: 'A blank line for the learner’s name and the date.',

@@ -4,6 +4,7 @@ import { calibrationPulse } from '../calibration';
 import { moveItem, type DrawingItem } from '../drawing';
 import { gridItems } from '../grid';
 import { ladderHeightMm, ladderItems } from '../ladder';
+import { markerLaneItems, markerLaneMm } from '../marker-lane';
 import { penStopMm } from '../panel';
 import { largeBoxMm } from '../paper-scale';
 import type { PaperStrip } from '../paper-strip';
@@ -49,6 +50,8 @@ export interface System {
   pitchMm: number;
   gainMmPerMv: LeadCell['gainMmPerMv'];
   ladder: readonly LadderMark[] | null;
+  /** Where the recorder found stimuli, s; null where the sheet does not show it. */
+  markersS: readonly number[] | null;
 }
 
 /** What all systems of a strip share. */
@@ -120,6 +123,7 @@ export function laySystem(
     gapsMm: profiles.slice(1).map((next, i) => rowGapMm(profiles[i], next, gainMmPerMv)),
     pitchMm: rowSpacing(profiles, rows.length, gainMmPerMv).pitchMm,
     ladder: marks.ladder,
+    markersS: setup.stimulusMarkers ? (strip.stimulusMarkersS ?? null) : null,
   };
   return { system, kinds };
 }
@@ -147,6 +151,11 @@ function gapBeforeMm(system: System, spacing: Spacing, row: number): number {
   return Math.min(ownMm, spacing.pitchMm) + writtenMm;
 }
 
+/** Room for the markers of a system, mm. */
+function markersMm({ markersS }: System): number {
+  return markersS ? markerLaneMm : 0;
+}
+
 /** Spaces the rows [fromRow, toRow) of a system. */
 export function partOf(system: System, spacing: Spacing, fromRow: number, toRow: number): SystemPart {
   const rows = system.rows.slice(fromRow, toRow);
@@ -166,7 +175,7 @@ export function partOf(system: System, spacing: Spacing, fromRow: number, toRow:
   const gridHeightMm = baselines[baselines.length - 1] + bottomMm;
   return {
     ...{ system, fromRow, toRow, baselines, gridHeightMm },
-    heightMm: gridHeightMm + (hasLast && system.ladder ? ladderBandMm : 0),
+    heightMm: gridHeightMm + (hasLast ? markersMm(system) + (system.ladder ? ladderBandMm : 0) : 0),
     crowded: system.gapsMm.slice(fromRow, toRow - 1).some((gapMm) => gapMm > spacing.pitchMm),
     cut: profiles.some(
       (profile, i) =>
@@ -193,11 +202,18 @@ function ladderBand(part: SystemPart, context: SystemContext): DrawingItem[] {
   return ladderItems(ladder, [], {
     ...line,
     xMm: traceXMm,
-    topMm: part.gridHeightMm + (ladderBandMm - ladderHeightMm) / 2,
+    topMm: part.gridHeightMm + markersMm(part.system) + (ladderBandMm - ladderHeightMm) / 2,
     mmPerS: context.setup.speedMmPerS,
     names: traceXMm >= laneNamesMm ? ['Atria', 'AV', 'Ventricles'] : ['A', 'AV', 'V'],
     namesXMm: 0,
   });
+}
+
+function markerLane({ system, toRow, gridHeightMm }: SystemPart, context: SystemContext): DrawingItem[] {
+  const { line, markersS, rows } = system;
+  if (!markersS || toRow < rows.length) return [];
+  const place = { xMm: context.frame.traceXMm, topMm: gridHeightMm, namesXMm: 0 };
+  return markerLaneItems(markersS, { ...line, ...place, speedMmPerS: context.setup.speedMmPerS });
 }
 
 /** Everything on and under the grid of a part, from its upper left corner, and the leads whose pen was stopped. */
@@ -224,6 +240,7 @@ export function drawPart(
       ...traces.flat(),
       ...rows.flatMap((row, i) => row.labels.map((label) => moveItem(label, 0, part.baselines[i]))),
       ...annotations.map((item) => moveItem(item, 0, lastMm)),
+      ...markerLane(part, context),
       ...ladderBand(part, context),
     ],
     stopped: stoppedLeads(segments, traces, stopsOf(part)),

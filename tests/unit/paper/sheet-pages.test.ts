@@ -61,6 +61,7 @@ const arbitrarySetup: fc.Arbitrary<PageSetup> = fc
     stimuliNamed: fc.boolean(),
     intervals: fc.boolean(),
     ladder: fc.boolean(),
+    stimulusMarkers: fc.boolean(),
     reading: fc.boolean(),
   })
   .map((input) => buildSetup(input));
