@@ -70,6 +70,6 @@ export type PageSetup = z.output<typeof pageSetupSchema>;
 
 /** The setup that prints a strip as its own sheet parameters say; everything else as by default. */
 export function pageSetupOf(sheet: SheetParameters): PageSetup {
-  const { layout, leads, speedMmPerS, gainMmPerMv, gridTint } = sheet;
-  return pageSetupSchema.parse({ layout, leads, speedMmPerS, gainMmPerMv, gridTint });
+  const { layout, leads, speedMmPerS, gainMmPerMv, gridTint, stimulusMarkers } = sheet;
+  return pageSetupSchema.parse({ layout, leads, speedMmPerS, gainMmPerMv, gridTint, stimulusMarkers });
 }

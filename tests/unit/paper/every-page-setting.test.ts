@@ -10,6 +10,7 @@ const strip = renderStrip(
   buildStrip({
     patient: { atrialRhythm: 'arrest', avConduction: 'complete' },
     pacing: { source: 'implanted', mode: 'DDD' },
+    recorder: { stimulusMarker: true },
   }),
 );
 
@@ -56,6 +57,12 @@ const rows: Record<keyof PageSetup, SettingRow> = {
     measure: (document) => labels(first(document)).slice(0, 4),
     before: ['II'],
     after: ['I', 'V1', 'II', 'V2'],
+  },
+  stimulusMarkers: {
+    change: { stimulusMarkers: true },
+    measure: (document) => lines(first(document), 'marker').length,
+    before: 0,
+    after: strip.stimulusMarkersS?.length,
   },
   leads: {
     change: { leads: ['aVF'] },
