@@ -75,6 +75,20 @@ function fewestPages(plan: StripPlan, room: number): FlowItem[][] {
   return fewest.map((page) => roomiest(page, planSpacings(plan), room));
 }
 
+/**
+ * An answer whose rows fit on one page and whose words do not: rows together, because leads are compared, and words
+ * overleaf. Null where the rows do not fit either.
+ */
+function wordsOverleaf(plan: StripPlan, words: PageWords, head: PageDraft['head']): FlowItem[][] | null {
+  if (plan.kind !== 'answer' || plan.tail.length === 0) return null;
+  for (const spacing of planSpacings(plan)) {
+    const rows = stripFlow({ ...plan, tail: [] }, spacing);
+    const room = roomMm(words.frame, head, [...plan.notes, ...expectedNotes(rows), goesOn]);
+    if (flowHeightMm(rows) <= room) return [rows, ...paginate(plan.tail, roomMm(words.frame, head, []))];
+  }
+  return null;
+}
+
 /** One strip on one page where any spacing allows it, else over as many pages as it takes. */
 function ownPages(plan: StripPlan, words: PageWords): PageDraft[] {
   const { kind, heading, context, subject, notes } = plan;
@@ -86,7 +100,9 @@ function ownPages(plan: StripPlan, words: PageWords): PageDraft[] {
     const room = roomMm(words.frame, head, [...notes, ...expectedNotes(flow)]);
     if (flowHeightMm(flow) <= room) return [{ ...draft, label, flow, notes }];
   }
-  const pages = fewestPages(plan, roomMm(words.frame, head, [...notes, ...longestDrawnNotes, goesOn]));
+  const fewest = fewestPages(plan, roomMm(words.frame, head, [...notes, ...longestDrawnNotes, goesOn]));
+  const overleaf = wordsOverleaf(plan, words, head);
+  const pages = overleaf && overleaf.length <= fewest.length ? overleaf : fewest;
   return pages.map((flow, i) => ({
     ...draft,
     label: `${label}, page ${i + 1} of ${pages.length}`,

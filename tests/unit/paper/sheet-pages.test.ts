@@ -218,3 +218,14 @@ describe('question and answer', () => {
     }
   });
 });
+
+describe('an answer that is too long for its page', () => {
+  it.each(['6x2', '3x4+3'] as const)('keeps the leads of %s together and turns the words over', (layout) => {
+    const { pages } = sheetsOf([subjectOf(strip)], { layout, sheets: 'both' });
+    expect(pages.map(({ kind }) => kind)).toEqual(['question', 'answer', 'answer']);
+    expect(pages.map(({ systems }) => systems.length)).toEqual([1, 1, 0]);
+    const [question, answer] = pages.map(({ systems }) => systems[0]?.segments.map(({ label }) => label));
+    expect(answer).toEqual(question);
+    expect(wordsOf(pages[2])).toContain('stimulated in sequence');
+  });
+});
