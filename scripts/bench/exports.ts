@@ -5,7 +5,7 @@ import { longestDrawnS } from '../../shared/paper/layout';
 
 /** Length of the strips, s; pictures are made of the longest strip that is drawn. */
 const benchedS = 600;
-const pictures: readonly ExportFormat[] = ['svg', 'png'];
+const pictures: readonly ExportFormat[] = ['svg', 'png', 'pdf'];
 
 export type BenchedExport = ExportFormat | 'bundle';
 

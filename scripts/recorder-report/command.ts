@@ -1,8 +1,8 @@
-import { parseArgs, type ParseArgsConfig } from 'node:util';
-import { InvalidInputError, type Problem } from '../../shared/errors';
+import type { ParseArgsConfig } from 'node:util';
 import { bandwidthNames } from '../../shared/parameters/recorder';
 import { parseStripParameters } from '../../shared/parameters/parse';
 import type { BenchSetting } from '../../shared/recorder-bench/bench-setting';
+import { readArguments, refuse } from '../arguments';
 
 const formats = ['text', 'json', 'csv'] as const;
 export type ReportFormat = (typeof formats)[number];
@@ -36,23 +36,6 @@ npm run --silent recorder-report -- [--bandwidth NAME|LOW-HIGH …] [--notch 0|5
 Exit code 0; 1 when a setting fails a requirement that it claims; 2 with one line per problem on standard error.
 `;
 
-function refuse(path: string, value: string, allowed: string): never {
-  const problem: Problem = { path, value: JSON.stringify(value), allowed };
-  throw new InvalidInputError([problem]);
-}
-
-function parse(args: string[]) {
-  try {
-    return parseArgs({ args, options, strict: true, allowPositionals: false }).values;
-  } catch (error) {
-    return refuse(
-      'command line',
-      (error as Error).message,
-      '--bandwidth, --notch, --rate, --resolution, --format, --help',
-    );
-  }
-}
-
 function number(path: string, text: string, allowed: string): number {
   const value = Number(text);
   if (text.trim() === '' || !Number.isFinite(value)) refuse(path, text, allowed);
@@ -74,7 +57,7 @@ function isFormat(text: string): text is ReportFormat {
 
 /** Reads the arguments after `--`; `help` instead of a command when asked. Throws `InvalidInputError`. */
 export function readCommand(args: string[]): ReportCommand | 'help' {
-  const values = parse(args);
+  const values = readArguments(args, options);
   if (values.help) return 'help';
   if (!isFormat(values.format)) return refuse('--format', values.format, formats.join(', '));
   const wanted = values.bandwidth.length > 0 ? values.bandwidth : [...bandwidthNames];

@@ -1,6 +1,6 @@
-import { parseArgs, type ParseArgsConfig } from 'node:util';
-import { InvalidInputError, type Problem } from '../../shared/errors';
+import type { ParseArgsConfig } from 'node:util';
 import { exportFormats, type ExportFormat } from '../../shared/formats/export-format';
+import { readArguments, refuse } from '../arguments';
 
 export interface StripCommand {
   /** A file, `-` for standard input, or a preset of the gallery. */
@@ -41,23 +41,6 @@ Exit code 0, or 2 with one line per problem (path, value, allowed range) on stan
 Synthetic teaching strips, not patient recordings.
 `;
 
-function refuse(path: string, value: unknown, allowed: string): never {
-  const problem: Problem = { path, value: value === undefined ? 'missing' : JSON.stringify(value), allowed };
-  throw new InvalidInputError([problem]);
-}
-
-function parse(args: string[]) {
-  try {
-    return parseArgs({ args, options, strict: true, allowPositionals: false }).values;
-  } catch (error) {
-    return refuse(
-      'command line',
-      (error as Error).message,
-      '--in, --preset, --out, --formats, --bundle, --set, --help',
-    );
-  }
-}
-
 function readFormats(list: string): ExportFormat[] {
   const names = list.split(',').map((name) => name.trim());
   const unknown = names.filter((name) => !exportFormats.some((format) => format === name));
@@ -76,7 +59,7 @@ function readSource(file: string | undefined, preset: string | undefined): Strip
 
 /** Reads the arguments after `--`; `help` instead of a command when asked. Throws `InvalidInputError`. */
 export function readCommand(args: string[]): StripCommand | 'help' {
-  const values = parse(args);
+  const values = readArguments(args, options);
   if (values.help) return 'help';
   return {
     source: readSource(values.in, values.preset),

@@ -4,7 +4,7 @@ import { longestDrawnS } from '../../shared/paper/layout';
 import type { StripParameters } from '../../shared/parameters/strip-parameters';
 
 /** Formats that hold pictures; one of more than five minutes would be metres long. */
-const pictures: readonly ExportFormat[] = ['svg', 'png'];
+const pictures: readonly ExportFormat[] = ['svg', 'png', 'pdf'];
 
 /** Throws `InvalidInputError` when a format cannot hold such a strip; asked before anything is rendered. */
 export function checkExport({ durationS }: StripParameters, formats: readonly ExportFormat[]): void {

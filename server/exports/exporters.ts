@@ -9,6 +9,7 @@ import { encodeWfdb } from '../../shared/formats/wfdb/wfdb';
 import { layoutStripSheet } from '../../shared/paper/sheet';
 import { encodeAecg } from './aecg/aecg';
 import { encodeDicom } from './dicom/dicom';
+import { encodePdf } from './strip-pdf';
 import { svgToPng } from './svg-to-png';
 
 /** Resolution of PNG files, dots per inch. */
@@ -50,6 +51,7 @@ export const exporters: Readonly<Record<ExportFormat, Exporter>> = {
   json: (recording) => oneFile('strip.json', 'application/json', [json(stripJson(recording))]),
   svg: (recording) => oneFile('strip.svg', 'image/svg+xml', [svg(recording)]),
   png: (recording) => oneFile('strip.png', 'image/png', [svgToPng(svg(recording), pngDpi)]),
+  pdf: encodePdf,
   edf: encodeEdf,
   wfdb: encodeWfdb,
   dicom: encodeDicom,

@@ -1,5 +1,6 @@
 import { readFileSync } from 'node:fs';
 import { createRequire } from 'node:module';
+import type PDFDocument from 'pdfkit';
 
 const require = createRequire(import.meta.url);
 
@@ -11,17 +12,17 @@ export const fontFiles = {
   mono400: require.resolve('@expo-google-fonts/ibm-plex-mono/400Regular/IBMPlexMono_400Regular.ttf'),
   mono500: require.resolve('@expo-google-fonts/ibm-plex-mono/500Medium/IBMPlexMono_500Medium.ttf'),
 } as const;
-
 export type FontCut = keyof typeof fontFiles;
-export const fontCuts = Object.keys(fontFiles) as FontCut[];
-
-/** More than the header of a glyph (10 bytes). */
-const paddingBytes = 32;
 
 /**
- * A font file as pdfkit can read it. In the mono cuts the space is the last glyph and empty, so its place is the end of
- * the file, and the font library reads a glyph's header there all the same: zeros behind the file give it an empty one.
+ * Bytes of nothing after a font file. The blank of the fixed-pitch cuts is an empty outline at the very end of the file, and
+ * PDFKit's font reader looks for the ten bytes of an outline's header there, which would run past the end.
  */
-export function fontForPdf(cut: FontCut): Buffer {
-  return Buffer.concat([readFileSync(fontFiles[cut]), Buffer.alloc(paddingBytes)]);
+const paddingBytes = 16;
+
+/** Makes the cuts known to a PDF by their names here. */
+export function registerFonts(doc: InstanceType<typeof PDFDocument>): void {
+  for (const [name, file] of Object.entries(fontFiles)) {
+    doc.registerFont(name, Buffer.concat([readFileSync(file), Buffer.alloc(paddingBytes)]));
+  }
 }

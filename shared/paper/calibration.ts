@@ -15,21 +15,29 @@ export function calibrationWidthMm(speedMmPerS: PaperSpeedMmPerS): number {
   return msToMm(calibrationMs, speedMmPerS);
 }
 
-/** The pulse with its rising edge at `xMm`, standing on the row's 0 mV line at `baselineMm`. */
+/**
+ * The pulse with its rising edge at `xMm`, standing on the row's 0 mV line at `baselineMm`. A row drawn at two gains has
+ * both: 1 mV at the first, then 1 mV at the second, half the width each.
+ */
 export function calibrationPulse(
   xMm: number,
   baselineMm: number,
   speedMmPerS: PaperSpeedMmPerS,
-  gainMmPerMv: PaperGainMmPerMv,
+  ...gainsMmPerMv: PaperGainMmPerMv[]
 ): PolylineItem {
+  const stepMm = calibrationWidthMm(speedMmPerS) / gainsMmPerMv.length;
   const right = xMm + calibrationWidthMm(speedMmPerS);
-  const top = baselineMm - mvToMm(calibrationMv, gainMmPerMv);
+  const steps = gainsMmPerMv.flatMap((gainMmPerMv, i) => {
+    const top = baselineMm - mvToMm(calibrationMv, gainMmPerMv);
+    return [xMm + i * stepMm, top, xMm + (i + 1) * stepMm, top];
+  });
   return {
     kind: 'polyline',
     role: 'calibration',
     pointsMm: Float64Array.of(
-      ...[xMm - calibrationFootMm, baselineMm, xMm, baselineMm, xMm, top],
-      ...[right, top, right, baselineMm, right + calibrationFootMm, baselineMm],
+      ...[xMm - calibrationFootMm, baselineMm, xMm, baselineMm],
+      ...steps,
+      ...[right, baselineMm, right + calibrationFootMm, baselineMm],
     ),
     colour: 'ink',
     weightMm: lineWeightsMm.calibration,

@@ -17,12 +17,18 @@ export type DrawingRole =
   | 'leadName'
   | 'lineTime'
   | 'ladder'
+  | 'marker'
   | 'title'
   | 'caption'
   | 'settings'
   | 'provenance'
   | 'caution'
-  | 'note';
+  | 'note'
+  | 'annotation'
+  | 'reading'
+  | 'answerLine'
+  | 'sheetKind'
+  | 'scaleBar';
 
 export interface PolylineItem {
   kind: 'polyline';

@@ -46,8 +46,8 @@ interface Label {
 
 function labelOf(segment: RowSegment, footMm: number): Label {
   const goesOn = segment.line > 0 && segment.row === 0 && segment.column === 0;
-  const timeText = goesOn ? `from ${segment.fromS} s` : '';
-  const nameWidthMm = textWidthMm(segment.lead, textStyles.leadName);
+  const timeText = goesOn ? `from ${Number(segment.fromS.toFixed(2))} s` : '';
+  const nameWidthMm = textWidthMm(segment.label, textStyles.leadName);
   const timeWidthMm = goesOn ? lineTimeGapMm + textWidthMm(timeText, textStyles.lineTime) : 0;
   const widthMm = nameWidthMm + timeWidthMm;
   return { segment, timeText, nameWidthMm, widthMm, xMm: segment.xMm + insetMm, footMm };
@@ -74,9 +74,20 @@ function clearOfInk(label: Label, profile: RowProfile, gainMmPerMv: PaperGainMmP
 }
 
 function labelTexts({ segment, timeText, nameWidthMm, xMm }: Label, footMm: number): TextItem[] {
-  const name = textItem(segment.lead, textStyles.leadName, xMm, -footMm);
+  const name = textItem(segment.label, textStyles.leadName, xMm, -footMm);
   if (timeText === '') return [name];
   return [name, textItem(timeText, textStyles.lineTime, xMm + nameWidthMm + lineTimeGapMm, -footMm)];
+}
+
+/** All at one level, but a label that would run into the one before it steps up over it. */
+function steppedFeet(labels: readonly Label[], levelMm: number): number[] {
+  const feet: number[] = [];
+  labels.forEach(({ xMm }, i) => {
+    const before = labels[i - 1];
+    const free = !before || before.xMm + before.widthMm + clearanceMm <= xMm;
+    feet.push(free ? levelMm : feet[i - 1] + capHeightMm + clearanceMm);
+  });
+  return feet;
 }
 
 /**
@@ -84,15 +95,12 @@ function labelTexts({ segment, timeText, nameWidthMm, xMm }: Label, footMm: numb
  * the first row of a continued line the second at which it goes on. The labels are added to the row's profile,
  * so that the row above keeps clear of them. y is relative to the row's 0 mV line.
  */
-export function leadLabels(
-  segments: readonly RowSegment[],
-  profile: RowProfile,
-  gainMmPerMv: PaperGainMmPerMv,
-): TextItem[] {
+export function leadLabels(segments: readonly RowSegment[], profile: RowProfile): TextItem[] {
   const labels = segments.map((segment) =>
-    clearOfInk(labelOf(segment, usualFootMm(gainMmPerMv)), profile, gainMmPerMv),
+    clearOfInk(labelOf(segment, usualFootMm(segment.gainMmPerMv)), profile, segment.gainMmPerMv),
   );
-  const footMm = Math.max(...labels.map((label) => label.footMm));
-  for (const { xMm, widthMm } of labels) profile.add(xMm, xMm + widthMm, footMm + capHeightMm);
-  return labels.flatMap((label) => labelTexts(label, footMm));
+  const levelMm = Math.max(...labels.map((label) => label.footMm));
+  const feet = steppedFeet(labels, levelMm);
+  labels.forEach(({ xMm, widthMm }, i) => profile.add(xMm, xMm + widthMm, feet[i] + capHeightMm));
+  return labels.flatMap((label, i) => labelTexts(label, feet[i]));
 }

@@ -1,13 +1,12 @@
 import { ladderOf } from '../ladder/ladder';
-import type { LeadName } from '../parameters/sheet';
 import type { SheetParameters } from '../parameters/strip-parameters';
-import { calibrationMv, calibrationPulse, calibrationWidthMm } from './calibration';
-import { moveItem, type DrawingItem, type LineItem, type PolylineItem, type TextItem } from './drawing';
+import { calibrationPulse } from './calibration';
+import { moveItem, type DrawingItem } from './drawing';
 import { gridItems, type GridArea } from './grid';
 import { ladderHeightMm, ladderItems } from './ladder';
-import { leadLabels } from './lead-label';
 import { lineSpans, longestDrawnS, type TimeSpan } from './layout';
-import { largeBoxMm, mvToMm, sToMm } from './paper-scale';
+import { markerLaneItems, markerLaneMm } from './marker-lane';
+import { largeBoxMm } from './paper-scale';
 import { stripDurationS, type PaperStrip } from './paper-strip';
 import {
   paperGapMm,
@@ -17,10 +16,8 @@ import {
   type PlacedSegment,
   type RowSegment,
 } from './placed-segment';
-import { RowProfile } from './row-profile';
+import { layRow, leadChangeStroke, stoppedLeads, traceItems, type Row } from './row';
 import { rowSpacing } from './row-spacing';
-import { lineWeightsMm } from './tokens';
-import { sampleRange, tracePolylines, type TracePlacement } from './trace';
 
 /** The gridded paper of a strip with everything on it. */
 export interface Panel {
@@ -41,44 +38,9 @@ export interface PanelOptions {
 /** Extra paper between the lines of a long strip, mm; only where a line has several rows. */
 const lineGapMm = 10;
 /** Room for a ladder under a line of paper: whole large boxes. */
-const bandMm = Math.ceil(ladderHeightMm / largeBoxMm) * largeBoxMm;
+const ladderBandMm = Math.ceil(ladderHeightMm / largeBoxMm) * largeBoxMm;
 /** The pen stops this far from the edge of the paper, mm. */
-const penStopMm = 0.5;
-/** Half the height of the stroke at a lead change, mm, and its dashes. */
-const leadChangeHalfMm = 4;
-const leadChangeDashMm = [1, 0.75] as const;
-
-/** One row of one line of paper: what lies on it and how far its ink reaches. */
-interface Row {
-  line: number;
-  segments: RowSegment[];
-  profile: RowProfile;
-  /** Set relative to the row's 0 mV line. */
-  labels: TextItem[];
-}
-
-/** How far the traces and the calibration pulse of a row reach. */
-function inkProfile(
-  strip: PaperStrip,
-  sheet: SheetParameters,
-  segments: readonly RowSegment[],
-  widthMm: number,
-): RowProfile {
-  const { speedMmPerS, gainMmPerMv } = sheet;
-  const profile = new RowProfile(widthMm);
-  const pulseEndMm = paperGapMm + calibrationWidthMm(speedMmPerS);
-  profile.add(paperGapMm, pulseEndMm, mvToMm(calibrationMv, gainMmPerMv));
-  for (const segment of segments) {
-    const samples = strip.leads[segment.lead];
-    const [from, to] = sampleRange(segment, strip.sampleRateHz, samples.length);
-    for (let i = from; i < to; i++) {
-      const alongMm = sToMm(i / strip.sampleRateHz - segment.fromS, speedMmPerS);
-      const xMm = segment.xMm + alongMm;
-      profile.add(xMm, xMm, mvToMm(samples[i], gainMmPerMv));
-    }
-  }
-  return profile;
-}
+export const penStopMm = 0.5;
 
 /** Segments by row; they come in the order of lines and rows. */
 function segmentsByRow(segments: readonly RowSegment[]): RowSegment[][] {
@@ -88,61 +50,6 @@ function segmentsByRow(segments: readonly RowSegment[]): RowSegment[][] {
     rows[rows.length - 1].push(segment);
   }
   return rows;
-}
-
-function layRow(strip: PaperStrip, sheet: SheetParameters, segments: RowSegment[], widthMm: number): Row {
-  const profile = inkProfile(strip, sheet, segments, widthMm);
-  const labels = leadLabels(segments, profile, sheet.gainMmPerMv);
-  return { line: segments[0].line, segments, profile, labels };
-}
-
-function leadChangeStroke(segment: PlacedSegment): LineItem {
-  return {
-    kind: 'line',
-    role: 'leadChange',
-    x1Mm: segment.xMm,
-    y1Mm: segment.baselineMm - leadChangeHalfMm,
-    x2Mm: segment.xMm,
-    y2Mm: segment.baselineMm + leadChangeHalfMm,
-    colour: 'ink2',
-    weightMm: lineWeightsMm.leadChange,
-    dashMm: leadChangeDashMm,
-  };
-}
-
-function traceItems(
-  strip: PaperStrip,
-  sheet: SheetParameters,
-  segment: PlacedSegment,
-  heightMm: number,
-): PolylineItem[] {
-  const place: TracePlacement = {
-    sampleRateHz: strip.sampleRateHz,
-    speedMmPerS: sheet.speedMmPerS,
-    gainMmPerMv: sheet.gainMmPerMv,
-    xMm: segment.xMm,
-    baselineMm: segment.baselineMm,
-    topMm: penStopMm,
-    bottomMm: heightMm - penStopMm,
-  };
-  return tracePolylines(strip.leads[segment.lead], segment, place).map((pointsMm) => ({
-    kind: 'polyline',
-    role: 'trace',
-    pointsMm,
-    colour: 'ink',
-    weightMm: lineWeightsMm.trace,
-  }));
-}
-
-/** Leads whose trace ran along a pen stop; `traces` belong to `segments` one to one. */
-function stoppedLeads(
-  segments: readonly PlacedSegment[],
-  traces: readonly (readonly PolylineItem[])[],
-  heightMm: number,
-): LeadName[] {
-  const atStop = (mm: number, i: number) => i % 2 === 1 && (mm <= penStopMm || mm >= heightMm - penStopMm);
-  const stopped = segments.filter((_, i) => traces[i].some(({ pointsMm }) => pointsMm.some(atStop)));
-  return [...new Set(stopped.map((segment) => segment.lead))];
 }
 
 function panelNotes(
@@ -167,12 +74,12 @@ interface RowPlaces {
   heightMm: number;
 }
 
-/** Without a ladder all rows of all lines stand evenly; with one each line is a block with its band below. */
-function rowPlaces(rows: readonly Row[], sheet: SheetParameters): RowPlaces {
+/** Without a band all rows of all lines stand evenly; with one each line is a block with its band below. */
+function rowPlaces(rows: readonly Row[], sheet: SheetParameters, bandMm: number): RowPlaces {
   const rowsPerLine = rows.filter((row) => row.line === 0).length;
   const profiles = rows.map((row) => row.profile);
   const { topMm, pitchMm, bottomMm } = rowSpacing(profiles, rowsPerLine, sheet.gainMmPerMv);
-  if (!sheet.ladder) {
+  if (bandMm === 0) {
     const gapMm = rowsPerLine > 1 ? lineGapMm : 0;
     const baselines = rows.map((row, i) => topMm + i * pitchMm + row.line * gapMm);
     return { baselines, bandTops: [], heightMm: baselines[baselines.length - 1] + bottomMm };
@@ -187,27 +94,39 @@ function rowPlaces(rows: readonly Row[], sheet: SheetParameters): RowPlaces {
   };
 }
 
-/** The ladder under each line of paper, on a band without a grid. */
+/** Where the recorder found stimuli, when the sheet shows it. */
+function shownMarkers(strip: PaperStrip, sheet: SheetParameters): readonly number[] | null {
+  return sheet.stimulusMarkers ? (strip.stimulusMarkersS ?? null) : null;
+}
+
+/** Markers and ladder under each line of paper, on a band without a grid. */
 function bandItems(
   strip: PaperStrip,
   sheet: SheetParameters,
   lines: readonly TimeSpan[],
   bandTops: readonly number[],
-  widthMm: number,
+  { widthMm, bandMm }: { widthMm: number; bandMm: number },
 ): DrawingItem[] {
-  if (bandTops.length === 0) return [];
-  const marks = ladderOf(strip.events ?? []);
-  return bandTops.flatMap((topMm, line): DrawingItem[] => [
-    { kind: 'rect', role: 'page', xMm: 0, yMm: topMm, widthMm, heightMm: bandMm, fill: 'page' },
-    ...ladderItems(marks, [], {
-      ...lines[line],
-      xMm: traceInsetMm(sheet.speedMmPerS),
-      topMm: topMm + (bandMm - ladderHeightMm) / 2,
-      mmPerS: sheet.speedMmPerS,
-      names: ['Atria', 'AV', 'Ventricles'],
-      namesXMm: 0,
-    }),
-  ]);
+  const markers = shownMarkers(strip, sheet);
+  const markersMm = markers ? markerLaneMm : 0;
+  const marks = sheet.ladder ? ladderOf(strip.events ?? []) : null;
+  return bandTops.flatMap((topMm, line): DrawingItem[] => {
+    const place = { ...lines[line], xMm: traceInsetMm(sheet.speedMmPerS), namesXMm: 0 };
+    const ladderTopMm = topMm + markersMm + (ladderBandMm - ladderHeightMm) / 2;
+    const { speedMmPerS } = sheet;
+    return [
+      { kind: 'rect', role: 'page', xMm: 0, yMm: topMm, widthMm, heightMm: bandMm, fill: 'page' },
+      ...(markers ? markerLaneItems(markers, { ...place, topMm, speedMmPerS }) : []),
+      ...(marks
+        ? ladderItems(marks, [], {
+            ...place,
+            topMm: ladderTopMm,
+            mmPerS: speedMmPerS,
+            names: ['Atria', 'AV', 'Ventricles'],
+          })
+        : []),
+    ];
+  });
 }
 
 /**
@@ -221,25 +140,29 @@ export function layoutPanel(strip: PaperStrip, sheet: SheetParameters, options: 
   const drawnS = Math.min(durationS, longestDrawnS);
   const along = segmentsAlongPaper(sheet, drawnS, options.lineS);
   const widthMm = paperWidthMm(along, options.leastWidthMm);
-  const rows = segmentsByRow(along).map((segments) => layRow(strip, sheet, segments, widthMm));
-  const { baselines, bandTops, heightMm } = rowPlaces(rows, sheet);
+  const rows = segmentsByRow(along).map((segments) =>
+    layRow(strip, sheet.speedMmPerS, segments, paperGapMm, widthMm),
+  );
+  const bandMm = (shownMarkers(strip, sheet) ? markerLaneMm : 0) + (sheet.ladder ? ladderBandMm : 0);
+  const { baselines, bandTops, heightMm } = rowPlaces(rows, sheet, bandMm);
   const area = { xMm: 0, yMm: 0, widthMm, heightMm };
   const segments = rows.flatMap((row, i) =>
     row.segments.map((segment) => ({ ...segment, baselineMm: baselines[i] })),
   );
   const pulse = (baselineMm: number) =>
     calibrationPulse(paperGapMm, baselineMm, sheet.speedMmPerS, sheet.gainMmPerMv);
-  const traces = segments.map((segment) => traceItems(strip, sheet, segment, heightMm));
+  const stops = { topMm: penStopMm, bottomMm: heightMm - penStopMm };
+  const traces = segments.map((segment) => traceItems(strip, sheet.speedMmPerS, segment, stops));
   const lines = lineSpans(sheet, drawnS, options.lineS);
   const items: DrawingItem[] = [
     ...gridItems(area, sheet.gridTint),
-    ...bandItems(strip, sheet, lines, bandTops, widthMm),
+    ...bandItems(strip, sheet, lines, bandTops, { widthMm, bandMm }),
     ...segments.filter((segment) => segment.column > 0).map(leadChangeStroke),
     ...baselines.map(pulse),
     ...traces.flat(),
     ...rows.flatMap((row, i) => row.labels.map((label) => moveItem(label, 0, baselines[i]))),
   ];
-  const stopped = stoppedLeads(segments, traces, heightMm);
+  const stopped = stoppedLeads(segments, traces, stops);
   return { area, segments, items, notes: panelNotes(durationS, drawnS, lines, stopped) };
 }
 

@@ -10,6 +10,8 @@ export interface PaperStrip {
   engineVersion: string;
   /** For the ladder; a sheet without one needs none. */
   events?: readonly StripEvent[];
+  /** Where the recorder found a stimulus, s; null when it does not look for them. */
+  stimulusMarkersS?: readonly number[] | null;
   parameters: {
     title: string;
     seed: number;

@@ -1,13 +1,17 @@
 import type { SheetParameters } from '../parameters/strip-parameters';
 import { calibrationWidthMm } from './calibration';
 import { leadSegments, lineSpans, type LeadSegment } from './layout';
-import { largeBoxMm, sToMm } from './paper-scale';
+import { largeBoxMm, sToMm, type PaperGainMmPerMv } from './paper-scale';
 
 /** A lead's stretch of trace with its place along the paper; its row has no height yet. */
 export interface RowSegment extends LeadSegment {
   /** x of `fromS`. */
   xMm: number;
   widthMm: number;
+  /** The name printed: that of the lead, or `−aVR` where it is drawn inverted. */
+  label: string;
+  inverted: boolean;
+  gainMmPerMv: PaperGainMmPerMv;
 }
 
 /** A lead's stretch of trace on the sheet. */
@@ -36,6 +40,9 @@ export function segmentsAlongPaper(sheet: SheetParameters, durationS: number, li
     ...segment,
     xMm: traceXMm + sToMm(segment.fromS - lines[segment.line].fromS, speed),
     widthMm: sToMm(segment.toS - segment.fromS, speed),
+    label: segment.lead,
+    inverted: false,
+    gainMmPerMv: sheet.gainMmPerMv,
   }));
 }
 

@@ -38,9 +38,12 @@ export class RowProfile {
     return most;
   }
 
-  /** Greatest reach below the line, mm. */
-  reachDownMm(): number {
-    return this.down.reduce((most, value) => Math.max(most, value), 0);
+  /** Greatest reach below the line between two places, mm. */
+  reachDownMm(fromMm = 0, toMm = Infinity): number {
+    const [first, last] = this.binsOf(fromMm, toMm);
+    let most = 0;
+    for (let bin = first; bin <= last; bin++) most = Math.max(most, this.down[bin]);
+    return most;
   }
 
   /** Least distance between this row's line and the next one's at which their inks, 1 mm aside, just touch. */
@@ -49,5 +52,13 @@ export class RowProfile {
       (most, value, bin) => Math.max(most, value + next.reachUpMm((bin - 1) * binMm, (bin + 1) * binMm)),
       0,
     );
+  }
+
+  /** A copy in which no ink reaches further than `mostMm` either way. */
+  clipped(mostMm: number): RowProfile {
+    const copy = new RowProfile((this.up.length - 1) * binMm);
+    this.up.forEach((value, bin) => (copy.up[bin] = Math.min(value, mostMm)));
+    this.down.forEach((value, bin) => (copy.down[bin] = Math.min(value, mostMm)));
+    return copy;
   }
 }

@@ -26,6 +26,7 @@ export const inkColours = {
   edge: '#867b68',
   ruleStrong: '#cbc0ac',
   copper: '#b4532a',
+  copperDark: '#8f3f1d',
 } as const;
 
 type GridPart = keyof (typeof gridColours)[GridTint];
@@ -49,9 +50,12 @@ export const lineWeightsMm = {
   leadChange: 0.3,
   ladderConduction: 0.4,
   ladderStimulus: 0.5,
+  marker: 0.4,
   ladderSign: 0.3,
   ladderLane: 0.15,
   ladderHatch: 0.12,
+  annotation: 0.25,
+  writingLine: 0.2,
 } as const;
 
 /** A size of type with its line height, mm. `caption` is the smallest and 9 pt high. */

@@ -60,6 +60,7 @@ const irregularAtria: Predicate = ({ patient }) =>
  * all the same and finds the same events.
  */
 const rules: Readonly<Record<string, Rule>> = {
+  'sheet.stimulusMarkers': ({ recorder }) => recorder.stimulusMarker,
   // In arrest the rate still shapes the recovery of a Wenckebach node.
   'patient.atrialRateBpm': ({ patient }) =>
     patient.atrialRhythm !== 'arrest' || patient.avConduction === 'wenckebach',

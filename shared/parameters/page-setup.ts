@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { choiceField, flagField, numberField, section, textField } from './fields';
 import { sheetSchema } from './sheet';
+import type { SheetParameters } from './strip-parameters';
 
 const { layout, leads, speedMmPerS, gainMmPerMv, gridTint } = sheetSchema.unwrap().shape;
 
@@ -35,6 +36,10 @@ export const pageSetupSchema = section({
     { label: 'Sheets', help: 'A question sheet hides what the answer sheet tells.' },
   ),
   cohort: textField({ label: 'Cohort', maxLength: 80, help: 'Printed under the title; empty prints none.' }),
+  stimulusMarkers: flagField(false, {
+    label: 'Stimulus markers',
+    help: 'Below the grid, where the recorder found a stimulus; of strips whose stimulus marker is on.',
+  }),
   nameLine: flagField(true, {
     label: 'Line for a name',
     help: 'A blank line for the learner’s name and the date.',
@@ -62,3 +67,9 @@ export const pageSetupSchema = section({
   }),
 });
 export type PageSetup = z.output<typeof pageSetupSchema>;
+
+/** The setup that prints a strip as its own sheet parameters say; everything else as by default. */
+export function pageSetupOf(sheet: SheetParameters): PageSetup {
+  const { layout, leads, speedMmPerS, gainMmPerMv, gridTint, stimulusMarkers } = sheet;
+  return pageSetupSchema.parse({ layout, leads, speedMmPerS, gainMmPerMv, gridTint, stimulusMarkers });
+}

@@ -39,4 +39,8 @@ export const sheetSchema = section({
     label: 'Ladder on sheets',
     help: 'Draws the ladder diagram under each line of a sheet. It tells the answer.',
   }),
+  stimulusMarkers: flagField(false, {
+    label: 'Markers on sheets',
+    help: 'Draws, below the grid, where the recorder found a stimulus; it can err.',
+  }),
 });

@@ -11,11 +11,13 @@ function mayPass(error: Error): boolean {
 export function createQueryClient(): QueryClient {
   return new QueryClient({
     defaultOptions: {
+      // A server on this computer answers without a network; elsewhere a request fails at once, and the page says so.
       queries: {
+        networkMode: 'always',
         staleTime: 10_000,
         retry: (count, error) => count < mostRetries && mayPass(error),
       },
-      mutations: { retry: false },
+      mutations: { networkMode: 'always', retry: false },
     },
   });
 }

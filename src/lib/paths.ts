@@ -1,5 +1,7 @@
 /** Every address of the product in one place; links are made here and nowhere else. */
 export const paths = {
+  /** Sends everyone to where their role starts. */
+  start: () => '/',
   signIn: (from?: string) => (from ? `/sign-in?from=${encodeURIComponent(from)}` : '/sign-in'),
   strips: () => '/strips',
   /** The strips changed last, first. */

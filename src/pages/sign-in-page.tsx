@@ -1,5 +1,4 @@
 import { useNavigate, useSearchParams } from 'react-router-dom';
-import type { User } from '../../shared/api/session';
 import { Wordmark } from '../components/wordmark';
 import { AnnotatedBeat } from '../features/sign-in/annotated-beat';
 import { SignInForm } from '../features/sign-in/sign-in-form';
@@ -13,9 +12,8 @@ function safeTarget(from: string | null): string | null {
 export function Component() {
   const navigate = useNavigate();
   const [search] = useSearchParams();
-  const enter = (user: User): void => {
-    const start = user.role === 'learner' ? paths.help() : paths.strips();
-    void navigate(safeTarget(search.get('from')) ?? start, { replace: true });
+  const enter = (): void => {
+    void navigate(safeTarget(search.get('from')) ?? paths.start(), { replace: true });
   };
   return (
     <div className="grid min-h-dvh tablet:grid-cols-[minmax(340px,1fr)_minmax(0,1fr)] desk:grid-cols-[minmax(380px,1fr)_2fr]">

@@ -54,14 +54,16 @@ describe.skipIf(!hasBrowser())('exports and preset files', () => {
     await signInAs(page, 'educator');
     await openDownload(page, '/strips/av-sequential-pacing');
     const dialog = page.getByRole('dialog');
-    for (const name of [/^EDF/, /^WAV/]) await dialog.getByRole('checkbox', { name }).check();
+    for (const name of [/^PNG/, /^PDF/, /^EDF/, /^WAV/]) await dialog.getByRole('checkbox', { name }).check();
     await seen(page, 'never connect to a person');
     const coming = page.waitForEvent('download');
     await dialog.getByRole('button', { name: 'Download', exact: true }).click();
     const download = await coming;
     expect(download.suggestedFilename()).toBe('av-sequential-pacing.zip');
     const files = unzipSync(await bytesOf(download));
-    expect(Object.keys(files)).toEqual(expect.arrayContaining(['strip.csv', 'strip.edf', 'manifest.json']));
+    expect(Object.keys(files)).toEqual(
+      expect.arrayContaining(['strip.csv', 'strip.png', 'strip.pdf', 'strip.edf', 'manifest.json']),
+    );
     await dialog.getByText('is in your downloads').waitFor();
     await dialog.getByRole('link', { name: 'Exports' }).click();
     const row = page.getByRole('listitem').filter({ hasText: 'AV sequential pacing' });

@@ -1,35 +1,11 @@
-import type { Browser, Page } from 'playwright-core';
-import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest';
-import { hasBrowser, launchBrowser, openPage, signInAs, type Visit } from '../support/browser/browser';
-import { startProduct, type Product } from '../support/browser/product';
+import type { Page } from 'playwright-core';
+import { describe, expect, it } from 'vitest';
+import { hasBrowser, signInAs } from '../support/browser/browser';
+import { useProduct } from '../support/browser/use-product';
 
 // Whole journeys in Debian's Chromium against the built product.
 describe.skipIf(!hasBrowser())('in the browser', () => {
-  let browser: Browser;
-  let product: Product;
-  let visits: Visit[] = [];
-
-  beforeAll(async () => {
-    product = await startProduct();
-    browser = await launchBrowser();
-  });
-  afterAll(async () => {
-    await browser?.close();
-    await product?.stop();
-  });
-  // Every page of every journey: no error or warning in its console, no request that left the origin.
-  afterEach(async () => {
-    const messages = visits.flatMap((visit) => visit.trouble.messages);
-    await Promise.all(visits.map((visit) => visit.context.close()));
-    visits = [];
-    expect(messages).toEqual([]);
-  });
-
-  async function visit(size?: { width: number; height: number }): Promise<Page> {
-    const opened = await openPage(browser, product.url, size);
-    visits.push(opened);
-    return opened.page;
-  }
+  const { product, visit } = useProduct();
   const reading = (page: Page) => page.getByRole('region', { name: 'Reading' });
   const openGroup = (page: Page, name: string) =>
     page.getByRole('region', { name: 'Parameters' }).getByRole('button', { name }).click();
@@ -334,7 +310,7 @@ describe.skipIf(!hasBrowser())('in the browser', () => {
     await signInAs(page, 'educator');
     await page.goto('/strips/new');
     await type(page, 'Atrial rate', '64');
-    await product.restart();
+    await product().restart();
     await saveAs(page, 'Saved after a restart');
     await page.getByText('Version 1, saved').waitFor();
   });
@@ -342,7 +318,7 @@ describe.skipIf(!hasBrowser())('in the browser', () => {
   it('refuses a learner by page and by API', async () => {
     const page = await visit();
     await signInAs(page, 'learner');
-    expect(new URL(page.url()).pathname).toBe('/help');
+    expect(new URL(page.url()).pathname).toBe('/recorder');
     await page.goto('/strips');
     await page.getByRole('heading', { name: 'This page is not for your role' }).waitFor();
     expect((await page.request.get('/api/strips')).status()).toBe(403);

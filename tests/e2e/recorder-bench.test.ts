@@ -1,35 +1,12 @@
 import { readFileSync } from 'node:fs';
-import type { Browser, Download, Page } from 'playwright-core';
-import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest';
-import { hasBrowser, launchBrowser, openPage, signInAs, type Visit } from '../support/browser/browser';
-import { startProduct, type Product } from '../support/browser/product';
+import type { Download, Page } from 'playwright-core';
+import { describe, expect, it } from 'vitest';
+import { hasBrowser, signInAs } from '../support/browser/browser';
+import { useProduct } from '../support/browser/use-product';
 
 // The recorder bench in Debian's Chromium against the built product.
 describe.skipIf(!hasBrowser())('the recorder bench', () => {
-  let browser: Browser;
-  let product: Product;
-  let visits: Visit[] = [];
-
-  beforeAll(async () => {
-    product = await startProduct();
-    browser = await launchBrowser();
-  });
-  afterAll(async () => {
-    await browser?.close();
-    await product?.stop();
-  });
-  afterEach(async () => {
-    const messages = visits.flatMap((visit) => visit.trouble.messages);
-    await Promise.all(visits.map((visit) => visit.context.close()));
-    visits = [];
-    expect(messages).toEqual([]);
-  });
-
-  async function visit(): Promise<Page> {
-    const opened = await openPage(browser, product.url);
-    visits.push(opened);
-    return opened.page;
-  }
+  const { visit } = useProduct();
   const standards = (page: Page) => page.getByRole('region', { name: 'Standards' });
   const lessons = (page: Page) => page.getByRole('region', { name: 'Lessons' });
   const setting = (page: Page, number: number) =>

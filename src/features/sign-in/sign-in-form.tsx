@@ -4,7 +4,7 @@ import { useState } from 'react';
 import { useForm } from 'react-hook-form';
 import type { DemoAccount } from '../../../shared/api/demo';
 import { roleNames } from '../../../shared/api/roles';
-import { signInRequestSchema, type SignInRequest, type User } from '../../../shared/api/session';
+import { signInRequestSchema, type SignInRequest } from '../../../shared/api/session';
 import { demoQuery, sessionKeys, signIn } from '../../api/session';
 import { Button, buttonClass } from '../../components/button';
 import { Notice } from '../../components/notice';
@@ -17,7 +17,7 @@ function onePerRole(accounts: readonly DemoAccount[]): DemoAccount[] {
 }
 
 /** E-mail and password, and the people of the demonstration where there is one. */
-export function SignInForm({ onSignedIn }: { onSignedIn(user: User): void }) {
+export function SignInForm({ onSignedIn }: { onSignedIn(): void }) {
   const queryClient = useQueryClient();
   const [shown, setShown] = useState(false);
   const { data: demo } = useQuery(demoQuery);
@@ -30,7 +30,7 @@ export function SignInForm({ onSignedIn }: { onSignedIn(user: User): void }) {
     onSuccess: (user) => {
       queryClient.clear();
       queryClient.setQueryData(sessionKeys.session, user);
-      onSignedIn(user);
+      onSignedIn();
     },
   });
   const enter = (request: SignInRequest): void => entering.mutate(request);

@@ -87,7 +87,10 @@ export const disturbanceSections: readonly Section[] = [
   },
 ];
 
-export const sheetSection: Section = { title: 'On the sheet', paths: at('sheet', 'gridTint', 'ladder') };
+export const sheetSection: Section = {
+  title: 'On the sheet',
+  paths: at('sheet', 'gridTint', 'ladder', 'stimulusMarkers'),
+};
 
 /** Fields of a permanent lead. */
 export function leadPaths(
