@@ -61,7 +61,8 @@ describe('older files', () => {
       ['tarn-valley-unipolar-ward-story', 'recognise-the-chamber'],
       ['tarn-valley-failing-output-draft', 'capture'],
     ]);
-    expect(JSON.parse(writePresetFile(file.strips))).toEqual(JSON.parse(text));
+    // Parameters that came later are written with their defaults.
+    expect(JSON.parse(writePresetFile(file.strips))).toMatchObject(JSON.parse(text) as object);
   });
 
   it('of version 1 and 2 hold the same presets once upgraded, but for what version 1 never held', () => {
