@@ -77,7 +77,7 @@ it('fails in words when a worker runs out of memory, and goes on with the next o
   expect((await followExport(educator, next.id)).state).toBe('done');
   expect(readdirSync(kept.exportDirectory)).toEqual([next.id]);
   expect(server.logged).toEqual([]);
-});
+}, 180_000);
 
 it('removes files at the start that belong to no job, or are incomplete', async () => {
   await server.close();
