@@ -1,37 +1,14 @@
 import { readFileSync } from 'node:fs';
 import { strFromU8, unzipSync } from 'fflate';
-import type { Browser, Download, Page } from 'playwright-core';
-import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest';
-import { hasBrowser, launchBrowser, openPage, signInAs, type Visit } from '../support/browser/browser';
+import type { Download, Page } from 'playwright-core';
+import { describe, expect, it } from 'vitest';
+import { hasBrowser, signInAs } from '../support/browser/browser';
 import { seen } from '../support/browser/page-state';
-import { startProduct, type Product } from '../support/browser/product';
+import { useProduct } from '../support/browser/use-product';
 
 // Files out of the product and into it, in Debian's Chromium against the built product.
 describe.skipIf(!hasBrowser())('exports and preset files', () => {
-  let browser: Browser;
-  let product: Product;
-  let visits: Visit[] = [];
-
-  beforeAll(async () => {
-    product = await startProduct();
-    browser = await launchBrowser();
-  });
-  afterAll(async () => {
-    await browser?.close();
-    await product?.stop();
-  });
-  afterEach(async () => {
-    const messages = visits.flatMap((visit) => visit.trouble.messages);
-    await Promise.all(visits.map((visit) => visit.context.close()));
-    visits = [];
-    expect(messages).toEqual([]);
-  });
-
-  async function visit(): Promise<Page> {
-    const opened = await openPage(browser, product.url);
-    visits.push(opened);
-    return opened.page;
-  }
+  const { visit } = useProduct();
   async function openDownload(page: Page, address: string): Promise<void> {
     await page.goto(address);
     await page.getByRole('region', { name: 'Reading' }).waitFor();
