@@ -15,11 +15,13 @@ import { healthRoutes } from './routes/health/health-routes';
 import { registerRoutes } from './routes/register-routes';
 import { sessionRoutes } from './routes/session/session-routes';
 import { recorderRoutes } from './routes/recorder/recorder-routes';
+import { sheetRoutes } from './routes/sheets/sheet-routes';
 import { renderRoutes } from './routes/strips/render-routes';
 import { stripRoutes } from './routes/strips/strip-routes';
 import type { ReportPool } from './services/recorder/report-pool';
 import type { RenderPool } from './services/rendering/render-pool';
 import { findSession } from './services/session/sessions';
+import type { SheetPool } from './services/sheets/sheet-pool';
 
 export interface AppDependencies {
   database: Database;
@@ -27,6 +29,7 @@ export interface AppDependencies {
   sessionSecret: string;
   renderPool: RenderPool;
   reportPool: ReportPool;
+  sheetPool: SheetPool;
   /** Of package.json; stands on reports. */
   productVersion: string;
   logger: Logger;
@@ -40,8 +43,8 @@ export interface AppDependencies {
 
 /** The whole application, not listening. */
 export function createApp(dependencies: AppDependencies): Express {
-  const { database, sessionSecret, renderPool, reportPool, productVersion, logger, clientDirectory } =
-    dependencies;
+  const { database, sessionSecret, renderPool, reportPool, sheetPool } = dependencies;
+  const { productVersion, logger, clientDirectory } = dependencies;
   const { now = () => new Date(), signInLimits = usualSignInLimits, trustedProxies = 0 } = dependencies;
   const session = { database, secret: sessionSecret, now };
 
@@ -74,6 +77,7 @@ export function createApp(dependencies: AppDependencies): Express {
     ...sessionRoutes(session, signInLimit(signInLimits)),
     ...renderRoutes({ database, renderPool }),
     ...recorderRoutes({ reportPool, productVersion, now }),
+    ...sheetRoutes({ database, sheetPool, now }),
     ...stripRoutes({ database, now }),
   });
   app.use('/api', noSuchRoute);

@@ -12,6 +12,7 @@ import { demoAccounts } from './services/demo/demo-accounts';
 import { seedDemo } from './services/demo/seed-demo';
 import { createReportPool } from './services/recorder/report-pool';
 import { createRenderPool } from './services/rendering/render-pool';
+import { createSheetPool } from './services/sheets/sheet-pool';
 import { loadSessionSecret } from './services/session/session-secret';
 import { shipGallery } from './services/strips/ship-gallery';
 import { roleNames } from '../shared/api/roles';
@@ -46,11 +47,13 @@ await shipGallery(database, new Date());
 
 const renderPool = createRenderPool({ workerFile: workerFile('render-worker') });
 const reportPool = createReportPool(workerFile('report-worker'));
+const sheetPool = createSheetPool({ workerFile: workerFile('sheet-worker') });
 const app = createApp({
   database,
   sessionSecret,
   renderPool,
   reportPool,
+  sheetPool,
   productVersion: packageVersion(),
   logger,
   clientDirectory: resolve(environment.clientDirectory),
@@ -80,6 +83,7 @@ async function stop(): Promise<void> {
   await closed;
   await renderPool.close();
   await reportPool.close();
+  await sheetPool.close();
   await database.close();
   process.exit(0);
 }

@@ -19,6 +19,7 @@ export const routeAccess = {
   'GET /api/session': 'signedIn',
   'DELETE /api/session': 'everyone',
   'POST /api/recorder-report': 'signedIn',
+  'POST /api/sheets': makesStrips,
   'GET /api/strips': makesStrips,
   'POST /api/strips': makesStrips,
   'POST /api/strips/render': makesStrips,

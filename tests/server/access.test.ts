@@ -50,6 +50,23 @@ const cases: RouteCase[] = [
   { route: 'POST /api/session', path: '/api/session', body: {}, expected: everyone(400) },
   { route: 'GET /api/session', path: '/api/session', expected: everyone(200, 401) },
   { route: 'DELETE /api/session', path: '/api/session', expected: everyone(204) },
+  {
+    route: 'POST /api/recorder-report',
+    path: '/api/recorder-report',
+    body: { settings: [] },
+    expected: everyone(400, 401),
+  },
+  {
+    route: 'POST /api/sheets',
+    path: '/api/sheets',
+    body: {
+      strips: [{ stripId: shared }],
+      setup: { sheets: 'plain', layout: 'single' },
+      format: 'svg',
+      page: 1,
+    },
+    expected: makers(200, { otherDepartment: 404 }),
+  },
   { route: 'GET /api/strips', path: '/api/strips', expected: makers(200) },
   { route: 'POST /api/strips', path: '/api/strips', body: newStrip, expected: makers(201) },
   {
@@ -124,6 +141,8 @@ describe('private strips', () => {
     expect((await client.send('POST', `/api/strips/${own}/duplicate`)).status).toBe(404);
     expect((await client.send('POST', `/api/strips/${own}/restore`)).status).toBe(404);
     expect((await client.send('POST', '/api/strips/render', { stripId: own })).status).toBe(404);
+    const sheets = { strips: [{ stripId: own }], setup: {}, format: 'pdf' };
+    expect((await client.send('POST', '/api/sheets', sheets)).status).toBe(404);
   });
 
   it('are their owner’s to change', async () => {

@@ -9,6 +9,7 @@ import { createApp, type AppDependencies } from '../../../server/app';
 import { openDatabase, type Database } from '../../../server/models/database';
 import { createRenderPool, type RenderPoolOptions } from '../../../server/services/rendering/render-pool';
 import { createReportPool } from '../../../server/services/recorder/report-pool';
+import { createSheetPool, type SheetPoolOptions } from '../../../server/services/sheets/sheet-pool';
 import { ApiClient, type Person } from './api-client';
 
 export const workerFile = resolve('server/workers/render-worker.ts');
@@ -29,17 +30,19 @@ interface TestServerOptions extends Partial<AppDependencies> {
   /** A database to go on with; otherwise a copy of the template. */
   databaseFile?: string;
   pool?: Partial<RenderPoolOptions>;
+  sheets?: Partial<SheetPoolOptions>;
 }
 
 /** The application on a free port of this machine, over a copy of the template database. */
 export async function startTestServer(options: TestServerOptions = {}): Promise<TestServer> {
-  const { databaseFile, pool, ...dependencies } = options;
+  const { databaseFile, pool, sheets, ...dependencies } = options;
   const directory = mkdtempSync(join(tmpdir(), 'paceloom-server-'));
   const file = databaseFile ?? join(directory, 'test.sqlite');
   if (databaseFile === undefined) copyFileSync(inject('templateDatabase'), file);
   const database = await openDatabase(file);
   const renderPool = createRenderPool({ workerFile, threads: 1, keepWarm: false, ...pool });
   const reportPool = createReportPool(resolve('server/workers/report-worker.ts'));
+  const sheetPool = createSheetPool({ workerFile: resolve('server/workers/sheet-worker.ts'), ...sheets });
   const logged: string[] = [];
   const logger = pino({ level: 'error' }, { write: (line: string) => void logged.push(line) });
   const app = createApp({
@@ -47,6 +50,7 @@ export async function startTestServer(options: TestServerOptions = {}): Promise<
     sessionSecret: 'a key for tests only, of no worth',
     renderPool,
     reportPool,
+    sheetPool,
     productVersion: '0.0.0',
     logger,
     clientDirectory: join(directory, 'client'),
@@ -67,6 +71,7 @@ export async function startTestServer(options: TestServerOptions = {}): Promise<
       await new Promise((done) => server.close(done));
       await renderPool.close();
       await reportPool.close();
+      await sheetPool.close();
       await database.close();
       rmSync(directory, { recursive: true, force: true });
     },
