@@ -3,8 +3,15 @@ import { useEffect, useRef, useState } from 'react';
 /** Typing rests this long before the list follows. */
 const restMs = 250;
 
+interface SearchBoxProps {
+  label: string;
+  placeholder: string;
+  value: string;
+  onSearch(words: string): void;
+}
+
 /** A search that follows what is typed, and what the address says. */
-export function SearchBox({ value, onSearch }: { value: string; onSearch(words: string): void }) {
+export function SearchBox({ label, placeholder, value, onSearch }: SearchBoxProps) {
   const [typed, setTyped] = useState(value);
   const [lastValue, setLastValue] = useState(value);
   const timer = useRef<ReturnType<typeof setTimeout> | null>(null);
@@ -28,8 +35,8 @@ export function SearchBox({ value, onSearch }: { value: string; onSearch(words: 
       </svg>
       <input
         type="search"
-        aria-label="Search strips"
-        placeholder="Title, tag or teaching point"
+        aria-label={label}
+        placeholder={placeholder}
         value={typed}
         maxLength={200}
         onChange={(event) => {
