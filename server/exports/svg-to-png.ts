@@ -4,7 +4,7 @@ import { fontFiles } from './fonts';
 import { withDescription, withPixelDensity } from './png-chunks';
 
 /**
- * Paints an SVG whose size is given in mm at `dpi` dots per inch (pixels = mm × dpi / 25.4, rounded up) and
+ * Paints an SVG whose size is given in mm at `dpi` dots per inch (pixels = mm × dpi / 25.4, to whole ones) and
  * notes the density and the caution in the file, so that it opens and prints at true scale. Only the project's own fonts are
  * used. Throws when the SVG cannot be read.
  */

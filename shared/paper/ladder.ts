@@ -24,6 +24,9 @@ const hatchPitchMm = 1.2;
 const windowInsetMm = 0.5;
 /** Letters of ventricles, below their strokes: distance of the baseline from the bottom of the lanes. */
 const labelDropMm = outsideMm - 0.2;
+/** From a stroke to its letter, mm; stimuli of one pace lie at most this far apart, s. */
+const letterGapMm = 0.7;
+const pairS = 0.1;
 
 /** Where a ladder lies: the same x for the same time as the traces above it. */
 export interface LadderPlace {
@@ -119,7 +122,28 @@ function barItems(timeS: number, level: number, gapMm: number, frame: Frame): Dr
   );
 }
 
-function stimulusItems(mark: Extract<LadderMark, { kind: 'stimulus' }>, frame: Frame): DrawingItem[] {
+type StimulusMark = Extract<LadderMark, { kind: 'stimulus' }>;
+
+/** The letter of a ventricle beside its stroke: on the outer side of a pair, so that the two never meet. */
+function letterItem(
+  mark: StimulusMark,
+  label: string,
+  marks: readonly LadderMark[],
+  frame: Frame,
+): DrawingItem {
+  const hasNext = marks.some(
+    (other) =>
+      other.kind === 'stimulus' &&
+      other.label !== null &&
+      other.timeS > mark.timeS &&
+      other.timeS - mark.timeS <= pairS,
+  );
+  const baseline = frame.y(ladderLevels.bottom) + labelDropMm;
+  const xMm = frame.x(mark.timeS) + (hasNext ? -letterGapMm : letterGapMm);
+  return textItem(label, frame.style('ladderLetter'), xMm, baseline, hasNext ? 'end' : 'start');
+}
+
+function stimulusItems(mark: StimulusMark, marks: readonly LadderMark[], frame: Frame): DrawingItem[] {
   const above = mark.edge === 'atria';
   const x = frame.x(mark.timeS);
   const edge = frame.y(above ? ladderLevels.top : ladderLevels.bottom);
@@ -155,18 +179,16 @@ function stimulusItems(mark: Extract<LadderMark, { kind: 'stimulus' }>, frame: F
       stroke([x - slant, centre + slant], [x + slant, centre - slant], 'copper', lineWeightsMm.ladderSign),
     );
   }
-  if (mark.label) {
-    items.push(textItem(mark.label, frame.style('ladderLetter'), x + 0.7, edge + labelDropMm));
-  }
+  if (mark.label) items.push(letterItem(mark, mark.label, marks, frame));
   return items;
 }
 
-function markItems(mark: LadderMark, frame: Frame): DrawingItem[] {
+function markItems(mark: LadderMark, marks: readonly LadderMark[], frame: Frame): DrawingItem[] {
   if (mark.kind === 'conduction') return conductionItems(mark, frame);
   if (!frame.shows(mark.timeS)) return [];
   switch (mark.kind) {
     case 'stimulus':
-      return stimulusItems(mark, frame);
+      return stimulusItems(mark, marks, frame);
     case 'intrinsic':
       return [
         {
@@ -276,6 +298,6 @@ export function ladderItems(
   return [
     ...windows.flatMap((window) => windowItems(window, frame)),
     ...laneItems(frame),
-    ...marks.flatMap((mark) => markItems(mark, frame)),
+    ...marks.flatMap((mark) => markItems(mark, marks, frame)),
   ];
 }

@@ -79,6 +79,17 @@ function labelTexts({ segment, timeText, nameWidthMm, xMm }: Label, footMm: numb
   return [name, textItem(timeText, textStyles.lineTime, xMm + nameWidthMm + lineTimeGapMm, -footMm)];
 }
 
+/** All at one level, but a label that would run into the one before it steps up over it. */
+function steppedFeet(labels: readonly Label[], levelMm: number): number[] {
+  const feet: number[] = [];
+  labels.forEach(({ xMm }, i) => {
+    const before = labels[i - 1];
+    const free = !before || before.xMm + before.widthMm + clearanceMm <= xMm;
+    feet.push(free ? levelMm : feet[i - 1] + capHeightMm + clearanceMm);
+  });
+  return feet;
+}
+
 /**
  * The names of a row's leads above the starts of their traces, all at one height clear of the row's ink, and on
  * the first row of a continued line the second at which it goes on. The labels are added to the row's profile,
@@ -88,7 +99,8 @@ export function leadLabels(segments: readonly RowSegment[], profile: RowProfile)
   const labels = segments.map((segment) =>
     clearOfInk(labelOf(segment, usualFootMm(segment.gainMmPerMv)), profile, segment.gainMmPerMv),
   );
-  const footMm = Math.max(...labels.map((label) => label.footMm));
-  for (const { xMm, widthMm } of labels) profile.add(xMm, xMm + widthMm, footMm + capHeightMm);
-  return labels.flatMap((label) => labelTexts(label, footMm));
+  const levelMm = Math.max(...labels.map((label) => label.footMm));
+  const feet = steppedFeet(labels, levelMm);
+  labels.forEach(({ xMm, widthMm }, i) => profile.add(xMm, xMm + widthMm, feet[i] + capHeightMm));
+  return labels.flatMap((label, i) => labelTexts(label, feet[i]));
 }

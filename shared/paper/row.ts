@@ -17,6 +17,8 @@ export interface Row {
   line: number;
   segments: RowSegment[];
   profile: RowProfile;
+  /** The same without the labels. */
+  ink: RowProfile;
   /** Set relative to the row's 0 mV line. */
   labels: TextItem[];
 }
@@ -54,8 +56,9 @@ export function layRow(
   widthMm: number,
 ): Row {
   const profile = inkProfile(strip, speedMmPerS, segments, pulseXMm, widthMm);
+  const ink = profile.clipped(Infinity);
   const labels = leadLabels(segments, profile);
-  return { line: segments[0].line, segments, profile, labels };
+  return { line: segments[0].line, segments, profile, ink, labels };
 }
 
 /** The short dashed stroke where a row changes its lead. */

@@ -7,9 +7,22 @@ import { capHeightEm, lineWeightsMm, type PaperColour } from '../tokens';
 import type { Interval } from './intervals';
 import type { NamedStimulus } from './stimulus-names';
 
+/** Words at a row: a leader that passes through them would strike them out. */
+interface Words {
+  fromMm: number;
+  toMm: number;
+  /** How far they reach from the 0 mV line, on which side. */
+  reachMm: number;
+  above: boolean;
+}
+
 /** The row that annotations stand at; y is relative to its 0 mV line. */
 export interface AnnotatedRow extends TimeSpan {
   profile: RowProfile;
+  /** The traces alone. */
+  ink: RowProfile;
+  /** Lead names, and names of stimuli as they are placed. */
+  words: Words[];
   /** x of `fromS`, and millimetres a second takes. */
   traceXMm: number;
   mmPerS: number;
@@ -29,9 +42,10 @@ const leaderGapMm = 0.7;
 const leaderStopMm = 0.8;
 /** Lowest foot of a name above the 0 mV line, mm. */
 const lowestMm = 5;
-/** A name on its less usual side, or below the trace, costs as much as standing this much further off, mm. */
+/** A name on its less usual side, below the trace, or cut off from it costs as much as standing this much further off, mm. */
 const costOfOtherSideMm = 4;
 const costOfBelowMm = 8;
+const costOfBlockedMm = 20;
 /** Descenders, mm. */
 const belowBaselineMm = 0.8;
 /** Dimension lines: below the ink, one below the other, and their ends, mm. */
@@ -66,6 +80,20 @@ interface NamePlace {
   footMm: number;
   left: boolean;
   above: boolean;
+  /** Where a leader down to the trace ends, and whether words are in its way. */
+  leaderMm: number;
+  blocked: boolean;
+}
+
+/** The end of a leader at `xMm` from a name whose middle is `middleMm` off: just off the trace, or off words in between. */
+function leaderEnd(row: AnnotatedRow, xMm: number, above: boolean, middleMm: number) {
+  const [a, b] = [xMm - 0.5, xMm + 0.5];
+  const inkMm = above ? row.ink.reachUpMm(a, b) : row.ink.reachDownMm(a, b);
+  const between = row.words.filter(
+    (one) => one.above === above && one.fromMm <= b && one.toMm >= a && one.reachMm < middleMm,
+  );
+  const reachMm = Math.max(inkMm, ...between.map((one) => one.reachMm));
+  return { leaderMm: reachMm + leaderStopMm, blocked: between.length > 0 };
 }
 
 /** `waitingMm` are the stimuli further left that still need their leaders: no name may cover them. */
@@ -80,7 +108,7 @@ function placesOf(
     { fromMm: xMm + besideMm, left: false },
   ].filter(
     ({ fromMm, left }) =>
-      fromMm >= clearanceMm &&
+      fromMm >= row.traceXMm &&
       fromMm + widthMm <= row.widthMm - clearanceMm &&
       !(left && waitingMm.some((waiting) => waiting > fromMm - clearanceMm)),
   );
@@ -88,13 +116,15 @@ function placesOf(
     [true, false].map((above) => {
       const [a, b] = [range.fromMm - clearanceMm, range.fromMm + widthMm + clearanceMm];
       const inkMm = above ? row.profile.reachUpMm(a, b) : row.profile.reachDownMm(a, b);
-      return { ...range, above, footMm: Math.max(lowestMm, inkMm + clearanceMm) };
+      const footMm = Math.max(lowestMm, inkMm + clearanceMm);
+      return { ...range, above, footMm, ...leaderEnd(row, xMm, above, footMm + capMm / 2) };
     }),
   );
 }
 
-function costOf({ footMm, left, above }: NamePlace, { atrial }: NamedStimulus): number {
-  return footMm + (left === atrial ? 0 : costOfOtherSideMm) + (above ? 0 : costOfBelowMm);
+function costOf({ footMm, left, above, blocked }: NamePlace, { atrial }: NamedStimulus): number {
+  const side = (left === atrial ? 0 : costOfOtherSideMm) + (above ? 0 : costOfBelowMm);
+  return footMm + side + (blocked ? costOfBlockedMm : 0);
 }
 
 function nameItems(row: AnnotatedRow, stimulus: NamedStimulus, waitingMm: readonly number[]): DrawingItem[] {
@@ -104,22 +134,21 @@ function nameItems(row: AnnotatedRow, stimulus: NamedStimulus, waitingMm: readon
     (a, b) => costOf(a, stimulus) - costOf(b, stimulus),
   );
   if (places.length === 0) return [];
-  const { fromMm, footMm, left, above } = places[0];
+  const { fromMm, footMm, left, above, leaderMm } = places[0];
   const sign = above ? -1 : 1;
   const middleMm = footMm + capMm / 2;
   const edgeMm = left ? fromMm + widthMm + leaderGapMm : fromMm - leaderGapMm;
-  const [a, b] = [xMm - 0.5, xMm + 0.5];
-  const inkMm = (above ? row.profile.reachUpMm(a, b) : row.profile.reachDownMm(a, b)) + leaderStopMm;
   // Beside an artefact taller than its name the leader points at it from the side.
-  const turns = inkMm < middleMm;
+  const turns = leaderMm < middleMm;
   const endMm = turns ? xMm : xMm + (left ? -leaderStopMm : leaderStopMm);
   row.profile.add(fromMm, fromMm + widthMm, -sign * (footMm + capMm + belowBaselineMm));
+  row.words.push({ fromMm, toMm: fromMm + widthMm, reachMm: footMm + capMm, above });
   row.profile.add(Math.min(xMm, edgeMm), Math.max(xMm, edgeMm), -sign * (middleMm + belowBaselineMm));
   const baselineMm = above ? -footMm : footMm + capMm;
   return [
     textItem(stimulus.text, textStyles.stimulusName, fromMm, baselineMm),
     stroke(edgeMm, sign * middleMm, endMm, sign * middleMm, 'copper'),
-    ...(turns ? [stroke(xMm, sign * middleMm, xMm, sign * inkMm, 'copper')] : []),
+    ...(turns ? [stroke(xMm, sign * middleMm, xMm, sign * leaderMm, 'copper')] : []),
   ];
 }
 

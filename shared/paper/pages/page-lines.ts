@@ -23,7 +23,7 @@ const mostShortened = 0.1;
 /** Columns end at whole twentieths of a second: 1.25 mm at 25 mm/s. */
 const columnStepS = 0.05;
 /** A last line shorter than this share of the others is avoided by making all alike. */
-const leastLastShare = 0.5;
+const leastLastShare = 0.25;
 
 /** A time in seconds as short as it can be written. */
 function seconds(timeS: number): string {

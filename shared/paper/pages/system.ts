@@ -11,6 +11,9 @@ import type { PlacedSegment } from '../placed-segment';
 import { layRow, leadChangeStroke, stoppedLeads, traceItems, type Row } from '../row';
 import { clearanceMm, leastPitchMm, rowGapMm, rowSpacing, toLargeBoxes } from '../row-spacing';
 import type { RowProfile } from '../row-profile';
+import { textWidthMm } from '../text';
+import { textStyles } from '../text-styles';
+import { capHeightEm } from '../tokens';
 import { intervalItems, stimulusNameItems, type AnnotatedRow } from './annotations';
 import type { Interval } from './intervals';
 import type { PageFrame } from './page-frame';
@@ -94,9 +97,18 @@ export function laySystem(
     const segments = lineSegments(row, { line, lineIndex, row: i, traceXMm, speedMmPerS });
     return layRow(strip, speedMmPerS, segments, pulseXMm, contentWidthMm);
   });
-  const profile = rows[rows.length - 1].profile.clipped(tallMm);
+  const last = rows[rows.length - 1];
+  const profile = last.profile.clipped(tallMm);
+  const words = last.labels.map((label) => {
+    const fromMm = label.xMm;
+    const toMm = fromMm + textWidthMm(label.text, textStyles.leadName);
+    return { fromMm, toMm, reachMm: -label.yMm + label.sizeMm * capHeightEm, above: true };
+  });
   const place = { traceXMm, mmPerS: speedMmPerS, widthMm: contentWidthMm, tallMm };
-  const { items, kinds } = annotate({ ...line, ...place, profile }, marks);
+  const { items, kinds } = annotate(
+    { ...line, ...place, profile, ink: last.ink.clipped(tallMm), words },
+    marks,
+  );
   const gainMmPerMv = Math.max(...cells.flat().map((cell) => cell.gainMmPerMv)) as System['gainMmPerMv'];
   const profiles = rows.map((row) => row.profile);
   const before = rows.length > 1 ? rows[rows.length - 2].profile.clipped(tallMm) : null;
@@ -111,34 +123,38 @@ export function laySystem(
   return { system, kinds };
 }
 
-/** How rows are spaced. */
+/** How rows are spaced: each as far from the next as its ink asks for, between these. */
 export interface Spacing {
-  /** Greatest distance between rows. */
+  leastMm: number;
   pitchMm: number;
-  /** All rows this far apart, or each as its ink asks for up to this. */
-  even: boolean;
   /** Room at the edges of a grid as its ink asks for instead of a usual one. */
   trimmed: boolean;
   /** Most room above the first line and below the last, mm; where it bites, traces are cut at the edge. */
   edgeLimitMm?: number;
 }
 
+/** `fromMm`, and large box by large box down to `toMm`. */
+function descending(fromMm: number, toMm: number): number[] {
+  const count = Math.max(0, Math.floor((fromMm - toMm) / largeBoxMm) + 1);
+  return Array.from({ length: count }, (_, i) => fromMm - i * largeBoxMm);
+}
+
 /**
- * Spacings to try, roomiest first: even, then with trimmed edges, then each row as its ink asks for, then rows that stand
- * closer than that.
+ * Spacings to try, roomiest first: even, then with trimmed edges, then less and less even where the ink allows it, then rows
+ * that stand closer than their ink asks for.
  */
 export function spacingsOf(systems: readonly System[]): Spacing[] {
   const pitchMm = Math.max(...systems.map((system) => system.pitchMm));
-  const spacings: Spacing[] = [
-    { pitchMm, even: true, trimmed: false },
-    { pitchMm, even: true, trimmed: true },
-    { pitchMm, even: false, trimmed: true },
+  const closestMm = Math.max(leastPitchMm, closest * pitchMm);
+  return [
+    { leastMm: pitchMm, pitchMm, trimmed: false },
+    ...descending(pitchMm, leastPitchMm).map((leastMm) => ({ leastMm, pitchMm, trimmed: true })),
+    ...descending(pitchMm - largeBoxMm, closestMm).map((closerMm) => ({
+      leastMm: leastPitchMm,
+      pitchMm: closerMm,
+      trimmed: true,
+    })),
   ];
-  const leastMm = Math.max(leastPitchMm, closest * pitchMm);
-  for (let closerMm = pitchMm - largeBoxMm; closerMm >= leastMm; closerMm -= largeBoxMm) {
-    spacings.push({ pitchMm: closerMm, even: false, trimmed: true });
-  }
-  return spacings;
 }
 
 /** Some rows of a system as they lie under each other on one page, from the upper edge of their grid. */
@@ -159,7 +175,7 @@ export interface SystemPart {
 
 /** Distance from the row before; before the last there is also room for what is written there. */
 function gapBeforeMm(system: System, spacing: Spacing, row: number): number {
-  const ownMm = spacing.even ? spacing.pitchMm : system.gapsMm[row - 1];
+  const ownMm = Math.max(system.gapsMm[row - 1], spacing.leastMm);
   const writtenMm = row === system.rows.length - 1 ? Math.max(0, toLargeBoxes(system.lastGapMm - ownMm)) : 0;
   return Math.min(ownMm, spacing.pitchMm) + writtenMm;
 }
