@@ -94,6 +94,29 @@ const states: State[] = [
     ready: (page) => seen(page, 'No stimulus is given.'),
     act: (page) => page.getByRole('button', { name: 'Save strip' }).click(),
   },
+  ...[
+    ['sheet', ''],
+    ['sheet of chosen leads, upright', '?orientation=portrait&layout=stacked&leads=II.V1.aVR&page=2'],
+    ['sheets of several strips', '?layout=single&and=demand-pacing-inhibited&and=spikes-over-asystole'],
+    ['sheet with a strip that is gone', '?layout=12x1&and=no-such-strip'],
+  ].map(([name, search]): State => ({
+    name,
+    path: `/strips/av-sequential-pacing/sheet${search}`,
+    async ready(page) {
+      await page.getByRole('region', { name: 'Page', exact: true }).getByRole('img').waitFor();
+      if (name.endsWith('gone')) await seen(page, 'A strip of these sheets is not there.');
+    },
+  })),
+  {
+    name: 'sheet, closer, adding a strip',
+    path: '/strips/av-sequential-pacing/sheet',
+    ready: (page) => page.getByRole('region', { name: 'Page', exact: true }).getByRole('img').waitFor(),
+    async act(page) {
+      await page.getByRole('radio', { name: 'Closer' }).click();
+      await page.getByRole('button', { name: 'Add a strip' }).click();
+      await page.getByRole('list', { name: 'Strips found' }).waitFor();
+    },
+  },
   { name: 'help', path: '/help', ready: (page) => seen(page, 'What bandwidth does') },
   { name: 'nothing here', path: '/nowhere', ready: (page) => seen(page, 'There is nothing here') },
 ];

@@ -129,9 +129,9 @@ export function SheetDesigner(props: SheetDesignerProps) {
         {isWide && (
           <aside
             aria-label="Options"
-            className="border-l border-rule px-5 py-5 desk:row-span-2 desk:row-start-1 desk:col-start-2 wide:col-start-3 wide:row-span-1"
+            className="border-l border-rule desk:row-span-2 desk:row-start-1 desk:col-start-2 wide:col-start-3 wide:row-span-1"
           >
-            {options}
+            <div className="sticky top-0 max-h-dvh overflow-y-auto px-5 py-5">{options}</div>
           </aside>
         )}
       </div>

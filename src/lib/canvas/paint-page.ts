@@ -4,6 +4,9 @@ import { paintDrawing } from './paint-drawing';
 
 /** Below this many pixels a millimetre the 1 mm lines would run together and are left out. */
 const leastMinorPxPerMm = 3;
+/** Below this many pixels a millimetre even the 5 mm lines, a pixel wide, would outweigh the traces; they are paler then. */
+const leastFullPxPerMm = 2;
+const paleAlpha = 0.45;
 /** Thinnest line of a page in true proportion, px: still seen in a thumbnail. */
 const leastLinePx = 0.7;
 
@@ -15,12 +18,14 @@ function paintGridLine(context: CanvasRenderingContext2D, line: LineItem, pxPerM
   const x = upright ? snap(line.x1Mm) : line.x1Mm * pxPerMm;
   const y = upright ? line.y1Mm * pxPerMm : snap(line.y1Mm);
   context.fillStyle = colourValue(line.colour);
+  context.globalAlpha = pxPerMm < leastFullPxPerMm ? paleAlpha : 1;
   context.fillRect(
     x,
     y,
     upright ? widthPx : (line.x2Mm - line.x1Mm) * pxPerMm,
     upright ? (line.y2Mm - line.y1Mm) * pxPerMm : widthPx,
   );
+  context.globalAlpha = 1;
 }
 
 /** Paints a page of paper in true proportion, `pxPerMm` pixels of the canvas to the millimetre. */

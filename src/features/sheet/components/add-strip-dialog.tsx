@@ -32,6 +32,7 @@ export function AddStripDialog({ taken, onAdd, onClose }: AddStripDialogProps) {
     >
       <div className="mt-4 flex flex-col gap-3">
         <SearchBox
+          wide
           label="Search the library"
           placeholder="Title, tag or teaching point"
           value={words}

@@ -4,15 +4,15 @@ import { classNames } from '../../../lib/class-names';
 
 type Layout = PageSetup['layout'];
 
-/** Rows of a layout in small: into how many parts each row is cut. */
+/** Rows of a layout in small: into how many parts each row is cut. Labels have thin spaces. */
 const layouts: readonly { value: Layout; label: string; rows: readonly number[] }[] = [
-  { value: '3x4+1', label: '3 × 4 + 1', rows: [4, 4, 4, 1] },
-  { value: '3x4', label: '3 × 4', rows: [4, 4, 4] },
-  { value: '3x4+3', label: '3 × 4 + 3', rows: [4, 4, 4, 1, 1, 1] },
-  { value: '6x2', label: '6 × 2', rows: [2, 2, 2, 2, 2, 2] },
-  { value: '12x1', label: '12 × 1', rows: new Array<number>(12).fill(1) },
+  { value: '3x4+1', label: '3 × 4 + 1', rows: [4, 4, 4, 1] },
+  { value: '3x4', label: '3 × 4', rows: [4, 4, 4] },
+  { value: '3x4+3', label: '3 × 4 + 3', rows: [4, 4, 4, 1, 1, 1] },
+  { value: '6x2', label: '6 × 2', rows: [2, 2, 2, 2, 2, 2] },
+  { value: '12x1', label: '12 × 1', rows: new Array<number>(12).fill(1) },
   { value: 'stacked', label: 'Chosen', rows: [1, 1] },
-  { value: 'single', label: 'One lead', rows: [1] },
+  { value: 'single', label: '1 lead', rows: [1] },
 ];
 
 const box = { widthPx: 36, heightPx: 26, gapPx: 2 } as const;
@@ -46,14 +46,14 @@ export function LayoutTiles({ value, onChange }: { value: Layout; onChange(layou
       aria-label="Layout"
       value={value}
       onValueChange={(next) => onChange(next as Layout)}
-      className="grid grid-cols-3 gap-1.5"
+      className="grid grid-cols-4 gap-1.5"
     >
       {layouts.map(({ value: layout, label, rows }) => (
         <RadioGroup.Item
           key={layout}
           value={layout}
           className={classNames(
-            'flex flex-col items-center gap-1 rounded-control border bg-sheet px-1 pt-2 pb-1.5 text-caption',
+            'flex flex-col items-center gap-1 rounded-control border bg-sheet pt-2 pb-1.5 text-caption whitespace-nowrap',
             layout === value
               ? 'border-teal font-semibold outline-1 outline-teal'
               : 'border-edge text-ink-2 hover:bg-sunk',

@@ -13,60 +13,69 @@ interface PageListProps {
   children: ReactNode;
 }
 
-/** Width of a thumbnail, px: as wide as its column, and narrower where pages stand in a row. */
-const thumbnailPx = { column: 184, row: 132 } as const;
-
-function Thumbnail({ page, widthPx }: { page: SheetPage; widthPx: number }) {
-  return <PageCanvas page={page} pxPerMm={widthPx / Math.max(page.widthMm, page.heightMm)} />;
-}
+/** Room of a thumbnail, px: as wide as its column, and smaller where pages stand in a row. */
+const roomsPx = { column: { width: 182, height: 129 }, row: { width: 130, height: 92 } } as const;
 
 /** The pages in small: a column beside the desk, or a row above it. */
 export function PageList({ pages, chosen, inColumn, onChoose, children }: PageListProps) {
-  const widthPx = inColumn ? thumbnailPx.column : thumbnailPx.row;
+  const room = inColumn ? roomsPx.column : roomsPx.row;
   return (
     <nav
       aria-label="Pages"
       className={classNames(
         'min-w-0 border-rule',
         inColumn
-          ? 'border-r px-5 py-5'
-          : 'flex items-start gap-4 overflow-x-auto border-b px-4 py-3 tablet:px-6',
+          ? 'border-r'
+          : 'flex flex-col items-start gap-3 border-b px-4 py-3 tablet:flex-row tablet:gap-5 tablet:px-6',
       )}
     >
-      <ol className={inColumn ? 'flex flex-col gap-4' : 'flex gap-4'}>
-        {pages.map((page, i) => {
-          const isChosen = i + 1 === chosen;
-          return (
-            <li key={i}>
-              <button
-                type="button"
-                aria-current={isChosen ? 'page' : undefined}
-                onClick={() => onChoose(i + 1)}
-                className="block text-left"
-                style={{ width: widthPx }}
-              >
-                <span
-                  className={classNames(
-                    'flex justify-center border bg-sunk',
-                    isChosen ? 'border-teal outline-2 outline-teal' : 'border-rule-strong',
-                  )}
+      <div className={inColumn ? 'sticky top-0 max-h-dvh overflow-y-auto px-5 py-5' : 'contents'}>
+        <ol
+          className={classNames(
+            'flex gap-4',
+            inColumn ? 'flex-col' : '-m-1 max-w-full min-w-0 overflow-x-auto p-1',
+          )}
+        >
+          {pages.map((page, i) => {
+            const isChosen = i + 1 === chosen;
+            return (
+              <li key={i}>
+                <button
+                  type="button"
+                  aria-current={isChosen ? 'page' : undefined}
+                  onClick={() => onChoose(i + 1)}
+                  className="block text-left"
+                  style={{ width: room.width + 2 }}
                 >
-                  <Thumbnail page={page} widthPx={widthPx - 2} />
-                </span>
-                <span className="mt-1.5 flex justify-between gap-2 text-dense">
                   <span
-                    className={classNames('min-w-0 break-words', isChosen && 'font-semibold text-teal-dark')}
+                    className={classNames(
+                      'flex justify-center border bg-sunk',
+                      isChosen ? 'border-teal outline-2 outline-teal' : 'border-rule-strong',
+                    )}
                   >
-                    {page.label}
+                    <PageCanvas
+                      page={page}
+                      pxPerMm={Math.min(room.width / page.widthMm, room.height / page.heightMm)}
+                    />
                   </span>
-                  <span className="font-mono text-ink-3">{i + 1}</span>
-                </span>
-              </button>
-            </li>
-          );
-        })}
-      </ol>
-      <div className={inColumn ? 'mt-5' : 'self-center'}>{children}</div>
+                  <span className="mt-1.5 flex justify-between gap-2 text-dense">
+                    <span
+                      className={classNames(
+                        'min-w-0 break-words',
+                        isChosen && 'font-semibold text-teal-dark',
+                      )}
+                    >
+                      {page.label}
+                    </span>
+                    <span className="font-mono text-ink-3">{i + 1}</span>
+                  </span>
+                </button>
+              </li>
+            );
+          })}
+        </ol>
+        <div className={inColumn ? 'mt-5' : 'shrink-0 tablet:self-center'}>{children}</div>
+      </div>
     </nav>
   );
 }

@@ -74,9 +74,6 @@ export function SheetTitleBar({ strips, sheets, files, page, pages, ready }: She
     <header className="flex flex-wrap items-center gap-x-4 gap-y-2 border-b border-rule px-4 py-3 tablet:px-6">
       <Title strips={strips} />
       <div className="flex flex-wrap items-center gap-2">
-        <span role="status" className="text-dense text-ink-3">
-          {files.making && `Making the ${formatNames[files.making.format]} …`}
-        </span>
         <Button disabled={off} onClick={() => void files.copyPicture(page)}>
           Copy picture
         </Button>
@@ -103,6 +100,9 @@ export function SheetTitleBar({ strips, sheets, files, page, pages, ready }: She
         <Button kind="primary" disabled={!ready} onClick={() => window.print()}>
           {sheets === 'both' ? 'Print both' : 'Print'}
         </Button>
+        <span role="status" className="text-dense text-ink-3 empty:-ml-2 wide:order-first">
+          {files.making && `Making the ${formatNames[files.making.format]} …`}
+        </span>
       </div>
     </header>
   );

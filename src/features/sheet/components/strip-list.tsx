@@ -1,3 +1,4 @@
+import { useRef } from 'react';
 import { Link } from 'react-router-dom';
 import type { Strip } from '../../../../shared/api/strips';
 import { mostSheetStrips } from '../../../../shared/api/sheets';
@@ -16,11 +17,33 @@ function moved(ids: readonly string[], from: number, to: number): string[] {
   return [...rest.slice(0, to), ids[from], ...rest.slice(to)];
 }
 
+/** Stays where it is when there is nowhere to go, so that the focus does too. */
+function MoveButton({ word, title, to }: { word: string; title: string; to: (() => void) | null }) {
+  return (
+    <Button
+      small
+      kind="quiet"
+      aria-label={`${word}: ${title}`}
+      aria-disabled={to === null}
+      onClick={to ?? undefined}
+      className="aria-disabled:text-ink-3"
+    >
+      {word}
+    </Button>
+  );
+}
+
 /** The strips in the order of their pages: to move, take off and open. */
 export function StripList({ strips, onChange }: StripListProps) {
   const ids = strips.map(({ id }) => id);
+  const list = useRef<HTMLElement>(null);
+  const takeOff = (id: string): void => {
+    // The button goes with its strip; the focus stays with the list.
+    list.current?.focus();
+    onChange(ids.filter((one) => one !== id));
+  };
   return (
-    <section aria-label="Strips" className="flex flex-col gap-2">
+    <section ref={list} tabIndex={-1} aria-label="Strips" className="flex flex-col gap-2">
       <h2 className="flex items-baseline justify-between text-body font-semibold">
         Strips
         <span className="text-caption font-normal text-ink-3">
@@ -38,32 +61,17 @@ export function StripList({ strips, onChange }: StripListProps) {
             </span>
             {strips.length > 1 && (
               <span className="-mb-0.5 -ml-2.5 flex">
-                {i > 0 && (
-                  <Button
-                    small
-                    kind="quiet"
-                    aria-label={`Up: ${title}`}
-                    onClick={() => onChange(moved(ids, i, i - 1))}
-                  >
-                    Up
-                  </Button>
-                )}
-                {i < strips.length - 1 && (
-                  <Button
-                    small
-                    kind="quiet"
-                    aria-label={`Down: ${title}`}
-                    onClick={() => onChange(moved(ids, i, i + 1))}
-                  >
-                    Down
-                  </Button>
-                )}
-                <Button
-                  small
-                  kind="quiet"
-                  aria-label={`Take off: ${title}`}
-                  onClick={() => onChange(ids.filter((one) => one !== id))}
-                >
+                <MoveButton
+                  word="Up"
+                  title={title}
+                  to={i > 0 ? () => onChange(moved(ids, i, i - 1)) : null}
+                />
+                <MoveButton
+                  word="Down"
+                  title={title}
+                  to={i < ids.length - 1 ? () => onChange(moved(ids, i, i + 1)) : null}
+                />
+                <Button small kind="quiet" aria-label={`Take off: ${title}`} onClick={() => takeOff(id)}>
                   Take off
                 </Button>
               </span>

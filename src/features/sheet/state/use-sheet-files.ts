@@ -48,6 +48,8 @@ export function useSheetFiles(
   const toast = useToast();
   const title = document?.title ?? '';
   const making = useMutation({
+    // Without a connection it fails and says so, instead of waiting silently for one.
+    networkMode: 'always',
     mutationFn: (wanted: WantedFile) =>
       requestSheets({
         strips: stripIds.map((stripId) => ({ stripId })),
