@@ -18,6 +18,12 @@ export const sheetDpis = [150, 300, 600] as const;
 export type SheetDpi = (typeof sheetDpis)[number];
 export const usualSheetDpi: SheetDpi = 300;
 
+/**
+ * Pages in an archive of PNG, at most: what can be painted well within the time a document may take (measured: about
+ * 0.3 s a page at 300 dots per inch). PDF and SVG have no such limit.
+ */
+export const mostArchivePages: Readonly<Record<SheetDpi, number>> = { 150: 200, 300: 100, 600: 30 };
+
 /** A saved strip by its id, or parameters with the words that go with them. */
 const sheetStripSchema = z
   .strictObject({

@@ -157,6 +157,14 @@ describe('sheets are refused', () => {
     ]);
   });
 
+  it('as an archive of more pictures than there is time for', { timeout: 60_000 }, async () => {
+    const strips = new Array(2).fill({ parameters: { durationS: 60 } });
+    const body = { ...request, strips, setup: { layout: '12x1' }, format: 'png', dpi: 600 };
+    const [problem] = await refused(body);
+    expect(problem).toMatchObject({ path: 'page', value: 'missing' });
+    expect(problem.allowed).toMatch(/^1 to \d+; all pages at once up to 30 at 600 dpi$/u);
+  });
+
   it('for strips that are too long together', async () => {
     const strips = new Array(3).fill({ parameters: { durationS: 250 } });
     expect(await refused({ ...request, strips })).toEqual([

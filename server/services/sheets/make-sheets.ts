@@ -3,11 +3,12 @@ import {
   sheetFileName,
   sheetLengthProblem,
   usualSheetDpi,
+  type SheetDpi,
   type SheetsRequest,
 } from '../../../shared/api/sheets';
 import { untitled } from '../../../shared/paper/header';
 import { longestDrawnS } from '../../../shared/paper/layout';
-import { invalidInput } from '../../errors';
+import { invalidInput, type AppError } from '../../errors';
 import type { Database } from '../../models/database';
 import type { SheetTaskStrip } from '../../workers/sheet-worker';
 import type { Account } from '../session/account';
@@ -64,6 +65,18 @@ function mustBeShort(asked: readonly RequestStrip[], strips: readonly SheetTaskS
   ]);
 }
 
+/** The refusal of a page that is not there, or of all pages where they are too many for an archive. */
+function wrongPage(
+  page: number | null,
+  dpi: SheetDpi,
+  { pages, mostPages }: { pages: number; mostPages?: number },
+): AppError {
+  const there = pages === 1 ? '1: the document has one page' : `1 to ${pages}`;
+  const tooMany = `${there}; all pages at once up to ${mostPages} at ${dpi} dpi`;
+  const allowed = mostPages === undefined ? there : tooMany;
+  return invalidInput([{ path: 'page', value: page === null ? 'missing' : String(page), allowed }]);
+}
+
 /**
  * Strips on pages as a file, rendered in a worker thread. Throws `notFound` for a strip the account may not see,
  * `invalidInput` for strips that are too long and for a page that is not there, and what `SheetPool.make` throws.
@@ -82,10 +95,7 @@ export async function makeSheets(
     { strips, setup, format, page, dpi, organisation, madeAt: now() },
     signal,
   );
-  if (!made.ok) {
-    const allowed = made.pages === 1 ? '1: the document has one page' : `1 to ${made.pages}`;
-    throw invalidInput([{ path: 'page', value: String(page), allowed }]);
-  }
+  if (!made.ok) throw wrongPage(page, dpi, made);
   const { bytes, title, zipped } = made;
   return {
     fileName: sheetFileName(title, { format, page, zipped }),

@@ -1,6 +1,6 @@
 import { Link } from 'react-router-dom';
 import type { Strip } from '../../../../shared/api/strips';
-import { sheetDpis, usualSheetDpi } from '../../../../shared/api/sheets';
+import { mostArchivePages, sheetDpis, usualSheetDpi } from '../../../../shared/api/sheets';
 import type { PageSetup } from '../../../../shared/parameters/page-setup';
 import { Button, buttonClass } from '../../../components/button';
 import { Menu, MenuItem } from '../../../components/menu';
@@ -91,6 +91,7 @@ export function SheetTitleBar({ strips, sheets, files, page, pages, ready }: She
             </MenuItem>
           ))}
           {pages > 1 &&
+            pages <= mostArchivePages[usualSheetDpi] &&
             item(`All ${pages} pages, ${usualSheetDpi} dpi, as ZIP`, {
               format: 'png',
               page: null,
