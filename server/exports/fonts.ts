@@ -1,4 +1,6 @@
+import { readFileSync } from 'node:fs';
 import { createRequire } from 'node:module';
+import type PDFDocument from 'pdfkit';
 
 const require = createRequire(import.meta.url);
 
@@ -10,3 +12,16 @@ export const fontFiles = {
   mono400: require.resolve('@expo-google-fonts/ibm-plex-mono/400Regular/IBMPlexMono_400Regular.ttf'),
   mono500: require.resolve('@expo-google-fonts/ibm-plex-mono/500Medium/IBMPlexMono_500Medium.ttf'),
 } as const;
+
+/**
+ * Bytes of nothing after a font file. The blank of the fixed-pitch cuts is an empty outline at the very end of the file, and
+ * PDFKit's font reader looks for the ten bytes of an outline's header there, which would run past the end.
+ */
+const paddingBytes = 16;
+
+/** Makes the cuts known to a PDF by their names here. */
+export function registerFonts(doc: InstanceType<typeof PDFDocument>): void {
+  for (const [name, file] of Object.entries(fontFiles)) {
+    doc.registerFont(name, Buffer.concat([readFileSync(file), Buffer.alloc(paddingBytes)]));
+  }
+}

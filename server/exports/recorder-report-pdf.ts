@@ -8,7 +8,7 @@ import {
   summary,
   type ReportOrigin,
 } from '../../shared/recorder-bench/report';
-import { fontFiles } from './fonts';
+import { registerFonts, type fontFiles } from './fonts';
 
 /** Points a millimetre. */
 const mm = 72 / 25.4;
@@ -135,7 +135,7 @@ export function recorderReportPdf(conformance: Conformance, origin: ReportOrigin
       CreationDate: new Date(`${origin.madeOn}T00:00:00Z`),
     },
   });
-  for (const [name, file] of Object.entries(fontFiles)) doc.registerFont(name, file);
+  registerFonts(doc);
   const parts: Uint8Array[] = [];
   doc.on('data', (part: Uint8Array) => parts.push(part));
   const ended = new Promise<Uint8Array>((done) => doc.on('end', () => done(Buffer.concat(parts))));

@@ -1,11 +1,10 @@
 import PDFDocument from 'pdfkit';
 import { educationCaution, syntheticCaution } from '../../shared/paper/cautions';
 import type { DrawingItem, PolygonItem, PolylineItem, TextItem } from '../../shared/paper/drawing';
-import { monoAdvance } from '../../shared/paper/font-advances';
 import type { SheetDocument, SheetPage } from '../../shared/paper/pages/sheet-document';
 import { mmPerInch } from '../../shared/paper/paper-scale';
 import { colourValue, type PaperColour } from '../../shared/paper/tokens';
-import { fontFiles } from './fonts';
+import { registerFonts, type fontFiles } from './fonts';
 
 /** Points a millimetre: a PDF point is 1/72 inch (ISO 32000-1, 8.3.2.3). */
 const ptPerMm = 72 / mmPerInch;
@@ -30,31 +29,16 @@ function paint(doc: Doc, fill: PaperColour | null, stroke: PaperColour | null, w
   else if (stroke) doc.stroke(colourValue(stroke));
 }
 
-/** One run of text from its left end on its baseline. */
-function paintRun(doc: Doc, text: string, xMm: number, yMm: number, characterSpacing: number): void {
-  doc.text(text, xMm, yMm, { lineBreak: false, baseline: 'alphabetic', characterSpacing });
-}
-
-/**
- * Words of the fixed-pitch font one by one: its space is an empty outline at the very end of the file, which the font
- * reader runs past.
- */
-function paintMono(doc: Doc, item: TextItem, share: number): void {
-  const advanceMm = (monoAdvance / 1000 + (item.trackingEm ?? 0)) * item.sizeMm;
-  let xMm = item.xMm - share * [...item.text].length * advanceMm;
-  for (const word of item.text.split(' ')) {
-    if (word !== '') paintRun(doc, word, xMm, item.yMm, 0);
-    xMm += ([...word].length + 1) * advanceMm;
-  }
-}
-
 function paintText(doc: Doc, item: TextItem): void {
   doc.font(fontNames[item.family][item.weight]).fontSize(item.sizeMm).fillColor(colourValue(item.colour));
-  const share = { start: 0, middle: 0.5, end: 1 }[item.anchor];
-  if (item.family === 'mono') return paintMono(doc, item, share);
   const characterSpacing = (item.trackingEm ?? 0) * item.sizeMm;
   const widthMm = doc.widthOfString(item.text, { characterSpacing });
-  paintRun(doc, item.text, item.xMm - share * widthMm, item.yMm, characterSpacing);
+  const share = { start: 0, middle: 0.5, end: 1 }[item.anchor];
+  doc.text(item.text, item.xMm - share * widthMm, item.yMm, {
+    lineBreak: false,
+    baseline: 'alphabetic',
+    characterSpacing,
+  });
 }
 
 function paintItem(doc: Doc, item: DrawingItem): void {
@@ -111,7 +95,7 @@ export function sheetPdf(document: SheetDocument, { madeAt }: { madeAt: Date }):
       CreationDate: madeAt,
     },
   });
-  for (const [name, file] of Object.entries(fontFiles)) doc.registerFont(name, file);
+  registerFonts(doc);
   const parts: Uint8Array[] = [];
   doc.on('data', (part: Uint8Array) => parts.push(part));
   const ended = new Promise<Uint8Array>((done) => doc.on('end', () => done(Buffer.concat(parts))));

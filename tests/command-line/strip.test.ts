@@ -24,13 +24,14 @@ describe('strip command', () => {
       '--out',
       out(),
       '--formats',
-      'csv,events,reading,svg,png',
+      'csv,events,reading,svg,png,pdf',
     ]);
     expect([status, stderr]).toEqual([0, '']);
     expect(readdirSync(out()).sort()).toEqual([
       'events.json',
       'reading.json',
       'strip.csv',
+      'strip.pdf',
       'strip.png',
       'strip.svg',
     ]);
@@ -42,6 +43,7 @@ describe('strip command', () => {
     expect(events.filter((event) => event.type === 'stimulus').length).toBeGreaterThan(20);
     expect(JSON.parse(read('reading.json'))).toMatchObject({ avIntervalMs: 180 });
     expect(read('strip.svg')).toContain('Synthetic teaching strip, not a patient recording');
+    expect(readFileSync(join(out(), 'strip.pdf')).toString('latin1', 0, 8)).toBe('%PDF-1.7');
     expect(decodePng(readFileSync(join(out(), 'strip.png'))).widthPx).toBeGreaterThan(1000);
   });
 

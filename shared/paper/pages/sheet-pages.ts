@@ -1,5 +1,5 @@
 import type { PageSetup } from '../../parameters/page-setup';
-import { expectedNotes, flowHeightMm, paginate, type FlowItem } from './flow';
+import { expectedNotes, flowHeightMm, paginate, roomiest, type FlowItem } from './flow';
 import { pageFrame } from './page-frame';
 import { finishPage, pageHead, roomMm, stripHeading, type PageDraft, type PageWords } from './page-furniture';
 import type { SheetDocument, SheetKind, SheetMade, SheetPage, SheetSubject } from './sheet-document';
@@ -66,12 +66,13 @@ function named(flow: readonly FlowItem[], name: string): FlowItem[] {
   }));
 }
 
-/** A long strip over as few pages as its rows allow without crowding, as roomy as that leaves them. */
+/** A long strip over as few pages as its rows allow without much crowding, each page then as roomy as it can be. */
 function fewestPages(plan: StripPlan, room: number): FlowItem[][] {
   const choices = planSpacings(plan)
     .filter((spacing, _, [{ pitchMm }]) => spacing.pitchMm >= pitchMm * leastCrowdedShare)
     .map((spacing) => paginate(stripFlow(plan, spacing, room), room));
-  return choices.reduce((best, pages) => (pages.length < best.length ? pages : best));
+  const fewest = choices.reduce((best, pages) => (pages.length < best.length ? pages : best));
+  return fewest.map((page) => roomiest(page, planSpacings(plan), room));
 }
 
 /** One strip on one page where any spacing allows it, else over as many pages as it takes. */

@@ -23,22 +23,36 @@ const failureWords: Readonly<Record<CaptureFailure, string>> = {
   fault: ', no capture',
 };
 
-function nameOf(stimulus: StimulusEvent, bothVentricles: boolean): string {
+/** Slack for times that are whole microseconds kept as seconds. */
+const sameTimeS = 1e-9;
+
+/** Whether a stimulus shares its beat with a front of the heart's own. */
+function fuses({ timeS, chamber }: StimulusEvent, events: readonly StripEvent[]): boolean {
+  return events.some(
+    (event) =>
+      event.type === 'depolarization' &&
+      event.fusion &&
+      event.sources.some((source) => source.site === chamber && Math.abs(source.timeS - timeS) < sameTimeS),
+  );
+}
+
+function nameOf(stimulus: StimulusEvent, bothVentricles: boolean, events: readonly StripEvent[]): string {
   const { chamber, reason, pseudofusion } = stimulus;
   const ventricular = chamber === 'rightVentricle' || chamber === 'leftVentricle';
   const words = ventricular && !bothVentricles ? 'ventricular stimulus' : chamberWords[chamber];
   if (pseudofusion) return `${words}, pseudofusion`;
-  return words + (reason ? failureWords[reason] : '');
+  if (reason) return words + failureWords[reason];
+  return fuses(stimulus, events) ? `${words}, fusion` : words;
 }
 
-/** The first stimulus of every kind among `events`: by chamber, and by why it did not capture. */
+/** The first stimulus of every kind among `events`: by chamber, and by fusion or why it did not capture. */
 export function namedStimuli(events: readonly StripEvent[]): NamedStimulus[] {
   const stimuli = events.filter((event) => event.type === 'stimulus');
   const chambers = new Set(stimuli.map((stimulus) => stimulus.chamber));
   const both = chambers.has('rightVentricle') && chambers.has('leftVentricle');
   const named = new Map<string, NamedStimulus>();
   for (const stimulus of stimuli) {
-    const text = nameOf(stimulus, both);
+    const text = nameOf(stimulus, both, events);
     if (named.has(text)) continue;
     const widthMm = textWidthMm(text, textStyles.stimulusName);
     named.set(text, { timeS: stimulus.timeS, atrial: stimulus.chamber === 'atrium', text, widthMm });

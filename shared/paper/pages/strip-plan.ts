@@ -2,23 +2,15 @@ import { ladderOf } from '../../ladder/ladder';
 import { leadNames } from '../../parameters/sheet';
 import { untitled } from '../header';
 import { stripDurationS } from '../paper-strip';
-import type { FlowItem } from './flow';
+import { flowHeightMm, type FlowItem } from './flow';
 import { intervalsOf, type Interval } from './intervals';
 import type { PageWords } from './page-furniture';
 import { planLines } from './page-lines';
 import { pageRows } from './page-rows';
 import type { SheetKind, SheetSubject } from './sheet-document';
+import { spacingsOf, type Spacing } from './spacing';
 import { namedStimuli, type NamedStimulus } from './stimulus-names';
-import {
-  drawPart,
-  laySystem,
-  partOf,
-  spacingsOf,
-  type Spacing,
-  type System,
-  type SystemContext,
-  type SystemPart,
-} from './system';
+import { drawPart, laySystem, partOf, type System, type SystemContext, type SystemPart } from './system';
 import { answerLinesFlow, readingFlow } from './tail';
 
 /** Between the lines of a strip where a line has several rows or a ladder, mm. */
@@ -65,8 +57,10 @@ function laySystems(
 ): System[] {
   const { setup, strip } = context;
   const { reading, events = [] }: SheetSubject['strip'] = strip;
-  const stimuli: NamedStimulus[] = answer && setup.stimuliNamed ? namedStimuli(events) : [];
-  let intervals: Interval[] = answer && setup.intervals ? intervalsOf(reading?.beats ?? [], events) : [];
+  const { toS } = lines[lines.length - 1];
+  const shown = events.filter(({ timeS }) => timeS < toS);
+  const stimuli: NamedStimulus[] = answer && setup.stimuliNamed ? namedStimuli(shown) : [];
+  let intervals: Interval[] = answer && setup.intervals ? intervalsOf(reading?.beats ?? [], shown) : [];
   const ladder = answer && setup.ladder ? ladderOf(events) : null;
   return lines.map((line, i) => {
     const { system, kinds } = laySystem(context, line, i, { stimuli, intervals, ladder });
@@ -121,18 +115,26 @@ function partFlow(part: SystemPart, plan: StripPlan, gapMm: number): FlowItem {
     return { items, notes, system: { subject: plan.index, ...placed } };
   };
   const expects = [...(part.crowded ? [crowdedNote] : []), ...(part.cut ? [longestCutNote] : [])];
-  return { heightMm: part.heightMm, gapMm, expects, draw };
+  const respaced = (spacing: Spacing): FlowItem =>
+    partFlow(partOf(part.system, spacing, part.fromRow, part.toRow), plan, gapMm);
+  return { heightMm: part.heightMm, gapMm, expects, respaced, draw };
 }
 
 /** The systems of a plan at a spacing, rows broken where a page of `roomMm` cannot hold them, then what follows them. */
 export function stripFlow(plan: StripPlan, spacing: Spacing, roomMm = Infinity): FlowItem[] {
   const { systems, tail } = plan;
   const close = systems[0].rows.length === 1 && !systems[0].ladder;
-  const parts = systems.flatMap((system) => partsOf(system, spacing, roomMm));
-  return [...parts.map((part) => partFlow(part, plan, close ? 0 : systemGapMm)), ...tail];
+  const tailMm = tail.length > 0 ? flowHeightMm(tail) + tail[0].gapMm : 0;
+  // What follows the strip should find room under its last rows.
+  const lastRoomMm = tailMm < roomMm / 2 ? roomMm - tailMm : roomMm;
+  const parts = systems.flatMap((system, i) =>
+    partsOf(system, spacing, i === systems.length - 1 ? lastRoomMm : roomMm),
+  );
+  const rows = parts.map((part) => partFlow(part, plan, close ? 0 : systemGapMm));
+  return [...rows, ...tail.map((item, i) => ({ ...item, keep: i === 0 }))];
 }
 
 /** Spacings to try for a plan, roomiest first. */
 export function planSpacings(plan: StripPlan): Spacing[] {
-  return spacingsOf(plan.systems);
+  return spacingsOf(Math.max(...plan.systems.map((system) => system.pitchMm)));
 }

@@ -9,25 +9,26 @@ import { largeBoxMm } from '../paper-scale';
 import type { PaperStrip } from '../paper-strip';
 import type { PlacedSegment } from '../placed-segment';
 import { layRow, leadChangeStroke, stoppedLeads, traceItems, type Row } from '../row';
-import { clearanceMm, leastPitchMm, rowGapMm, rowSpacing, toLargeBoxes } from '../row-spacing';
+import { clearanceMm, rowGapMm, rowSpacing, toLargeBoxes } from '../row-spacing';
 import type { RowProfile } from '../row-profile';
 import { textWidthMm } from '../text';
 import { textStyles } from '../text-styles';
 import { capHeightEm } from '../tokens';
-import { intervalItems, stimulusNameItems, type AnnotatedRow } from './annotations';
+import type { AnnotatedRow } from './annotated-row';
+import { intervalItems } from './dimension-lines';
 import type { Interval } from './intervals';
 import type { PageFrame } from './page-frame';
 import { lineSegments, type PageLine } from './page-lines';
 import type { LeadCell } from './page-rows';
 import type { PlacedSystem } from './sheet-document';
+import type { Spacing } from './spacing';
+import { stimulusNameItems } from './stimulus-name-items';
 import type { NamedStimulus } from './stimulus-names';
 
 /** Room for a ladder under a grid, mm. */
 const ladderBandMm = Math.ceil(ladderHeightMm / largeBoxMm) * largeBoxMm;
 /** Annotations pass beside ink that reaches further than this, mm. */
 const tallMm = 24;
-/** Rows may stand this much closer than their ink asks for, share, where that saves a page. */
-const closest = 0.55;
 /** Least room above the first line and below the last where paper is short, mm. */
 const trimmedEdgeMm = 10;
 /** Lane names need this much room left of the traces, mm; elsewhere they are letters. */
@@ -121,40 +122,6 @@ export function laySystem(
     ladder: marks.ladder,
   };
   return { system, kinds };
-}
-
-/** How rows are spaced: each as far from the next as its ink asks for, between these. */
-export interface Spacing {
-  leastMm: number;
-  pitchMm: number;
-  /** Room at the edges of a grid as its ink asks for instead of a usual one. */
-  trimmed: boolean;
-  /** Most room above the first line and below the last, mm; where it bites, traces are cut at the edge. */
-  edgeLimitMm?: number;
-}
-
-/** `fromMm`, and large box by large box down to `toMm`. */
-function descending(fromMm: number, toMm: number): number[] {
-  const count = Math.max(0, Math.floor((fromMm - toMm) / largeBoxMm) + 1);
-  return Array.from({ length: count }, (_, i) => fromMm - i * largeBoxMm);
-}
-
-/**
- * Spacings to try, roomiest first: even, then with trimmed edges, then less and less even where the ink allows it, then rows
- * that stand closer than their ink asks for.
- */
-export function spacingsOf(systems: readonly System[]): Spacing[] {
-  const pitchMm = Math.max(...systems.map((system) => system.pitchMm));
-  const closestMm = Math.max(leastPitchMm, closest * pitchMm);
-  return [
-    { leastMm: pitchMm, pitchMm, trimmed: false },
-    ...descending(pitchMm, leastPitchMm).map((leastMm) => ({ leastMm, pitchMm, trimmed: true })),
-    ...descending(pitchMm - largeBoxMm, closestMm).map((closerMm) => ({
-      leastMm: leastPitchMm,
-      pitchMm: closerMm,
-      trimmed: true,
-    })),
-  ];
 }
 
 /** Some rows of a system as they lie under each other on one page, from the upper edge of their grid. */
