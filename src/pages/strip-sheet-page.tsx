@@ -1,5 +1,5 @@
 import { useQueries, useQuery, type UseQueryResult } from '@tanstack/react-query';
-import { useMemo } from 'react';
+import { useMemo, useState } from 'react';
 import { useNavigate, useParams, useSearchParams } from 'react-router-dom';
 import type { Strip } from '../../shared/api/strips';
 import { pageSetupOf, type PageSetup } from '../../shared/parameters/page-setup';
@@ -36,36 +36,51 @@ function hasUnsaved({ id, parameters }: Strip): boolean {
   return draft !== null && JSON.stringify(draft.parameters) !== JSON.stringify(parameters);
 }
 
+/** What was chosen, at once; the address follows, and leads when somebody goes back. */
+function useChosen(address: SheetAddress): [SheetAddress, (next: SheetAddress) => void] {
+  const [chosen, setChosen] = useState(address);
+  const [followed, setFollowed] = useState(address);
+  if (address !== followed) {
+    setFollowed(address);
+    setChosen(address);
+  }
+  return [chosen, setChosen];
+}
+
 function Sheet({ first, address }: { first: Strip; address: SheetAddress }) {
   const navigate = useNavigate();
   const { data: user } = useQuery(sessionQuery);
-  const others = useQueries({ queries: address.others.map(stripQuery), combine: joinOthers });
+  const [chosen, setChosen] = useChosen(address);
+  const others = useQueries({ queries: chosen.others.map(stripQuery), combine: joinOthers });
   const strips = useMemo(() => [first, ...others.strips], [first, others.strips]);
   const setup = useMemo(
-    () => ({ ...pageSetupOf(first.parameters.sheet), ...address.chosen }),
-    [first.parameters.sheet, address.chosen],
+    () => ({ ...pageSetupOf(first.parameters.sheet), ...chosen.chosen }),
+    [first.parameters.sheet, chosen.chosen],
   );
-  const go = (stripId: string, change: Partial<SheetAddress>, replace: boolean): void =>
-    void navigate(paths.sheet(stripId, writeSheetAddress({ ...address, ...change })), {
-      replace,
-      preventScrollReset: true,
-    });
-  const changeSetup = (change: Partial<PageSetup>): void =>
-    go(first.id, { chosen: { ...address.chosen, ...change } }, true);
+  const go = (stripId: string, next: SheetAddress, replace: boolean): void =>
+    void navigate(paths.sheet(stripId, writeSheetAddress(next)), { replace, preventScrollReset: true });
+  const change = (changes: Partial<SheetAddress>): void => {
+    const next = { ...chosen, ...changes };
+    setChosen(next);
+    go(first.id, next, true);
+  };
+  const changeSetup = (changes: Partial<PageSetup>): void =>
+    change({ chosen: { ...chosen.chosen, ...changes } });
   // What the first strip would decide is written down, so that another first strip changes nothing.
-  const changeStrips = ([next, ...rest]: string[]): void => go(next, { others: rest, chosen: setup }, false);
+  const changeStrips = ([next, ...rest]: string[]): void =>
+    go(next, { ...chosen, others: rest, chosen: setup }, false);
   return (
     <SheetDesigner
       strips={strips}
       fetching={others.fetching}
-      missing={others.missing.map(({ words }, i) => ({ id: address.others[others.failedAt[i]], words }))}
+      missing={others.missing.map(({ words }, i) => ({ id: chosen.others[others.failedAt[i]], words }))}
       unsaved={strips.filter(hasUnsaved).map(({ title }) => title)}
       setup={setup}
       organisation={user?.organisation ?? ''}
-      page={address.page}
+      page={chosen.page}
       onSetup={changeSetup}
       onStrips={changeStrips}
-      onPage={(page) => go(first.id, { page }, true)}
+      onPage={(page) => change({ page })}
     />
   );
 }

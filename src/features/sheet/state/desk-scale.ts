@@ -6,8 +6,12 @@ export type DeskView = 'whole' | 'close';
 
 /** A page is shown no higher than this, CSS px, so that most of an upright one is seen at once. */
 const mostHeightPx = 900;
-/** From here on 1 mm lines are drawn, and every millimetre gets the same whole number of device pixels. */
+/**
+ * From here on 1 mm lines are drawn, and every millimetre gets the same whole number of device pixels; not on a small
+ * screen, where size matters more.
+ */
 const leastWholePx = 3;
+const smallDeskPx = 480;
 
 /**
  * CSS pixels a millimetre for a page on a desk of `roomPx`: whole device pixels where the 1 mm grid is drawn (so that
@@ -22,7 +26,7 @@ export function deskScale(
   if (view === 'close') return desktopPxPerMm;
   const fits = Math.min(roomPx / widthMm, mostHeightPx / heightMm);
   const devicePx = Math.floor(fits * deviceRatio);
-  return devicePx >= leastWholePx ? devicePx / deviceRatio : fits;
+  return devicePx >= leastWholePx && roomPx > smallDeskPx ? devicePx / deviceRatio : fits;
 }
 
 /** Size on a screen of 96 CSS pixels to the inch beside that on paper, whole per cent. */
