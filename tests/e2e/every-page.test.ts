@@ -23,6 +23,12 @@ const seen = (page: Page, text: string): Promise<void> => page.getByText(text).f
 const openGroup = (page: Page, name: string): Promise<void> =>
   page.getByRole('region', { name: 'Parameters' }).getByRole('button', { name }).click();
 
+/** Every strip is drawn, so that files can be made, and the buttons have come to their colours. */
+async function sheetReady(page: Page): Promise<void> {
+  await page.locator('button:enabled', { hasText: /^Print/u }).waitFor();
+  await page.evaluate(() => Promise.all(document.getAnimations().map(({ finished }) => finished)));
+}
+
 const states: State[] = [
   {
     name: 'library',
@@ -103,14 +109,14 @@ const states: State[] = [
     name,
     path: `/strips/av-sequential-pacing/sheet${search}`,
     async ready(page) {
-      await page.getByRole('region', { name: 'Page', exact: true }).getByRole('img').waitFor();
+      await sheetReady(page);
       if (name.endsWith('gone')) await seen(page, 'A strip of these sheets is not there.');
     },
   })),
   {
     name: 'sheet, closer, adding a strip',
     path: '/strips/av-sequential-pacing/sheet',
-    ready: (page) => page.getByRole('region', { name: 'Page', exact: true }).getByRole('img').waitFor(),
+    ready: sheetReady,
     async act(page) {
       await page.getByRole('radio', { name: 'Closer' }).click();
       await page.getByRole('button', { name: 'Add a strip' }).click();
