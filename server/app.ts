@@ -17,6 +17,7 @@ import { registerRoutes } from './routes/register-routes';
 import { sessionRoutes } from './routes/session/session-routes';
 import { recorderRoutes } from './routes/recorder/recorder-routes';
 import { presetRoutes } from './routes/presets/preset-routes';
+import { sheetRoutes } from './routes/sheets/sheet-routes';
 import { renderRoutes } from './routes/strips/render-routes';
 import { stripRoutes } from './routes/strips/strip-routes';
 import type { ExportFiles } from './services/exports/export-files';
@@ -24,6 +25,7 @@ import type { ExportRunner } from './services/exports/export-runner';
 import type { ReportPool } from './services/recorder/report-pool';
 import type { RenderPool } from './services/rendering/render-pool';
 import { findSession } from './services/session/sessions';
+import type { SheetPool } from './services/sheets/sheet-pool';
 
 export interface AppDependencies {
   database: Database;
@@ -34,6 +36,7 @@ export interface AppDependencies {
   /** Works exports off; started and closed by whoever made it. */
   exportRunner: ExportRunner;
   exportFiles: ExportFiles;
+  sheetPool: SheetPool;
   /** Of package.json; stands on reports. */
   productVersion: string;
   logger: Logger;
@@ -47,9 +50,9 @@ export interface AppDependencies {
 
 /** The whole application, not listening. */
 export function createApp(dependencies: AppDependencies): Express {
-  const { database, sessionSecret, renderPool, reportPool, productVersion, logger, clientDirectory } =
-    dependencies;
   const { exportRunner: runner, exportFiles: files } = dependencies;
+  const { database, sessionSecret, renderPool, reportPool, sheetPool } = dependencies;
+  const { productVersion, logger, clientDirectory } = dependencies;
   const { now = () => new Date(), signInLimits = usualSignInLimits, trustedProxies = 0 } = dependencies;
   const session = { database, secret: sessionSecret, now };
 
@@ -84,6 +87,7 @@ export function createApp(dependencies: AppDependencies): Express {
     ...recorderRoutes({ reportPool, productVersion, now }),
     ...exportRoutes({ database, runner, files, now }),
     ...presetRoutes({ database, now }),
+    ...sheetRoutes({ database, sheetPool, now }),
     ...stripRoutes({ database, now }),
   });
   app.use('/api', noSuchRoute);

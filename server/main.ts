@@ -15,6 +15,7 @@ import { createExportPool } from './services/exports/export-pool';
 import { createExportRunner, exportLanes } from './services/exports/export-runner';
 import { createReportPool } from './services/recorder/report-pool';
 import { createRenderPool } from './services/rendering/render-pool';
+import { createSheetPool } from './services/sheets/sheet-pool';
 import { loadSessionSecret } from './services/session/session-secret';
 import { shipGallery } from './services/strips/ship-gallery';
 import { roleNames } from '../shared/api/roles';
@@ -58,6 +59,7 @@ const exportRunner = createExportRunner({
   logError: (error) => logger.error({ err: error as Error }, 'an export failed'),
 });
 await exportRunner.start();
+const sheetPool = createSheetPool({ workerFile: workerFile('sheet-worker') });
 const app = createApp({
   database,
   sessionSecret,
@@ -65,6 +67,7 @@ const app = createApp({
   reportPool,
   exportRunner,
   exportFiles,
+  sheetPool,
   productVersion: packageVersion(),
   logger,
   clientDirectory: resolve(environment.clientDirectory),
@@ -95,6 +98,7 @@ async function stop(): Promise<void> {
   await renderPool.close();
   await reportPool.close();
   await exportRunner.close();
+  await sheetPool.close();
   await database.close();
   process.exit(0);
 }

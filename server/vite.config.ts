@@ -1,6 +1,6 @@
 import { defineConfig } from 'vite';
 
-// The server as two files for Node: `main.js` and the worker's. Packages stay in node_modules, so that native
+// The server as files for Node: `main.js` and one for each kind of worker. Packages stay in node_modules, so that native
 // code and the worker threads find them; our own TypeScript needs no transpiler at run time.
 export default defineConfig({
   publicDir: false,
@@ -17,6 +17,7 @@ export default defineConfig({
         'render-worker': 'server/workers/render-worker.ts',
         'report-worker': 'server/workers/report-worker.ts',
         'export-worker': 'server/workers/export-worker.ts',
+        'sheet-worker': 'server/workers/sheet-worker.ts',
       },
       output: { entryFileNames: '[name].js', chunkFileNames: 'chunks/[name]-[hash].js' },
     },

@@ -26,6 +26,7 @@ export const routeAccess = {
   'GET /api/exports/:exportId/file': makesStrips,
   'POST /api/exports/:exportId/cancel': makesStrips,
   'POST /api/exports/:exportId/restart': makesStrips,
+  'POST /api/sheets': makesStrips,
   'GET /api/strips': makesStrips,
   'POST /api/strips': makesStrips,
   'POST /api/strips/render': makesStrips,

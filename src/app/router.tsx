@@ -56,6 +56,11 @@ function routes(queryClient: QueryClient): RouteObject[] {
             { path: 'strips/new', loader: forAuthors, lazy: () => import('../pages/strip-editor-page') },
             { path: 'strips/:stripId', loader: forAuthors, lazy: () => import('../pages/strip-editor-page') },
             { path: 'exports', loader: forAuthors, lazy: () => import('../pages/exports-page') },
+            {
+              path: 'strips/:stripId/sheet',
+              loader: forAuthors,
+              lazy: () => import('../pages/strip-sheet-page'),
+            },
             { path: 'recorder', lazy: () => import('../pages/recorder-page') },
             { path: 'help', lazy: () => import('../pages/help-page') },
             { path: '*', Component: LoadingPage, loader: notFound },

@@ -9,6 +9,11 @@ export const paths = {
   newStrip: () => '/strips/new',
   strip: (stripId: string) => `/strips/${encodeURIComponent(stripId)}`,
   exports: () => '/exports',
+  /** The printed sheet of a strip; `search` as the sheet page writes it. */
+  sheet: (stripId: string, search?: URLSearchParams) => {
+    const query = search?.toString();
+    return `/strips/${encodeURIComponent(stripId)}/sheet${query ? `?${query}` : ''}`;
+  },
   recorder: (search?: URLSearchParams) => `/recorder${search ? `?${search.toString()}` : ''}`,
   help: () => '/help',
 } as const;

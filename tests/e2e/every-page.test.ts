@@ -16,6 +16,12 @@ const sizes = [
 const openGroup = (page: Page, name: string): Promise<void> =>
   page.getByRole('region', { name: 'Parameters' }).getByRole('button', { name }).click();
 
+/** Every strip is drawn, so that files can be made, and the buttons have come to their colours. */
+async function sheetReady(page: Page): Promise<void> {
+  await page.locator('button:enabled', { hasText: /^Print/u }).waitFor();
+  await page.evaluate(() => Promise.all(document.getAnimations().map(({ finished }) => finished)));
+}
+
 const states: PageState[] = [
   {
     name: 'library',
@@ -103,6 +109,29 @@ const states: PageState[] = [
     ready: (page) => seen(page, 'offline'),
   },
   ...exportStates(readFileSync('tests/fixtures/preset-file-2.json')),
+  ...[
+    ['sheet', ''],
+    ['sheet of chosen leads, upright', '?orientation=portrait&layout=stacked&leads=II.V1.aVR&page=2'],
+    ['sheets of several strips', '?layout=single&and=demand-pacing-inhibited&and=spikes-over-asystole'],
+    ['sheet with a strip that is gone', '?layout=12x1&and=no-such-strip'],
+  ].map(([name, search]): PageState => ({
+    name,
+    path: `/strips/av-sequential-pacing/sheet${search}`,
+    async ready(page) {
+      await sheetReady(page);
+      if (name.endsWith('gone')) await seen(page, 'A strip of these sheets is not there.');
+    },
+  })),
+  {
+    name: 'sheet, closer, adding a strip',
+    path: '/strips/av-sequential-pacing/sheet',
+    ready: sheetReady,
+    async act(page) {
+      await page.getByRole('radio', { name: 'Closer' }).click();
+      await page.getByRole('button', { name: 'Add a strip' }).click();
+      await page.getByRole('list', { name: 'Strips found' }).waitFor();
+    },
+  },
   { name: 'help', path: '/help', ready: (page) => seen(page, 'What bandwidth does') },
   { name: 'nothing here', path: '/nowhere', ready: (page) => seen(page, 'There is nothing here') },
 ];

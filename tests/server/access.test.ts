@@ -66,6 +66,17 @@ const cases: RouteCase[] = [
   { route: 'GET /api/exports/:exportId/file', path: `${noExport}/file`, expected: makers(404) },
   { route: 'POST /api/exports/:exportId/cancel', path: `${noExport}/cancel`, expected: makers(404) },
   { route: 'POST /api/exports/:exportId/restart', path: `${noExport}/restart`, expected: makers(404) },
+  {
+    route: 'POST /api/sheets',
+    path: '/api/sheets',
+    body: {
+      strips: [{ stripId: shared }],
+      setup: { sheets: 'plain', layout: 'single' },
+      format: 'svg',
+      page: 1,
+    },
+    expected: makers(200, { otherDepartment: 404 }),
+  },
   { route: 'GET /api/strips', path: '/api/strips', expected: makers(200) },
   { route: 'POST /api/strips', path: '/api/strips', body: newStrip, expected: makers(201) },
   {
@@ -147,6 +158,8 @@ describe('private strips', () => {
     expect((await client.send('POST', `/api/strips/${own}/duplicate`)).status).toBe(404);
     expect((await client.send('POST', `/api/strips/${own}/restore`)).status).toBe(404);
     expect((await client.send('POST', '/api/strips/render', { stripId: own })).status).toBe(404);
+    const sheets = { strips: [{ stripId: own }], setup: {}, format: 'pdf' };
+    expect((await client.send('POST', '/api/sheets', sheets)).status).toBe(404);
   });
 
   it('are their owner’s to change', async () => {

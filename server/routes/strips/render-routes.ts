@@ -1,20 +1,11 @@
-import type { Response } from 'express';
 import { renderRequestSchema } from '../../../shared/api/render';
 import { signedInAccount } from '../../middleware/authenticate';
+import { untilClientLeaves } from '../../middleware/client-leaves';
 import { bodyOf } from '../../middleware/validate';
 import type { Database } from '../../models/database';
 import type { RenderPool } from '../../services/rendering/render-pool';
 import { renderRequested } from '../../services/rendering/render-strip';
 import type { RouteHandlers } from '../register-routes';
-
-/** Aborted when the client leaves before its answer is sent. */
-function untilClientLeaves(response: Response): AbortSignal {
-  const controller = new AbortController();
-  response.once('close', () => {
-    if (!response.writableFinished) controller.abort(new Error('the client left'));
-  });
-  return controller.signal;
-}
 
 export function renderRoutes(dependencies: {
   database: Database;

@@ -8,6 +8,7 @@ import { pacingWords } from './strip-words';
 
 export interface StripActions {
   onOpen(strip: Strip): void;
+  onSheet(strip: Strip): void;
   onDuplicate(strip: Strip): void;
   onSavePreset(strip: Strip): void;
   onDelete(strip: Strip): void;
@@ -22,6 +23,7 @@ export function StripMenu({ strip, actions }: { strip: Strip; actions: StripActi
       }
     >
       <MenuItem onSelect={() => actions.onOpen(strip)}>Open</MenuItem>
+      <MenuItem onSelect={() => actions.onSheet(strip)}>Sheet to print</MenuItem>
       <MenuItem onSelect={() => actions.onDuplicate(strip)}>Duplicate</MenuItem>
       <MenuItem onSelect={() => actions.onSavePreset(strip)}>Save as preset file</MenuItem>
       {strip.canDelete && <MenuItem onSelect={() => actions.onDelete(strip)}>Delete</MenuItem>}

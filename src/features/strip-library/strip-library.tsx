@@ -10,13 +10,13 @@ import { Button, buttonClass } from '../../components/button';
 import { ConfirmDialog } from '../../components/dialog';
 import { EmptyState } from '../../components/empty-state';
 import { Notice } from '../../components/notice';
+import { SearchBox } from '../../components/search-box';
 import { Segments } from '../../components/segments';
 import { SelectField } from '../../components/select-field';
 import { useToast } from '../../components/toast';
 import { paths } from '../../lib/paths';
 import { Filters } from './filters';
 import { readLibraryState, writeLibraryState } from './library-query';
-import { SearchBox } from './search-box';
 import { StripCard, type StripActions } from './strip-card';
 import { ImportDialog } from './presets/import-dialog';
 import { usePresetFiles } from './presets/use-preset-files';
@@ -124,6 +124,7 @@ function useStripActions(onSavePreset: StripActions['onSavePreset']): {
   return {
     actions: {
       onOpen: (strip) => void navigate(paths.strip(strip.id)),
+      onSheet: (strip) => void navigate(paths.sheet(strip.id)),
       onDuplicate: (strip) => duplicating.mutate(strip),
       onSavePreset,
       onDelete: setConfirming,
@@ -191,6 +192,8 @@ export function StripLibrary() {
         <div className="mb-5 flex flex-wrap items-center gap-3">
           <h1 className="mr-auto text-title font-semibold tracking-[-0.012em]">Strips</h1>
           <SearchBox
+            label="Search strips"
+            placeholder="Title, tag or teaching point"
             value={query.search}
             onSearch={(words) => change({ search: words === '' ? null : words })}
           />

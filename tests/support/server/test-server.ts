@@ -16,6 +16,7 @@ import {
   type ExportRunner,
 } from '../../../server/services/exports/export-runner';
 import { createReportPool } from '../../../server/services/recorder/report-pool';
+import { createSheetPool, type SheetPoolOptions } from '../../../server/services/sheets/sheet-pool';
 import { ApiClient, type Person } from './api-client';
 
 export const workerFile = resolve('server/workers/render-worker.ts');
@@ -42,17 +43,19 @@ interface TestServerOptions extends Partial<AppDependencies> {
   exportDirectory?: string;
   exportPool?: ExportPool;
   pool?: Partial<RenderPoolOptions>;
+  sheets?: Partial<SheetPoolOptions>;
 }
 
 /** The application on a free port of this machine, over a copy of the template database. */
 export async function startTestServer(options: TestServerOptions = {}): Promise<TestServer> {
-  const { databaseFile, pool, exportDirectory: keptExports, exportPool, ...dependencies } = options;
+  const { databaseFile, pool, sheets, exportDirectory: keptExports, exportPool, ...dependencies } = options;
   const directory = mkdtempSync(join(tmpdir(), 'paceloom-server-'));
   const file = databaseFile ?? join(directory, 'test.sqlite');
   if (databaseFile === undefined) copyFileSync(inject('templateDatabase'), file);
   const database = await openDatabase(file);
   const renderPool = createRenderPool({ workerFile, threads: 1, keepWarm: false, ...pool });
   const reportPool = createReportPool(resolve('server/workers/report-worker.ts'));
+  const sheetPool = createSheetPool({ workerFile: resolve('server/workers/sheet-worker.ts'), ...sheets });
   const logged: string[] = [];
   const logger = pino({ level: 'error' }, { write: (line: string) => void logged.push(line) });
   const exportDirectory = keptExports ?? join(directory, 'exports');
@@ -72,6 +75,7 @@ export async function startTestServer(options: TestServerOptions = {}): Promise<
     reportPool,
     exportRunner,
     exportFiles,
+    sheetPool,
     productVersion: '0.0.0',
     logger,
     clientDirectory: join(directory, 'client'),
@@ -95,6 +99,7 @@ export async function startTestServer(options: TestServerOptions = {}): Promise<
       await renderPool.close();
       await reportPool.close();
       await exportRunner.close();
+      await sheetPool.close();
       await database.close();
       rmSync(directory, { recursive: true, force: true });
     },

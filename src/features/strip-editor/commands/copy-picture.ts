@@ -6,7 +6,7 @@ import { ladderOf } from '../../../../shared/ladder/ladder';
 import { leadNames } from '../../../../shared/parameters/sheet';
 import { paintGrid, type ScreenWindow } from '../../../lib/canvas/paint-grid';
 import { paintRow, ink } from '../canvas/paint';
-import { paintDrawing } from '../canvas/paint-drawing';
+import { paintDrawing } from '../../../lib/canvas/paint-drawing';
 import { layoutRows } from '../canvas/rows';
 import { screenScale, timeToPx, type ScreenScale } from '../../../lib/canvas/scale';
 

@@ -5,7 +5,7 @@ import { sensingWindows } from '../../../../shared/ladder/sensing-windows';
 import { ladderHeightMm, ladderItems } from '../../../../shared/paper/ladder';
 import type { TintedColumn } from '../canvas/beat-columns';
 import { paintColumns } from '../canvas/paint';
-import { paintDrawing } from '../canvas/paint-drawing';
+import { paintDrawing } from '../../../lib/canvas/paint-drawing';
 import { prepareCanvas } from '../../../lib/canvas/prepare-canvas';
 import { pxToTime, type ScreenScale } from '../../../lib/canvas/scale';
 

@@ -1,8 +1,10 @@
+import { Link } from 'react-router-dom';
 import type { Strip } from '../../../../shared/api/strips';
-import { Button } from '../../../components/button';
+import { Button, buttonClass } from '../../../components/button';
 import { Tag } from '../../../components/chip';
 import { Chevron } from '../../../components/select-field';
 import { Menu, MenuItem } from '../../../components/menu';
+import { paths } from '../../../lib/paths';
 import type { ParametersEditor } from '../state/use-parameters';
 
 interface TitleBarProps {
@@ -85,6 +87,11 @@ export function TitleBar(props: TitleBarProps) {
           <MenuItem onSelect={props.onCopyAddress}>Copy address of this draft</MenuItem>
         </Menu>
         <Button onClick={props.onCopyPicture}>Copy picture</Button>
+        {strip && (
+          <Link to={paths.sheet(strip.id)} className={buttonClass('plain')}>
+            {unsaved ? 'Sheet as saved' : 'Sheet'}
+          </Link>
+        )}
         {canSave ? (
           <Button
             kind="primary"

@@ -1,5 +1,5 @@
-import type { DrawingItem } from '../../../../shared/paper/drawing';
-import { colourValue, lineWeightsMm } from '../../../../shared/paper/tokens';
+import type { DrawingItem } from '../../../shared/paper/drawing';
+import { colourValue, lineWeightsMm } from '../../../shared/paper/tokens';
 
 /** Least width of a line on a screen by its weight on paper, px (look: conduction 1.6, stimulus 2.4). */
 const leastPx = new Map<number, number>([
@@ -20,14 +20,18 @@ function trace(context: CanvasRenderingContext2D, points: Float64Array, pxPerMm:
   }
 }
 
-/** Paints items of a drawing, in their order; `pxPerMm` CSS pixels to the millimetre. */
+/**
+ * Paints items of a drawing, in their order; `pxPerMm` pixels to the millimetre. Lines are at least as wide as the look
+ * asks for on a screen, or, where a page is shown in true proportion, at least `leastLinePx`.
+ */
 export function paintDrawing(
   context: CanvasRenderingContext2D,
   items: readonly DrawingItem[],
   pxPerMm: number,
+  leastLinePx?: number,
 ): void {
   const width = (weightMm: number): number =>
-    Math.max(leastPx.get(weightMm) ?? usualLeastPx, weightMm * pxPerMm);
+    Math.max(leastLinePx ?? leastPx.get(weightMm) ?? usualLeastPx, weightMm * pxPerMm);
   context.lineJoin = 'round';
   for (const item of items) {
     switch (item.kind) {
@@ -80,8 +84,10 @@ export function paintDrawing(
         context.font = `${item.weight} ${item.sizeMm * pxPerMm}px ${families[item.family]}`;
         context.textAlign = textAligns[item.anchor];
         context.textBaseline = 'alphabetic';
+        context.letterSpacing = `${(item.trackingEm ?? 0) * item.sizeMm * pxPerMm}px`;
         context.fillText(item.text, item.xMm * pxPerMm, item.yMm * pxPerMm);
         context.textAlign = 'left';
+        context.letterSpacing = '0px';
         break;
     }
   }

@@ -1,10 +1,20 @@
 import { useEffect, useRef, useState } from 'react';
+import { classNames } from '../lib/class-names';
 
 /** Typing rests this long before the list follows. */
 const restMs = 250;
 
+interface SearchBoxProps {
+  label: string;
+  placeholder: string;
+  value: string;
+  /** As wide as there is room. */
+  wide?: boolean;
+  onSearch(words: string): void;
+}
+
 /** A search that follows what is typed, and what the address says. */
-export function SearchBox({ value, onSearch }: { value: string; onSearch(words: string): void }) {
+export function SearchBox({ label, placeholder, value, wide, onSearch }: SearchBoxProps) {
   const [typed, setTyped] = useState(value);
   const [lastValue, setLastValue] = useState(value);
   const timer = useRef<ReturnType<typeof setTimeout> | null>(null);
@@ -14,7 +24,7 @@ export function SearchBox({ value, onSearch }: { value: string; onSearch(words: 
   }
   useEffect(() => () => clearTimeout(timer.current ?? undefined), []);
   return (
-    <div className="relative min-w-44 grow tablet:max-w-80">
+    <div className={classNames('relative min-w-44 grow', !wide && 'tablet:max-w-80')}>
       <svg
         viewBox="0 0 16 16"
         className="pointer-events-none absolute top-1/2 left-3 size-4 -translate-y-1/2 text-ink-3"
@@ -28,8 +38,8 @@ export function SearchBox({ value, onSearch }: { value: string; onSearch(words: 
       </svg>
       <input
         type="search"
-        aria-label="Search strips"
-        placeholder="Title, tag or teaching point"
+        aria-label={label}
+        placeholder={placeholder}
         value={typed}
         maxLength={200}
         onChange={(event) => {
