@@ -100,6 +100,36 @@ describe.skipIf(!hasBrowser())('in the browser', () => {
     await page.getByText('1008 ms, 25.2 mm, 60 /min').waitFor();
   });
 
+  it('copies the strip as its sheet, and saves it where the browser refuses', async () => {
+    const page = await visit();
+    await page.context().grantPermissions(['clipboard-read', 'clipboard-write']);
+    await signInAs(page, 'educator');
+    await page.goto('/strips/av-sequential-pacing');
+    await reading(page).getByText('stimulated in sequence').waitFor();
+    const copiedSize = () =>
+      page.evaluate(async () => {
+        const [item] = await navigator.clipboard.read();
+        const picture = await createImageBitmap(await item.getType('image/png'));
+        return { width: picture.width, height: picture.height };
+      });
+    await page.getByRole('button', { name: 'Copy picture' }).click();
+    await page.getByText('Picture copied').first().waitFor();
+    const two = await copiedSize();
+    // Ten seconds at 25 mm/s with calibration and margins, 8 pixels a millimetre.
+    expect(two.width).toBeGreaterThan(8 * 280);
+    expect(two.width).toBeLessThan(8 * 310);
+    await page.getByRole('radio', { name: 'All twelve' }).click();
+    await page.getByRole('button', { name: 'Copy picture' }).click();
+    await expect.poll(async () => (await copiedSize()).height).toBeGreaterThan(2.5 * two.height);
+    await page.evaluate(() => {
+      navigator.clipboard.write = () => Promise.reject(new Error('refused'));
+    });
+    const download = page.waitForEvent('download');
+    await page.getByRole('button', { name: 'Copy picture' }).click();
+    expect((await download).suggestedFilename()).toBe('strip.png');
+    await page.getByText('Picture saved as strip.png').first().waitFor();
+  });
+
   it('walks the beats by keyboard and ties sentences to them', async () => {
     const page = await visit();
     await signInAs(page, 'educator');

@@ -1,36 +1,18 @@
 import { readFileSync } from 'node:fs';
 import { unzipSync } from 'fflate';
-import type { Browser, Download, Page } from 'playwright-core';
-import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest';
-import { hasBrowser, launchBrowser, openPage, signInAs, type Visit } from '../support/browser/browser';
-import { startProduct, type Product } from '../support/browser/product';
+import type { Download, Page } from 'playwright-core';
+import { describe, expect, it } from 'vitest';
+import { hasBrowser, signInAs } from '../support/browser/browser';
+import { useProduct } from '../support/browser/use-product';
 
 // Printed sheets, from the strip to the files, in Debian's Chromium against the built product.
 describe.skipIf(!hasBrowser())('sheets in the browser', () => {
-  let browser: Browser;
-  let product: Product;
-  let visits: Visit[] = [];
-
-  beforeAll(async () => {
-    product = await startProduct();
-    browser = await launchBrowser();
-  });
-  afterAll(async () => {
-    await browser?.close();
-    await product?.stop();
-  });
-  afterEach(async () => {
-    const messages = visits.flatMap((visit) => visit.trouble.messages);
-    await Promise.all(visits.map((visit) => visit.context.close()));
-    visits = [];
-    expect(messages).toEqual([]);
-  });
+  const { visit: visitAsNobody, unwatchedVisit } = useProduct();
 
   async function visit(size?: { width: number; height: number }): Promise<Page> {
-    const opened = await openPage(browser, product.url, size);
-    visits.push(opened);
-    await signInAs(opened.page, 'educator');
-    return opened.page;
+    const page = await visitAsNobody(size);
+    await signInAs(page, 'educator');
+    return page;
   }
   const sheet = (search = ''): string => `/strips/av-sequential-pacing/sheet${search}`;
   const paper = (page: Page) => page.getByRole('region', { name: 'Page', exact: true }).getByRole('img');
@@ -213,11 +195,10 @@ describe.skipIf(!hasBrowser())('sheets in the browser', () => {
 
   it('says what is wrong: a strip that is gone, one too long, a server that is away', async () => {
     // The router logs what it caught; that one visit is not watched.
-    const { context, page: lost } = await openPage(browser, product.url);
+    const lost = await unwatchedVisit();
     await signInAs(lost, 'educator');
     await lost.goto('/strips/no-such-strip/sheet');
     await lost.getByText('There is nothing here').waitFor();
-    await context.close();
     const page = await visit();
     await page.goto(sheet('?and=no-such-strip'));
     await page.getByText('A strip of these sheets is not there.').waitFor();

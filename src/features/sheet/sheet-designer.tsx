@@ -91,7 +91,11 @@ export function SheetDesigner(props: SheetDesignerProps) {
   const isFull = strips.length >= mostSheetStrips;
   const options = (
     <div className="flex flex-col gap-5">
-      <OptionsPanel setup={setup} onChange={onSetup} />
+      <OptionsPanel
+        setup={setup}
+        marked={strips.some(({ parameters }) => parameters.recorder.stimulusMarker)}
+        onChange={onSetup}
+      />
       <StripList strips={strips} onChange={onStrips} />
     </div>
   );

@@ -9,7 +9,7 @@ import { ConfirmDialog } from '../../components/dialog';
 import { Notice } from '../../components/notice';
 import { useToast } from '../../components/toast';
 import { download } from '../../lib/download';
-import { copyPicture } from './commands/copy-picture';
+import { copyStripPicture } from './commands/copy-picture';
 import { useEditorShortcuts } from './commands/use-editor-shortcuts';
 import { DetailsDialog } from './components/details-dialog';
 import { DownloadDialog } from './components/download/download-dialog';
@@ -139,7 +139,7 @@ export function StripEditor({ strip, initial, origin, onSavedAs, onDuplicate }: 
   };
   const copy = async (): Promise<void> => {
     if (!preview) return;
-    const outcome = await copyPicture(preview.recorded, view.twelve);
+    const outcome = await copyStripPicture(preview.recorded, view.twelve);
     toast(outcome === 'copied' ? 'Picture copied' : 'Picture saved as strip.png');
   };
   const savePreset = async (): Promise<void> => {

@@ -8,6 +8,8 @@ export interface ProductInBrowser {
   product(): Product;
   /** A page of a visitor of their own, without a session. */
   visit(size?: { width: number; height: number }): Promise<Page>;
+  /** The same where errors in the console belong to what is tried. */
+  unwatchedVisit(): Promise<Page>;
 }
 
 /**
@@ -18,10 +20,17 @@ export function useProduct(): ProductInBrowser {
   let browser: Browser | undefined;
   let product: Product | undefined;
   let visits: Visit[] = [];
+  const unwatched = new Set<Visit>();
 
   function started<T>(part: T | undefined): T {
     if (part === undefined) throw new Error('the product has not been started');
     return part;
+  }
+
+  async function open(size?: { width: number; height: number }): Promise<Visit> {
+    const opened = await openPage(started(browser), started(product).url, size);
+    visits.push(opened);
+    return opened;
   }
 
   beforeAll(async () => {
@@ -33,7 +42,7 @@ export function useProduct(): ProductInBrowser {
     await product?.stop();
   });
   afterEach(async () => {
-    const messages = visits.flatMap((visit) => visit.trouble.messages);
+    const messages = visits.flatMap((one) => (unwatched.has(one) ? [] : one.trouble.messages));
     await Promise.all(visits.map((visit) => visit.context.close()));
     visits = [];
     expect(messages).toEqual([]);
@@ -41,9 +50,10 @@ export function useProduct(): ProductInBrowser {
 
   return {
     product: () => started(product),
-    async visit(size) {
-      const opened = await openPage(started(browser), started(product).url, size);
-      visits.push(opened);
+    visit: async (size) => (await open(size)).page,
+    async unwatchedVisit() {
+      const opened = await open();
+      unwatched.add(opened);
       return opened.page;
     },
   };

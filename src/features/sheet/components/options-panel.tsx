@@ -7,9 +7,14 @@ import { LayoutTiles } from './layout-tiles';
 import { Caption, LeadChoice, OptionGroup, ValueSegments, type ChangeSetup } from './option-groups';
 import { TintSwatches } from './tint-swatches';
 
-interface OptionsPanelProps {
+interface SetupProps {
   setup: PageSetup;
   onChange: ChangeSetup;
+}
+
+interface OptionsPanelProps extends SetupProps {
+  /** Whether the recorder of a strip looks for stimuli. */
+  marked: boolean;
 }
 
 const speeds = [
@@ -47,7 +52,7 @@ const lineCounts = Array.from({ length: (lineLimits.maxValue ?? 0) + 1 }, (_, co
   label: count === 1 ? '1 line' : `${count} lines`,
 }));
 
-function PaperGroups({ setup, onChange }: OptionsPanelProps) {
+function PaperGroups({ setup, onChange }: SetupProps) {
   const acting = actingOptions(setup);
   return (
     <>
@@ -116,7 +121,7 @@ function PaperGroups({ setup, onChange }: OptionsPanelProps) {
   );
 }
 
-function QuestionGroup({ setup, onChange }: OptionsPanelProps) {
+function QuestionGroup({ setup, onChange }: SetupProps) {
   return (
     <OptionGroup title="On the question sheet">
       <Checkbox
@@ -146,7 +151,7 @@ const answerParts = [
 ] as const;
 
 /** Everything a sheet can be asked for; what changes nothing on the chosen pages is not shown. */
-export function OptionsPanel({ setup, onChange }: OptionsPanelProps) {
+export function OptionsPanel({ setup, marked, onChange }: OptionsPanelProps) {
   const acting = actingOptions(setup);
   return (
     <div className="flex flex-col gap-5">
@@ -160,6 +165,13 @@ export function OptionsPanel({ setup, onChange }: OptionsPanelProps) {
           onChange={(chosen) => onChange({ sheets: chosen })}
         />
         <CohortField value={setup.cohort} onChange={(cohort) => onChange({ cohort })} />
+        {marked && (
+          <Checkbox
+            label="Stimulus markers"
+            checked={setup.stimulusMarkers}
+            onChange={(stimulusMarkers) => onChange({ stimulusMarkers })}
+          />
+        )}
       </OptionGroup>
       {acting.answer && (
         <OptionGroup title="On the answer sheet">

@@ -5,8 +5,7 @@ import type { PageSetup } from '../../../../shared/parameters/page-setup';
 import { ApiError } from '../../../api/http';
 import { requestSheets } from '../../../api/sheets';
 import { useToast } from '../../../components/toast';
-import { pagePicture } from '../../../lib/canvas/paint-page';
-import { loadPaperFonts } from '../../../lib/canvas/paper-fonts';
+import { copyPicture } from '../../../lib/canvas/copy-picture';
 import { download } from '../../../lib/download';
 
 /** A file to ask for; `page` from 1, null for all pages. */
@@ -24,19 +23,11 @@ export interface SheetFiles {
 }
 
 const mediaTypes = { pdf: 'application/pdf', svg: 'image/svg+xml', png: 'image/png' } as const;
-/** Pixels a millimetre of a copied picture: 203 dots per inch, sharp on slides. */
-const copiedPxPerMm = 8;
 
 function reason(error: Error): string {
   if (!(error instanceof ApiError)) return error.message;
   const [problem] = error.problems;
   return problem ? `${problem.path} is ${problem.value}; allowed is ${problem.allowed}.` : error.message;
-}
-
-async function pngOf(canvas: HTMLCanvasElement): Promise<Blob> {
-  return new Promise((done, fail) =>
-    canvas.toBlob((blob) => (blob ? done(blob) : fail(new Error('no picture'))), 'image/png'),
-  );
 }
 
 /** Files of the document, made by the server from the saved strips, and the picture of a page for the clipboard. */
@@ -66,23 +57,20 @@ export function useSheetFiles(
     },
     onError: (error) => toast(`The file could not be made. ${reason(error)}`),
   });
-  const copyPicture = async (page: number): Promise<void> => {
+  const copyPage = async (page: number): Promise<void> => {
     const drawing = document?.pages[page - 1];
     if (!drawing) return;
-    await loadPaperFonts();
-    const blob = await pngOf(pagePicture(drawing, copiedPxPerMm));
-    try {
-      await navigator.clipboard.write([new ClipboardItem({ 'image/png': blob })]);
-      toast('Picture of this page copied');
-    } catch {
-      const name = sheetFileName(title, { format: 'png', page });
-      download(name, 'image/png', blob);
-      toast(`This browser does not let a page copy pictures. Saved as ${name} instead.`);
-    }
+    const name = sheetFileName(title, { format: 'png', page });
+    const outcome = await copyPicture(drawing, name);
+    toast(
+      outcome === 'copied'
+        ? 'Picture of this page copied'
+        : `This browser does not let a page copy pictures. Saved as ${name} instead.`,
+    );
   };
   return {
     making: making.isPending ? making.variables : null,
     make: (wanted) => making.mutate(wanted),
-    copyPicture,
+    copyPicture: copyPage,
   };
 }

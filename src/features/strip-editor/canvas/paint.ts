@@ -8,7 +8,7 @@ import type { Row } from './rows';
 import type { ScreenWindow } from '../../../lib/canvas/paint-grid';
 import { pxToTime, timeToPx, type ScreenScale } from '../../../lib/canvas/scale';
 
-export const ink = '#1f2a37';
+const ink = '#1f2a37';
 const slate = '#7b8794';
 const copper = '#b4532a';
 
