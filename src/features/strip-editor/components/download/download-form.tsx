@@ -59,17 +59,19 @@ export function DownloadForm({ choice, sampleRateHz, durationError, onChange }: 
           {playbackCaution}
         </Notice>
       )}
-      <Checkbox
-        label="One ZIP archive"
-        help={
-          several
-            ? 'Several formats always come as one archive, with a manifest and checksums.'
-            : 'With a manifest and checksums. A format of several files comes as one in any case.'
-        }
-        checked={several || bundle}
-        disabled={several}
-        onChange={(next) => onChange({ ...choice, bundle: next })}
-      />
+      <div className="px-1">
+        <Checkbox
+          label="One ZIP archive"
+          help={
+            several
+              ? 'Several formats always come as one archive, with a manifest and checksums.'
+              : 'With a manifest and checksums. A format of several files comes as one in any case.'
+          }
+          checked={several || bundle}
+          disabled={several}
+          onChange={(next) => onChange({ ...choice, bundle: next })}
+        />
+      </div>
       <NumberField
         label="Length"
         unit="s"
