@@ -6,10 +6,12 @@ import { stripJson } from '../../shared/formats/strip-json';
 import { drawingToSvg } from '../../shared/formats/svg';
 import { encodeWav } from '../../shared/formats/wav';
 import { encodeWfdb } from '../../shared/formats/wfdb/wfdb';
+import type { Drawing } from '../../shared/paper/drawing';
 import { layoutStripSheet } from '../../shared/paper/sheet';
 import { encodeAecg } from './aecg/aecg';
 import { encodeDicom } from './dicom/dicom';
 import { encodePdf } from './strip-pdf';
+import { drawingToSvgFile } from './svg-fonts';
 import { svgToPng } from './svg-to-png';
 
 /** Resolution of PNG files, dots per inch. */
@@ -34,8 +36,8 @@ function* csvParts(recording: StripRecording): Generator<string> {
   }
 }
 
-function svg(recording: StripRecording): string {
-  return drawingToSvg(layoutStripSheet(recording, recording.parameters.sheet));
+function sheetOf(recording: StripRecording): Drawing {
+  return layoutStripSheet(recording, recording.parameters.sheet);
 }
 
 /** One file without warnings. */
@@ -49,8 +51,8 @@ export const exporters: Readonly<Record<ExportFormat, Exporter>> = {
   events: ({ events }) => oneFile('events.json', 'application/json', [json(events)]),
   reading: ({ reading }) => oneFile('reading.json', 'application/json', [json(reading)]),
   json: (recording) => oneFile('strip.json', 'application/json', [json(stripJson(recording))]),
-  svg: (recording) => oneFile('strip.svg', 'image/svg+xml', [svg(recording)]),
-  png: (recording) => oneFile('strip.png', 'image/png', [svgToPng(svg(recording), pngDpi)]),
+  svg: (recording) => oneFile('strip.svg', 'image/svg+xml', [drawingToSvgFile(sheetOf(recording))]),
+  png: (recording) => oneFile('strip.png', 'image/png', [svgToPng(drawingToSvg(sheetOf(recording)), pngDpi)]),
   pdf: encodePdf,
   edf: encodeEdf,
   wfdb: encodeWfdb,

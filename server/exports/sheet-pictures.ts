@@ -1,14 +1,15 @@
 import { InvalidInputError } from '../../shared/errors';
 import { drawingToSvg } from '../../shared/formats/svg';
 import type { SheetPage } from '../../shared/paper/pages/sheet-document';
+import { drawingToSvgFile } from './svg-fonts';
 import { svgToPng } from './svg-to-png';
 
 /** Resolutions of pictures of a page, dots per inch: screens and slides, print, fine print. */
 export const sheetPictureDpis = [150, 300, 600] as const;
 
-/** A page as a standalone SVG at true size. Same page, same text. */
+/** A page as a standalone SVG at true size with its fonts. Same page, same text. */
 export function sheetPageSvg(page: SheetPage): string {
-  return drawingToSvg(page);
+  return drawingToSvgFile(page);
 }
 
 /**

@@ -136,8 +136,8 @@ function elements(items: readonly DrawingItem[]): string[] {
 }
 
 /**
- * A drawing as a standalone SVG 1.1 file at true size: width and height in mm and one user unit to the
- * millimetre. Lines and labels to 1 µm, traces to 10 µm. Fonts are named, not embedded. Same drawing, same text.
+ * A drawing as SVG 1.1 at true size: width and height in mm and one user unit to the
+ * millimetre. Lines and labels to 1 µm, traces to 10 µm. Fonts are named; a file for others carries them too (`server/exports/svg-fonts.ts`). Same drawing, same text.
  */
 export function drawingToSvg(drawing: Drawing): string {
   const width = number(drawing.widthMm);
