@@ -40,8 +40,6 @@ export default defineConfig({
           testTimeout: 180_000,
           hookTimeout: 120_000,
           fileParallelism: false,
-          // A busy machine can hold a browser up for longer than it waits; what fails twice is wrong.
-          retry: 1,
         },
       },
       {

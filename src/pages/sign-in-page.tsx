@@ -19,7 +19,8 @@ export function Component() {
     <div className="grid min-h-dvh tablet:grid-cols-[minmax(340px,1fr)_minmax(0,1fr)] desk:grid-cols-[minmax(380px,1fr)_2fr]">
       <main className="flex flex-col px-6 py-8 tablet:px-10 desk:px-16">
         <Wordmark />
-        <div className="my-auto w-full max-w-90 py-10">
+        {/* From the top, not centred: what arrives below must not move what somebody is about to press. */}
+        <div className="mb-auto w-full max-w-90 pt-[max(2.5rem,13dvh)] pb-10">
           <h1 className="text-display font-semibold tracking-[-0.012em]">Sign in</h1>
           <p className="mt-1 mb-6 text-section text-ink-2">
             Paced strips to order: you know what is true of every beat.

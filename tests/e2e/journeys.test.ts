@@ -344,43 +344,4 @@ describe.skipIf(!hasBrowser())('in the browser', () => {
     await saveAs(page, 'Saved after a restart');
     await page.getByText('Version 1, saved').waitFor();
   });
-
-  it('refuses a learner by page and by API', async () => {
-    const page = await visit();
-    await signInAs(page, 'learner');
-    expect(new URL(page.url()).pathname).toBe('/recorder');
-    await page.goto('/strips');
-    await page.getByRole('heading', { name: 'This page is not for your role' }).waitFor();
-    expect((await page.request.get('/api/strips')).status()).toBe(403);
-    const render = await page.request.post('/api/strips/render', { data: { parameters: {} } });
-    expect(render.status()).toBe(403);
-  });
-
-  it('sends a stranger to sign in and back to where they were going', async () => {
-    const page = await visit();
-    await page.goto('/strips/unipolar-spike');
-    await page.waitForURL(/\/sign-in\?from=/);
-    await page.getByRole('button', { name: 'Educator', exact: true }).click();
-    await page.getByRole('heading', { name: 'Unipolar against bipolar' }).waitFor();
-    await page.getByRole('button', { name: /Educator/ }).click();
-    await page.getByRole('menuitem', { name: 'Sign out' }).click();
-    await page.waitForURL(/\/sign-in/);
-    await page.goto('/strips');
-    await page.waitForURL(/\/sign-in\?from=/);
-  });
-
-  it('says what is wrong with a password, and locks after too many', async () => {
-    const page = await visit();
-    await page.goto('/sign-in');
-    await page.getByRole('button', { name: 'Sign in', exact: true }).click();
-    await page.getByText('Give your password.').waitFor();
-    await page.getByLabel('E-mail').fill('nobody@tarnvalley.example');
-    await page.getByLabel('Password').fill('wrong');
-    for (let attempt = 0; attempt < 11; attempt++) {
-      const answer = page.waitForResponse('**/api/session');
-      await page.getByRole('button', { name: 'Sign in', exact: true }).click();
-      await answer;
-    }
-    await page.getByText(/Too many attempts\. Wait \d+ minutes?, then try again\./).waitFor();
-  });
 });

@@ -72,8 +72,6 @@ export async function signInAs(page: Page, role: Role): Promise<void> {
   const person = demoPeople.find((one) => one.role === role);
   if (!person) throw new Error(`no ${role} in the demonstration`);
   await page.goto('/sign-in');
-  // The form is centred, so it moves up when the people of the demonstration come; a click must not fall in between.
-  await page.getByText('Enter as one of its people:').waitFor();
   await page.getByLabel('E-mail').fill(person.email);
   await page.getByLabel('Password').fill(person.password);
   await page.getByRole('button', { name: 'Sign in', exact: true }).click();
