@@ -1,10 +1,10 @@
+import { chamberNames } from '../engine/chamber-names';
 import type {
   AtrialDepolarization,
   AtrialOrigin,
   AvBlock,
   CaptureFailure,
   DepolarizationEvent,
-  StimulusChamber,
   StimulusEvent,
   StripEvent,
   VentricularDepolarization,
@@ -13,13 +13,6 @@ import type {
 
 /** What annotations are made of: stimuli and depolarizations; a device's own markers are left to the events file. */
 export type AnnotatedEvent = StimulusEvent | DepolarizationEvent;
-
-const chambers: Record<StimulusChamber, string> = {
-  atrium: 'atrium',
-  rightVentricle: 'right ventricle',
-  leftVentricle: 'left ventricle',
-  chest: 'chest pads',
-};
 
 const failures: Record<CaptureFailure, string> = {
   belowThreshold: 'output below the threshold',
@@ -57,7 +50,7 @@ export function annotatedEvents(events: readonly StripEvent[]): AnnotatedEvent[]
 }
 
 function stimulusWords({ chamber, captured, reason, pseudofusion }: StimulusEvent): string {
-  const parts = [`Stimulus, ${chambers[chamber]}`, captured ? 'captured' : 'no capture'];
+  const parts = [`Stimulus, ${chamberNames[chamber]}`, captured ? 'captured' : 'no capture'];
   if (reason) parts.push(failures[reason]);
   if (pseudofusion) parts.push('pseudofusion');
   return parts.join(', ');

@@ -1,11 +1,11 @@
 import { readFileSync } from 'node:fs';
 import AxeBuilder from '@axe-core/playwright';
-import type { Browser, Page } from 'playwright-core';
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { hasBrowser, launchBrowser, openPage, signInAs } from '../support/browser/browser';
+import type { Page } from 'playwright-core';
+import { describe, expect, it } from 'vitest';
+import { hasBrowser, signInAs } from '../support/browser/browser';
 import { exportStates } from '../support/browser/export-states';
 import { seen, type PageState } from '../support/browser/page-state';
-import { startProduct, type Product } from '../support/browser/product';
+import { useProduct } from '../support/browser/use-product';
 
 const sizes = [
   { width: 1440, height: 900 },
@@ -146,29 +146,18 @@ async function check(page: Page): Promise<void> {
 }
 
 describe.skipIf(!hasBrowser())('every page at every width is accessible and fits', () => {
-  let browser: Browser;
-  let product: Product;
-  beforeAll(async () => {
-    product = await startProduct();
-    browser = await launchBrowser();
-  });
-  afterAll(async () => {
-    await browser?.close();
-    await product?.stop();
-  });
+  const { visit } = useProduct();
 
   for (const size of sizes) {
     it(`sign-in at ${size.width} px`, async () => {
-      const { context, page, trouble } = await openPage(browser, product.url, size);
+      const page = await visit(size);
       await page.goto('/sign-in');
       await seen(page, 'Enter as one of its people:');
       await check(page);
-      await context.close();
-      expect(trouble.messages).toEqual([]);
     });
 
     it(`all states at ${size.width} px`, async () => {
-      const { context, page, trouble } = await openPage(browser, product.url, size);
+      const page = await visit(size);
       await signInAs(page, 'educator');
       for (const state of states) {
         await page.unrouteAll();
@@ -180,8 +169,6 @@ describe.skipIf(!hasBrowser())('every page at every width is accessible and fits
           throw new Error(`${state.name} at ${size.width} px: ${error.message}`);
         });
       }
-      await context.close();
-      expect(trouble.messages).toEqual([]);
     });
   }
 });

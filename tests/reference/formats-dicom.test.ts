@@ -1,21 +1,14 @@
 import { spawnSync } from 'node:child_process';
-import { mkdirSync, writeFileSync } from 'node:fs';
+import { writeFileSync } from 'node:fs';
 import { join } from 'node:path';
-import { beforeAll, describe, expect, it } from 'vitest';
+import { describe, expect, it } from 'vitest';
 import { measuredLeads } from '../../shared/engine/leads';
 import { renderStrip, type StripRecording } from '../../shared/engine/render';
 import { codedEvents } from '../../shared/formats/coded-events';
 import { beatTerms, leadTerms, pWaveTerm, spikeTerms } from '../../shared/formats/mdc-codes';
 import { educationCaution, syntheticCaution } from '../../shared/paper/cautions';
 import { leadNames } from '../../shared/parameters/sheet';
-import {
-  longTitle,
-  readDoubles,
-  renderedCases,
-  temporaryFolder,
-  worstDifferenceUv,
-  writeExport,
-} from '../support/exports';
+import { longTitle, readDoubles, worstDifferenceUv, writtenCases } from '../support/exports';
 import { hasProgram, hasPythonModule, runPython, runReader } from '../support/python';
 import { buildStrip } from '../support/strips';
 import { exactFileUv } from '../support/tolerances';
@@ -82,17 +75,7 @@ const lengths: [string, StripRecording][] = [
   ['ten minutes', { durationS: 600 }],
 ].map(([name, input]) => [name as string, renderStrip(buildStrip({ ...pacedVvi, ...(input as object) }))]);
 
-const cases = [...renderedCases(), ...lengths].map(([name, recording], k) => ({ name, recording, k }));
-const folder = temporaryFolder();
-const pathOf = (k: number): string => join(folder, String(k), 'strip.dcm');
-const warnings: (readonly string[])[] = [];
-
-beforeAll(async () => {
-  for (const { recording, k } of cases) {
-    mkdirSync(join(folder, String(k)));
-    warnings.push(await writeExport(recording, 'dicom', join(folder, String(k))));
-  }
-});
+const { cases, folder, pathOf, warnings } = writtenCases('dicom', 'strip.dcm', lengths);
 
 const isFast = ({ sampleRateHz }: StripRecording): boolean => sampleRateHz === 2000;
 const lengthOf = (recording: StripRecording): number =>

@@ -1,17 +1,10 @@
-import { mkdirSync } from 'node:fs';
 import { join } from 'node:path';
-import { beforeAll, describe, expect, it } from 'vitest';
+import { describe, expect, it } from 'vitest';
+import type { StripRecording } from '../../shared/engine/render';
 import { annotatedEvents, eventWords } from '../../shared/formats/event-words';
 import { educationCaution, syntheticCaution } from '../../shared/paper/cautions';
 import { leadNames } from '../../shared/parameters/sheet';
-import {
-  readCsvColumns,
-  readDoubles,
-  renderedCases,
-  temporaryFolder,
-  worstDifferenceUv,
-  writeExport,
-} from '../support/exports';
+import { readCsvColumns, readDoubles, worstDifferenceUv, writtenCases } from '../support/exports';
 import { hasProgram, hasPythonModule, runPython, runReader } from '../support/python';
 import { exactFileUv } from '../support/tolerances';
 
@@ -61,22 +54,10 @@ print(json.dumps({'opened': opened, 'kind': kind, 'signals': signals, 'durationS
                   'samples': samples, 'annotations': annotations}))
 `;
 
-const cases = renderedCases();
-const folder = temporaryFolder();
-const pathOf = (k: number): string => join(folder, String(k), 'strip.edf');
-const warnings: (readonly string[])[] = [];
-
-beforeAll(async () => {
-  for (const [k, [, recording]] of cases.entries()) {
-    mkdirSync(join(folder, String(k)));
-    warnings.push(await writeExport(recording, 'edf', join(folder, String(k))));
-  }
-});
-
-const numbered = cases.map(([name, recording], k) => ({ name, recording, k }));
+const { cases, folder, pathOf, warnings } = writtenCases('edf', 'strip.edf');
 
 /** Annotations that every file starts with, then the strip's events. */
-function expectedTexts(recording: (typeof cases)[number][1]): [number, string][] {
+function expectedTexts(recording: StripRecording): [number, string][] {
   const { title } = recording.parameters;
   return [
     [0, `${syntheticCaution}. ${educationCaution}`],
@@ -89,7 +70,7 @@ const bySecondThenText = (a: readonly [number, string], b: readonly [number, str
   a[0] - b[0] || a[1].localeCompare(b[1]);
 
 describe.skipIf(!hasPythonModule('mne'))('EDF+ read by MNE-Python (skipped without python3-mne)', () => {
-  it.each(numbered)('samples, names, rate, units, annotations: $name', ({ recording, k }) => {
+  it.each(cases)('samples, names, rate, units, annotations: $name', ({ recording, k }) => {
     const doubles = join(folder, `${k}.f64`);
     const found = JSON.parse(runPython(mneProgram, [pathOf(k), doubles])) as Found;
     expect(found.names).toEqual(leadNames.map((lead) => `ECG ${lead}`));
@@ -112,9 +93,9 @@ describe.skipIf(!hasPythonModule('mne'))('EDF+ read by MNE-Python (skipped witho
   });
 
   it('marks padding where the strip ends, and nowhere else', () => {
-    const padded = numbered.filter(({ recording }) => recording.parameters.durationS === 10.004);
+    const padded = cases.filter(({ recording }) => recording.parameters.durationS === 10.004);
     expect(padded).toHaveLength(1);
-    for (const { recording, k } of numbered) {
+    for (const { recording, k } of cases) {
       const found = JSON.parse(runPython(mneProgram, [pathOf(k), join(folder, 'unused')])) as Found;
       const padding = found.annotations.filter(([, , text]) => text.startsWith('Padding'));
       expect(padding).toHaveLength(padded.some((one) => one.k === k) ? 1 : 0);
@@ -132,7 +113,7 @@ describe.skipIf(!hasPythonModule('mne'))('EDF+ read by MNE-Python (skipped witho
 const libedfIsHere = hasProgram('/usr/lib/x86_64-linux-gnu/libedf.so.1');
 
 describe.skipIf(!libedfIsHere)('EDF+ under libedf, the strictest reader (skipped without libedf1)', () => {
-  it.each(numbered)('opens as EDF+ with every sample and annotation: $name', ({ recording, k }) => {
+  it.each(cases)('opens as EDF+ with every sample and annotation: $name', ({ recording, k }) => {
     const { length } = recording.leads.I;
     const found = JSON.parse(runPython(libedfProgram, [pathOf(k), String(length)])) as {
       opened: number;
@@ -160,7 +141,7 @@ describe.skipIf(!libedfIsHere)('EDF+ under libedf, the strictest reader (skipped
 });
 
 describe.skipIf(!hasProgram('/usr/bin/save2gdf'))('EDF+ under BioSig (skipped without biosig-tools)', () => {
-  it.each(numbered)('samples and rate: $name', ({ recording, k }) => {
+  it.each(cases)('samples and rate: $name', ({ recording, k }) => {
     const header = JSON.parse(runReader('/usr/bin/save2gdf', ['-JSON', pathOf(k)])) as {
       TYPE: string;
       Samplingrate: number;

@@ -1,17 +1,11 @@
-import { mkdirSync, readFileSync } from 'node:fs';
+import { readFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { beforeAll, describe, expect, it } from 'vitest';
 import type { StripRecording } from '../../shared/engine/render';
 import { annotatedEvents, eventWords, type AnnotatedEvent } from '../../shared/formats/event-words';
 import { syntheticCaution } from '../../shared/paper/cautions';
 import { leadNames } from '../../shared/parameters/sheet';
-import {
-  readDoubles,
-  renderedCases,
-  temporaryFolder,
-  worstDifferenceUv,
-  writeExport,
-} from '../support/exports';
+import { readDoubles, worstDifferenceUv, writtenCases } from '../support/exports';
 import { hasProgram, hasPythonModule, runPython, runReader } from '../support/python';
 import { exactFileUv } from '../support/tolerances';
 
@@ -97,15 +91,7 @@ function mnemonic(event: AnnotatedEvent, { events, parameters }: StripRecording)
   return event.origin === 'conducted' ? (afterEctopic ? 'A' : block) : byOrigin[event.origin];
 }
 
-const cases = renderedCases().map(([name, recording], k) => ({ name, recording, k }));
-const folder = temporaryFolder();
-const folderOf = (k: number): string => join(folder, String(k));
-beforeAll(async () => {
-  for (const { recording, k } of cases) {
-    mkdirSync(folderOf(k));
-    await writeExport(recording, 'wfdb', folderOf(k));
-  }
-});
+const { cases, folder, folderOf, pathOf } = writtenCases('wfdb', 'strip.hea');
 
 describe.skipIf(!hasPythonModule('numpy'))(
   'WFDB read from the published format (skipped without python3-numpy)',
@@ -189,8 +175,7 @@ interface BiosigHeader {
 describe.skipIf(!hasProgram('/usr/bin/save2gdf'))('WFDB under BioSig (skipped without biosig-tools)', () => {
   it.each(cases)('header, and every annotation at its time: $name', ({ recording, k }) => {
     const { sampleRateHz, events } = recording;
-    const path = join(folderOf(k), 'strip.hea');
-    const header = JSON.parse(runReader('/usr/bin/save2gdf', ['-JSON', path])) as BiosigHeader;
+    const header = JSON.parse(runReader('/usr/bin/save2gdf', ['-JSON', pathOf(k)])) as BiosigHeader;
     expect(header).toMatchObject({
       TYPE: 'MIT',
       Samplingrate: sampleRateHz,

@@ -1,7 +1,7 @@
-import { mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
+import { mkdirSync, mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
-import { afterAll } from 'vitest';
+import { afterAll, beforeAll } from 'vitest';
 import { exporters } from '../../server/exports/exporters';
 import type { StripEvent } from '../../shared/engine/events';
 import { renderStrip, type StripRecording } from '../../shared/engine/render';
@@ -115,6 +115,38 @@ export function temporaryFolder(): string {
   const folder = mkdtempSync(join(tmpdir(), 'paceloom-export-'));
   afterAll(() => rmSync(folder, { recursive: true, force: true }));
   return folder;
+}
+
+/** The cases of a test file, written in one format before its tests run. */
+export interface WrittenCases {
+  cases: { name: string; recording: StripRecording; k: number }[];
+  /** For what readers leave behind. */
+  folder: string;
+  /** Where the files of case `k` lie. */
+  folderOf(k: number): string;
+  /** The format's file of case `k`. */
+  pathOf(k: number): string;
+  /** Of each case. */
+  warnings: (readonly string[])[];
+}
+
+/** Every case, and `more`, as files named `fileName`, each case in a folder of its own. */
+export function writtenCases(
+  format: ExportFormat,
+  fileName: string,
+  more: readonly [string, StripRecording][] = [],
+): WrittenCases {
+  const folder = temporaryFolder();
+  const cases = [...renderedCases(), ...more].map(([name, recording], k) => ({ name, recording, k }));
+  const folderOf = (k: number): string => join(folder, String(k));
+  const warnings: (readonly string[])[] = [];
+  beforeAll(async () => {
+    for (const { recording, k } of cases) {
+      mkdirSync(folderOf(k));
+      warnings.push(await writeExport(recording, format, folderOf(k)));
+    }
+  });
+  return { cases, folder, folderOf, pathOf: (k) => join(folderOf(k), fileName), warnings };
 }
 
 /** Doubles, little-endian, as NumPy's `tofile` writes them. */

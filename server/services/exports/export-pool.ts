@@ -1,5 +1,6 @@
 import { MessageChannel } from 'node:worker_threads';
 import { Piscina } from 'piscina';
+import { workerArguments } from '../bounded-pool';
 import type { ExportOutcome, ExportTask } from '../../workers/export-worker';
 
 export interface ExportPool {
@@ -23,7 +24,7 @@ const usualHeapMb = 2048;
 export function createExportPool(workerFile: string, threads: number, mostHeapMb = usualHeapMb): ExportPool {
   const pool = new Piscina<ExportTask, ExportOutcome>({
     filename: workerFile,
-    execArgv: workerFile.endsWith('.ts') ? ['--import', 'tsx'] : [],
+    execArgv: workerArguments(workerFile),
     minThreads: 0,
     maxThreads: threads,
     idleTimeout: idleMs,

@@ -1,8 +1,8 @@
 import { availableParallelism } from 'node:os';
-import { Piscina } from 'piscina';
 import { longestRenderS } from '../../../shared/api/render';
-import { longStrip, renderQueueFull, renderTooLong } from '../../errors';
+import { longStrip } from '../../errors';
 import type { RenderTask } from '../../workers/render-worker';
+import { createBoundedPool } from '../bounded-pool';
 
 export interface RenderPoolOptions {
   /** The worker's file, TypeScript or built. */
@@ -27,8 +27,6 @@ export interface RenderPool {
   close(): Promise<void>;
 }
 
-const idleMs = 30_000;
-
 export const usualQueueLength = 16;
 export const usualThreads = Math.max(1, availableParallelism() - 1);
 
@@ -41,40 +39,20 @@ export function createRenderPool(options: RenderPoolOptions): RenderPool {
     timeLimitMs = 20_000,
     keepWarm = true,
   } = options;
-  const pool = new Piscina<RenderTask, ArrayBuffer>({
-    filename: workerFile,
-    execArgv: workerFile.endsWith('.ts') ? ['--import', 'tsx'] : [],
-    minThreads: keepWarm ? threads : 0,
-    maxThreads: threads,
-    idleTimeout: idleMs,
-    concurrentTasksPerWorker: 1,
+  const pool = createBoundedPool<RenderTask, ArrayBuffer>({
+    workerFile,
+    threads,
+    queueLength,
+    timeLimitMs,
+    keepWarm,
   });
-
-  // Piscina's own limit does not hold for tasks with an abort signal, so the queue is bounded here.
-  let unfinished = 0;
-
   return {
     async render(task, signal) {
-      if (task.parameters.durationS > longestRenderS) {
-        throw longStrip(task.parameters.durationS, longestRenderS);
-      }
-      if (unfinished >= threads + queueLength) throw renderQueueFull();
-      const limit = AbortSignal.timeout(timeLimitMs);
-      unfinished++;
-      try {
-        return new Uint8Array(await pool.run(task, { signal: AbortSignal.any([signal, limit]) }));
-      } catch (error) {
-        if (signal.aborted) throw signal.reason;
-        if (limit.aborted) throw renderTooLong(timeLimitMs);
-        throw error;
-      } finally {
-        unfinished--;
-      }
+      const { durationS } = task.parameters;
+      if (durationS > longestRenderS) throw longStrip(durationS, longestRenderS);
+      return new Uint8Array(await pool.run(task, signal));
     },
-    load: () => ({
-      running: Math.min(unfinished, threads),
-      waiting: Math.max(0, unfinished - threads),
-    }),
-    close: () => pool.destroy(),
+    load: () => pool.load(),
+    close: () => pool.close(),
   };
 }

@@ -3,12 +3,12 @@ import { mostSheetStrips } from '../../../shared/api/sheets';
 import type { Strip } from '../../../shared/api/strips';
 import type { PageSetup } from '../../../shared/parameters/page-setup';
 import { Button } from '../../components/button';
+import { Drawer } from '../../components/drawer';
 import { Notice } from '../../components/notice';
 import { useMediaQuery } from '../../lib/use-media-query';
 import { AddStripDialog } from './components/add-strip-dialog';
 import { Desk } from './components/desk';
 import { DocumentNotes } from './components/document-notes';
-import { OptionsDrawer } from './components/options-drawer';
 import { OptionsPanel } from './components/options-panel';
 import { PageList } from './components/page-list';
 import { PrintPages } from './components/print-pages';
@@ -115,7 +115,11 @@ export function SheetDesigner(props: SheetDesignerProps) {
             <Button small disabled={isFull} onClick={() => setAdding(true)}>
               Add a strip
             </Button>
-            {!isWide && <OptionsDrawer>{options}</OptionsDrawer>}
+            {!isWide && (
+              <Drawer title="Options" side="right">
+                {options}
+              </Drawer>
+            )}
             {isFull && (
               <span className="text-caption text-ink-3">{mostSheetStrips} strips are the most.</span>
             )}

@@ -1,5 +1,4 @@
 import { useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
-import { Dialog as RadixDialog } from 'radix-ui';
 import { useState } from 'react';
 import { Link, useNavigate, useSearchParams } from 'react-router-dom';
 import type { Strip } from '../../../shared/api/strips';
@@ -7,6 +6,7 @@ import type { StripListResponse, StripSort } from '../../../shared/api/strip-lis
 import { courseGroups } from '../../../shared/gallery/course';
 import { deleteStrip, duplicateStrip, restoreStrip, stripKeys, stripListQuery } from '../../api/strips';
 import { Button, buttonClass } from '../../components/button';
+import { Drawer } from '../../components/drawer';
 import { ConfirmDialog } from '../../components/dialog';
 import { EmptyState } from '../../components/empty-state';
 import { Notice } from '../../components/notice';
@@ -138,27 +138,6 @@ function useStripActions(onSavePreset: StripActions['onSavePreset']): {
   };
 }
 
-function FilterDrawer(props: React.ComponentProps<typeof Filters>) {
-  return (
-    <RadixDialog.Root>
-      <RadixDialog.Trigger className={`${buttonClass('plain')} desk:hidden`}>Filters</RadixDialog.Trigger>
-      <RadixDialog.Portal>
-        <RadixDialog.Overlay className="fixed inset-0 z-40 bg-[rgb(31_42_55/0.28)]" />
-        <RadixDialog.Content
-          aria-describedby=""
-          className="fixed inset-y-0 left-0 z-50 w-80 max-w-[85vw] overflow-auto bg-paper p-5 shadow-float"
-        >
-          <div className="mb-4 flex items-center justify-between">
-            <RadixDialog.Title className="text-section font-semibold">Filters</RadixDialog.Title>
-            <RadixDialog.Close className={buttonClass('quiet', true)}>Done</RadixDialog.Close>
-          </div>
-          <Filters {...props} />
-        </RadixDialog.Content>
-      </RadixDialog.Portal>
-    </RadixDialog.Root>
-  );
-}
-
 /** Every strip one may see: in the order of the course, by search and filters, as cards or as a table. */
 export function StripLibrary() {
   const [search, setSearch] = useSearchParams();
@@ -197,7 +176,9 @@ export function StripLibrary() {
             value={query.search}
             onSearch={(words) => change({ search: words === '' ? null : words })}
           />
-          <FilterDrawer {...filters} />
+          <Drawer title="Filters" side="left" className="desk:hidden">
+            <Filters {...filters} />
+          </Drawer>
           <Segments
             label="View"
             value={view}

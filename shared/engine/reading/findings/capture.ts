@@ -2,7 +2,8 @@ import type { CaptureFailure, StimulusChamber, StimulusEvent, StripEvent } from 
 import { stimuliOf } from '../capture';
 import type { Finding, ReadingFigures } from '../reading';
 import { countOf, numberWord } from '../words';
-import { capitalised, chamberName, numbersOf, reasonWords } from './chamber-words';
+import { chamberNames } from '../../chamber-names';
+import { capitalised, numbersOf, reasonWords } from './chamber-words';
 
 const lossReasons = ['belowThreshold', 'fault'] as const satisfies CaptureFailure[];
 
@@ -25,7 +26,7 @@ function lossFinding(
 ): Finding[] {
   const lost = judged.filter((stimulus) => stimulus.reason === reason).length;
   if (lost === 0) return [];
-  const where = chamber === 'chest' ? 'through the chest pads' : `in the ${chamberName[chamber]}`;
+  const where = chamber === 'chest' ? 'through the chest pads' : `in the ${chamberNames[chamber]}`;
   const subject =
     lost === judged.length
       ? `No stimulus ${where} captures`
@@ -47,7 +48,7 @@ function chamberFindings(
   const stimuli = stimuliOf(events, chamber);
   const judged = stimuli.filter((stimulus) => stimulus.reason !== 'refractoryTissue');
   const refractory = stimuli.length - judged.length;
-  const where = chamber === 'chest' ? 'through the chest pads' : `in the ${chamberName[chamber]}`;
+  const where = chamber === 'chest' ? 'through the chest pads' : `in the ${chamberNames[chamber]}`;
   const findings = lossReasons.flatMap((reason) => lossFinding(reading, chamber, judged, reason));
   if (judged.length > 0 && findings.length === 0) {
     findings.push({

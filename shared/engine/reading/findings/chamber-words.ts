@@ -1,13 +1,5 @@
-import type { CaptureFailure, StimulusChamber } from '../../events';
+import type { CaptureFailure } from '../../events';
 import type { BeatReading } from '../beat-reading';
-
-/** Where a stimulus is given, as it stands after "in the". */
-export const chamberName: Record<StimulusChamber, string> = {
-  atrium: 'atrium',
-  rightVentricle: 'right ventricle',
-  leftVentricle: 'left ventricle',
-  chest: 'chest pads',
-};
 
 /** Why a stimulus captures nothing. */
 export const reasonWords: Record<CaptureFailure, string> = {

@@ -1,6 +1,7 @@
 import type { Finding, ReadingFigures } from '../reading';
 import { listWords } from '../words';
-import { capitalised, chamberName, numbersOf } from './chamber-words';
+import { chamberNames } from '../../chamber-names';
+import { capitalised, numbersOf } from './chamber-words';
 
 function pacedChambersFinding(reading: ReadingFigures): Finding {
   const { pacedChambers, beats } = reading;
@@ -15,7 +16,7 @@ function pacedChambersFinding(reading: ReadingFigures): Finding {
       beats: numbersOf(stimulated),
     };
   }
-  const chambers = listWords(pacedChambers.map((chamber) => chamberName[chamber]));
+  const chambers = listWords(pacedChambers.map((chamber) => chamberNames[chamber]));
   const sequence =
     pacedChambers.includes('atrium') && pacedChambers.length > 1 && reading.avIntervalMs !== null
       ? ` in sequence, ${Math.round(reading.avIntervalMs)} ms apart`

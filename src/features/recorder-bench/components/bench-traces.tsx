@@ -1,10 +1,11 @@
 import { useEffect, useLayoutEffect, useMemo, useRef, type KeyboardEvent, type PointerEvent } from 'react';
 import type { MeasuredBeat } from '../../../../shared/recorder-bench/beat-measures';
+import { TimeAxis } from '../../../components/time-axis';
 import { difference, type BenchResult } from '../../../../shared/recorder-bench/bench-result';
 import { settingWords, type BenchSetting } from '../../../../shared/recorder-bench/bench-setting';
 import { paintGrid } from '../../../lib/canvas/paint-grid';
 import { prepareCanvas } from '../../../lib/canvas/prepare-canvas';
-import { desktopPxPerMm, phonePxPerMm, pxToTime, timeToPx } from '../../../lib/canvas/scale';
+import { desktopPxPerMm, phonePxPerMm, pxToTime } from '../../../lib/canvas/scale';
 import { tabletQuery, useMediaQuery } from '../../../lib/use-media-query';
 import { layoutBench, type BenchRow } from '../canvas/bench-layout';
 import { paintMarkerLines, paintMarks, paintRows } from '../canvas/paint-bench';
@@ -121,7 +122,6 @@ export function BenchTraces(props: BenchTracesProps) {
     const found = nearestBeat(beats, pxToTime(scale, event.clientX - left));
     if (found) onBeat(found.number);
   };
-  const seconds = Array.from({ length: Math.floor(durationS) + 1 }, (_, second) => second);
 
   return (
     <div>
@@ -147,17 +147,8 @@ export function BenchTraces(props: BenchTracesProps) {
               style={{ height: markerHeightPx }}
             />
           )}
-          <div className="relative h-6 border-t border-rule text-ink-2" aria-hidden="true">
-            {seconds.map((second) => (
-              <span
-                key={second}
-                className="absolute top-0 flex -translate-x-1/2 flex-col items-center font-mono text-caption leading-4"
-                style={{ left: timeToPx(scale, second) }}
-              >
-                <span className="h-1.5 w-px bg-edge" />
-                {second}
-              </span>
-            ))}
+          <div className="border-t border-rule">
+            <TimeAxis scale={scale} durationS={durationS} />
           </div>
         </div>
       </div>

@@ -1,5 +1,6 @@
+import { chamberNames } from '../../../../shared/engine/chamber-names';
 import type { BeatReading } from '../../../../shared/engine/reading/beat-reading';
-import type { CaptureFailure, StimulusChamber } from '../../../../shared/engine/events';
+import type { CaptureFailure } from '../../../../shared/engine/events';
 
 const origins: Record<BeatReading['origin'], string> = {
   conducted: 'Conducted from the atria',
@@ -8,13 +9,6 @@ const origins: Record<BeatReading['origin'], string> = {
   junctionalEscape: 'Junctional escape',
   ventricularEscape: 'Ventricular escape',
   none: 'Stimulus without a beat',
-};
-
-const chambers: Record<StimulusChamber, string> = {
-  atrium: 'atrium',
-  rightVentricle: 'right ventricle',
-  leftVentricle: 'left ventricle',
-  chest: 'chest pads',
 };
 
 const failures: Record<CaptureFailure, string> = {
@@ -35,7 +29,7 @@ const atria: Record<NonNullable<BeatReading['atrialOrigin']>, string> = {
 
 function stimulusWords({ stimuli, captured, pseudofusion, reasons }: BeatReading): string | null {
   if (stimuli.length === 0) return null;
-  const where = [...new Set(stimuli.map((chamber) => chambers[chamber]))].join(' and ');
+  const where = [...new Set(stimuli.map((chamber) => chamberNames[chamber]))].join(' and ');
   if (pseudofusion) return `stimulus (${where}) in its QRS changes nothing: pseudofusion`;
   if (captured) return `stimulus from ${where} captures`;
   return `stimulus from ${where} captures nothing: ${reasons.map((reason) => failures[reason]).join(', ')}`;

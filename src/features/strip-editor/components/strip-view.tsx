@@ -13,7 +13,7 @@ import { BeatStepper } from './beat-stepper';
 import { LadderCanvas } from './ladder-canvas';
 import { MarkerLine, markerWords } from './marker-line';
 import { StripCanvas } from './strip-canvas';
-import { TimeAxis } from './time-axis';
+import { TimeAxis } from '../../../components/time-axis';
 import { useCalipers } from './use-calipers';
 import { useElementWidth } from '../../../lib/use-element-width';
 

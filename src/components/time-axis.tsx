@@ -1,6 +1,6 @@
-import { timeToPx, type ScreenScale } from '../../../lib/canvas/scale';
+import { timeToPx, type ScreenScale } from '../lib/canvas/scale';
 
-/** Seconds under the strip, on the strip's own time axis. */
+/** Seconds under a trace, on its own time axis. */
 export function TimeAxis({ scale, durationS }: { scale: ScreenScale; durationS: number }) {
   const ticks = Array.from({ length: Math.floor(durationS) + 1 }, (_, second) => second);
   return (
