@@ -54,6 +54,14 @@ describe('stimulus markers on a sheet', () => {
     expect(names(sheet)).toEqual(['Marked']);
   });
 
+  it('follow the paper speed', () => {
+    const recording = rendered(true, { stimulusMarkers: true, speedMmPerS: 50 }, 4);
+    const [segment] = sheetOf(recording).segments;
+    expect(strokes(sheetOf(recording)).map((stroke) => stroke.x1Mm)).toEqual(
+      recording.stimulusMarkersS?.map((timeS) => expect.closeTo(segment.xMm + 50 * timeS, 9) as number),
+    );
+  });
+
   it('stand above the ladder, under every line of a long strip', () => {
     const sheet = sheetOf(rendered(true, { stimulusMarkers: true, ladder: true }, 25));
     expect(names(sheet)).toHaveLength(3);
